@@ -1,0 +1,23 @@
+import type { Metadata } from 'next';
+import { cookies, headers } from 'next/headers';
+import { archivo, serif, serifGreek } from './_fonts/fonts';
+import './globals.css';
+
+export const metadata: Metadata = {
+  title: { default: 'Antiphon', template: '%s · Antiphon' },
+  description: 'Plans multi-station VLBI sessions and keeps the stations’ clock log.',
+};
+
+export default async function RootLayout({ children }: { children: React.ReactNode }) {
+  await headers();
+  const theme = (await cookies()).get('antiphon_theme')?.value;
+  return (
+    <html
+      lang="en"
+      data-theme={theme === 'day' || theme === 'night' ? theme : undefined}
+      className={`${archivo.variable} ${serif.variable} ${serifGreek.variable}`}
+    >
+      <body>{children}</body>
+    </html>
+  );
+}

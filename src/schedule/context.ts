@@ -1,0 +1,61 @@
+import type { GaussianComponent } from '../array/structure';
+import type { Geodetic, HorizonPoint, Interval, Mount, SkyPosition } from '../sky/types';
+import type { StationCode } from './plan';
+
+export type PlanStation = {
+  code: StationCode;
+  name: string;
+  site: Geodetic;
+  minElevationDeg: number;
+  maxElevationDeg: number;
+  horizon: HorizonPoint[];
+  mount: Mount;
+  bits: 1 | 2;
+  /** zenith SEFD per polarisation by band; a band that is absent is not known */
+  sefdJy: Readonly<Record<string, number>>;
+};
+
+export type SourceRole = 'target' | 'phase-ref' | 'finder' | 'polarisation';
+
+export type PlanSource = {
+  id: string;
+  name: string;
+  position: SkyPosition;
+  role: SourceRole;
+  /** model by band; a band that is absent is not known */
+  components: Readonly<Record<string, readonly GaussianComponent[]>>;
+};
+
+export type PlanMode = {
+  id: string;
+  name: string;
+  band: string;
+  /** centre of the band on the sky */
+  skyHz: number;
+  channelBandwidthHz: number;
+  channelsPerPolarisation: number;
+  polarisations: 1 | 2;
+  bits: 1 | 2;
+  /** atmosphere's coherence time; null = no loss is taken, and the screen says so */
+  coherenceSeconds: number | null;
+};
+
+export type PlanSettings = {
+  /** lowest elevation for all stations, on top of masks */
+  minElevationDeg: number;
+  /** least spare time after a slew */
+  leastSpareSeconds: number;
+  /** lower limits of the verdict words; below doubtful is none */
+  snrLimits: { doubtful: number; fair: number; strong: number };
+};
+
+export type PlanContext = {
+  stations: Readonly<Record<StationCode, PlanStation>>;
+  sources: Readonly<Record<string, PlanSource>>;
+  modes: Readonly<Record<string, PlanMode>>;
+  away: Readonly<Record<StationCode, readonly (Interval & { why: string })[]>>;
+  /** last reading of each station's clock; empty until a clock log exists */
+  clockReadAtMs: Readonly<Record<StationCode, number>>;
+  nowMs: number;
+  settings: PlanSettings;
+};

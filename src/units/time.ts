@@ -1,0 +1,2 @@
+/** Half-open span of UTC, [start, end). */
+export type Interval = { start: Date; end: Date };
