@@ -1,0 +1,5 @@
+import { database } from '../db/client';
+import { migrateDatabase } from '../db/migrate';
+
+await migrateDatabase();
+database().client.close();
