@@ -1,0 +1,31 @@
+import { existsSync } from 'node:fs';
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+
+export const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
+process.chdir(root);
+process.env.NEXT_TELEMETRY_DISABLED = '1';
+
+const [major, minor] = process.versions.node.split('.').map(Number);
+if (major < 20 || (major === 20 && minor < 12)) {
+  console.error(`Antiphon needs Node 20.12 or newer; this is ${process.versions.node}.`);
+  process.exit(1);
+}
+if (existsSync('.env')) process.loadEnvFile('.env');
+process.env.DATABASE_URL ||= 'file:.data/antiphon.db';
+
+export const nextBin = path.join(root, 'node_modules/next/dist/bin/next');
+
+/** The same rule as src/env.ts: on for a local file unless switched off, never for a remote database. */
+export function isDemo() {
+  const isLocal = process.env.DATABASE_URL.startsWith('file:');
+  return isLocal && !['0', 'false', 'off'].includes(process.env.ANTIPHON_DEMO);
+}
+
+/** Says one sentence and ends. */
+export function stop(sentence) {
+  console.error(`[antiphon] ${sentence}`);
+  process.exit(1);
+}
+
+export const say = (text) => console.log(`[antiphon] ${text}`);
