@@ -42,3 +42,33 @@ export type Plan = {
   scans: readonly Scan[];
   groups: readonly NoddingGroup[];
 };
+
+/**
+ * Order of scans in a plan: by start, then by id.
+ *
+ * @returns negative when a comes first, positive when b does, 0 for the same scan
+ */
+export function compareScans(a: Scan, b: Scan): number {
+  return a.startMs - b.startMs || (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
+}
+
+/**
+ * The instant a scan ends for those who leave with it.
+ *
+ * @returns epoch ms, UTC; the scan holds [startMs, stop)
+ */
+export function scanStopMs(scan: Pick<Scan, 'startMs' | 'lengthSeconds'>): number {
+  return scan.startMs + scan.lengthSeconds * 1000;
+}
+
+/**
+ * When one station is on source in a scan: the scan's span less what it joins late and leaves early.
+ *
+ * @returns epoch ms, UTC, half-open [startMs, stopMs)
+ */
+export function stationOnMs(scan: Scan, member: ScanStation): { startMs: number; stopMs: number } {
+  return {
+    startMs: scan.startMs + member.lateSeconds * 1000,
+    stopMs: scanStopMs(scan) - member.earlySeconds * 1000,
+  };
+}
