@@ -1,0 +1,106 @@
+import 'server-only';
+import { asc, eq, inArray } from 'drizzle-orm';
+import type { Database } from '../../../db/client';
+import { modes } from '../../../db/schema/modes';
+import { sessionSources } from '../../../db/schema/session-sources';
+import { sourceBands } from '../../../db/schema/source-bands';
+import { sources } from '../../../db/schema/sources';
+import { stationBands } from '../../../db/schema/station-bands';
+import { stations } from '../../../db/schema/stations';
+import type { GaussianComponent } from '../../array/structure';
+import type { PlanMode } from '../../schedule/context';
+import type { HorizonPoint } from '../../sky/types';
+import type { TimelineSource, TimelineStation } from './dto';
+
+const RAD_PER_MAS = Math.PI / 648_000_000;
+
+export async function readStations(from: Database, codes: readonly string[]): Promise<TimelineStation[]> {
+  const rows = await from
+    .select()
+    .from(stations)
+    .where(inArray(stations.code, [...codes]))
+    .orderBy(asc(stations.code));
+  const bands = await from
+    .select()
+    .from(stationBands)
+    .where(inArray(stationBands.stationCode, [...codes]));
+  return rows.map((row) => ({
+    code: row.code,
+    name: row.name,
+    site: { latitudeDeg: row.latitudeDeg, longitudeDeg: row.longitudeDeg, heightM: row.heightM },
+    minElevationDeg: row.minElevationDeg,
+    maxElevationDeg: row.maxElevationDeg,
+    horizon: horizonOf(row.horizon),
+    mount: {
+      kind: row.mountKind,
+      azimuth: {
+        minDeg: row.axis1MinDeg,
+        maxDeg: row.axis1MaxDeg,
+        rateDegPerS: row.axis1RateDegPerS,
+        accelDegPerS2: row.axis1AccelDegPerS2,
+      },
+      elevation: {
+        minDeg: row.axis2MinDeg,
+        maxDeg: row.axis2MaxDeg,
+        rateDegPerS: row.axis2RateDegPerS,
+        accelDegPerS2: row.axis2AccelDegPerS2,
+      },
+      settleSeconds: row.settleSeconds,
+    },
+    bits: row.bits === 1 ? 1 : 2,
+    sefdJy: Object.fromEntries(
+      bands.filter((band) => band.stationCode === row.code).map((band) => [band.band, band.sefdJy]),
+    ),
+    timeZone: row.timeZone,
+    dishM: row.dishM,
+  }));
+}
+
+export async function readSources(from: Database, sessionId: string): Promise<TimelineSource[]> {
+  const rows = await from
+    .select({
+      id: sources.id,
+      name: sources.name,
+      raDeg: sources.raDeg,
+      decDeg: sources.decDeg,
+      role: sources.role,
+      wantedScans: sessionSources.wantedScans,
+    })
+    .from(sessionSources)
+    .innerJoin(sources, eq(sources.id, sessionSources.sourceId))
+    .where(eq(sessionSources.sessionId, sessionId))
+    .orderBy(asc(sources.raDeg), asc(sources.id));
+  const bands = await from
+    .select({ band: sourceBands })
+    .from(sourceBands)
+    .innerJoin(sessionSources, eq(sessionSources.sourceId, sourceBands.sourceId))
+    .where(eq(sessionSources.sessionId, sessionId));
+  return rows.map(({ raDeg, decDeg, ...row }) => ({
+    ...row,
+    position: { raDeg, decDeg },
+    components: Object.fromEntries(
+      bands
+        .filter(({ band }) => band.sourceId === row.id)
+        .map(({ band }) => [band.band, [roundGaussian(band.fluxJy, band.sizeMas ?? 0)]]),
+    ),
+  }));
+}
+
+export async function readModes(from: Database): Promise<PlanMode[]> {
+  const rows = await from.select().from(modes).orderBy(asc(modes.name));
+  return rows.map((row) => ({
+    ...row,
+    polarisations: row.polarisations === 1 ? 1 : 2,
+    bits: row.bits === 1 ? 1 : 2,
+  }));
+}
+
+function horizonOf(stored: string): HorizonPoint[] {
+  const corners = JSON.parse(stored) as [azimuthDeg: number, elevationDeg: number][];
+  return corners.map(([azimuthDeg, elevationDeg]) => ({ azimuthDeg, elevationDeg }));
+}
+
+function roundGaussian(fluxJy: number, sizeMas: number): GaussianComponent {
+  const fwhmRad = sizeMas * RAD_PER_MAS;
+  return { fluxJy, majorRad: fwhmRad, minorRad: fwhmRad, positionAngleRad: 0, eastRad: 0, northRad: 0 };
+}

@@ -1,0 +1,65 @@
+import 'server-only';
+import { eq, sql } from 'drizzle-orm';
+import { db } from '../../../db/client';
+import { modes } from '../../../db/schema/modes';
+import { scans } from '../../../db/schema/scans';
+import { sessionSources } from '../../../db/schema/session-sources';
+import { sessionStations } from '../../../db/schema/session-stations';
+import { sessions } from '../../../db/schema/sessions';
+import { can, whoCanGrant, type Viewer } from '../../access/policy';
+import { nowMs } from '../../env';
+import { answer, forbidden, type Failure } from '../errors';
+import { derivedState, type SessionHead, type SessionListItem } from './dto';
+import { fetchSession, readableBy, subjectOf } from './scope';
+
+/** The sessions the viewer may know of, newest start first. */
+export const listSessions = (viewer: Viewer): Promise<{ ok: true; sessions: SessionListItem[] } | Failure> =>
+  answer(async () => {
+    if (!can(viewer, 'session.list')) throw forbidden(whoCanGrant('session.list').message);
+    const rows = await db()
+      .select({
+        id: sessions.id,
+        code: sessions.code,
+        title: sessions.title,
+        state: sessions.state,
+        startMs: sessions.startMs,
+        lengthSeconds: sessions.lengthSeconds,
+        modeName: modes.name,
+        stations: sql<string>`(SELECT json_group_array(${sessionStations.stationCode} ORDER BY ${sessionStations.stationCode}) FROM ${sessionStations} WHERE ${sessionStations.sessionId} = ${sessions.id})`,
+        sourceCount: sql<number>`(SELECT count(*) FROM ${sessionSources} WHERE ${sessionSources.sessionId} = ${sessions.id})`,
+        scanCount: sql<number>`(SELECT count(*) FROM ${scans} WHERE ${scans.sessionId} = ${sessions.id})`,
+      })
+      .from(sessions)
+      .innerJoin(modes, eq(modes.id, sessions.modeId))
+      .where(readableBy(viewer))
+      .orderBy(sql`${sessions.startMs} DESC`, sessions.code);
+    const now = nowMs();
+    return { ok: true, sessions: rows.map((row) => listItem(viewer, row, now)) };
+  });
+
+/** What stands in the title block; for pages of a session that are not its plan. */
+export const readSession = (
+  viewer: Viewer,
+  key: string,
+): Promise<{ ok: true; session: SessionHead } | Failure> =>
+  answer(async () => {
+    const row = await fetchSession(db(), viewer, key);
+    const { id, code, title, startMs, lengthSeconds, stations } = row;
+    const state = derivedState(row, nowMs());
+    return { ok: true, session: { id, code, title, state, startMs, lengthSeconds, stations } };
+  });
+
+function listItem(
+  viewer: Viewer,
+  row: Omit<SessionListItem, 'state' | 'stations' | 'canReadPlan' | 'scanCount'> & {
+    state: Parameters<typeof derivedState>[0]['state'];
+    stations: string;
+    scanCount: number;
+  },
+  now: number,
+): SessionListItem {
+  const stations = JSON.parse(row.stations) as string[];
+  const canReadPlan = can(viewer, 'plan.read-draft', subjectOf({ id: row.id, stations }));
+  const scanCount = canReadPlan ? row.scanCount : null;
+  return { ...row, state: derivedState(row, now), stations, scanCount, canReadPlan };
+}
