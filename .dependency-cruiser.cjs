@@ -31,6 +31,9 @@ const entry = [
   '/[a-z-]*actions?\\.ts$',
 ];
 
+// below app/api everything runs on the server: what its routes share is no component
+const noComponent = [...entry, '^app/api/'];
+
 module.exports = {
   forbidden: [
     only('units', [], 'units imports nothing'),
@@ -85,7 +88,7 @@ module.exports = {
       name: 'components-no-server-values',
       comment: 'a component gets plain props; of data it imports types only, of viewer, mail and db nothing',
       severity: 'error',
-      from: { path: '^app/', pathNot: entry },
+      from: { path: '^app/', pathNot: noComponent },
       to: {
         path: [
           '^src/(data|viewer|mail)/',
@@ -100,7 +103,7 @@ module.exports = {
       name: 'components-no-server-types',
       comment: 'types of rows stay behind the data layer: a component sees the DTOs of src/data',
       severity: 'error',
-      from: { path: '^app/', pathNot: entry },
+      from: { path: '^app/', pathNot: noComponent },
       to: { path: ['^src/(viewer|mail)/', '^db/', '^node_modules/(drizzle-orm|@libsql)/'] },
     },
     ...privateFolders().map(({ route, folder }) => ({

@@ -41,5 +41,5 @@ export function proxy(request: NextRequest) {
 
 // A request body over 10 MB that passes here is cut without a word: uploads live under api/uploads/, outside.
 export const config = {
-  matcher: ['/((?!api/uploads/|_next/static/|_next/image|icon\\.svg|favicon\\.ico).*)'],
+  matcher: ['/((?!api/uploads/|_next/static/|_next/image|icon\\.svg|favicon\\.ico|robots\\.txt).*)'],
 };

@@ -48,7 +48,10 @@ describe('the matcher', () => {
     expect(path).toMatch(pattern);
   });
 
-  it.each(['/_next/static/chunks/a.js', '/icon.svg', '/api/uploads/clock-log'])('leaves out %s', (path) => {
-    expect(path).not.toMatch(pattern);
-  });
+  it.each(['/_next/static/chunks/a.js', '/icon.svg', '/robots.txt', '/api/uploads/clock-log'])(
+    'leaves out %s',
+    (path) => {
+      expect(path).not.toMatch(pattern);
+    },
+  );
 });
