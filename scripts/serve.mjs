@@ -19,7 +19,8 @@ if (mode === 'start' && !existsSync('.next/BUILD_ID'))
   stop('There is no build yet: run `npm start`, which makes one.');
 await requireFreePort();
 
-const server = spawn(process.execPath, [nextBin, mode, '-H', host, '-p', String(port)], { stdio: 'inherit' });
+const args = ['--import', './scripts/with-parent.mjs', nextBin, mode, '-H', host, '-p', String(port)];
+const server = spawn(process.execPath, args, { stdio: 'inherit' });
 let leaving = false;
 
 server.on('error', (error) => stop(`The server could not start: ${error.message}`));
@@ -66,7 +67,7 @@ async function answering() {
 
 function announce() {
   const lines = [`Antiphon is at http://localhost:${port}`];
-  if (isDemo()) {
+  if (isDemo() && !process.env.STAGE) {
     lines.push(
       '',
       'The demo is on: an invented network, and these accounts, all with the password antiphon-demo',

@@ -3,10 +3,12 @@ import { mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import './settings.mjs';
 
-const folder = path.resolve('.data', process.env.STAGE || 'e2e');
+process.env.STAGE ||= 'e2e';
+const folder = path.resolve('.data', process.env.STAGE);
 rmSync(folder, { recursive: true, force: true });
 mkdirSync(folder, { recursive: true });
 
+process.env.LOG_LEVEL ||= 'warn';
 Object.assign(process.env, {
   DATABASE_URL: `file:${path.join(folder, 'antiphon.db')}`,
   PORT: process.env.E2E_PORT || '4317',
