@@ -1,16 +1,12 @@
 import { existsSync } from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
+import './require-node.mjs';
 
 export const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 process.chdir(root);
 process.env.NEXT_TELEMETRY_DISABLED = '1';
 
-const [major, minor] = process.versions.node.split('.').map(Number);
-if (major < 20 || (major === 20 && minor < 12)) {
-  console.error(`Antiphon needs Node 20.12 or newer; this is ${process.versions.node}.`);
-  process.exit(1);
-}
 if (existsSync('.env')) process.loadEnvFile('.env');
 process.env.DATABASE_URL ||= 'file:.data/antiphon.db';
 
