@@ -89,7 +89,17 @@ export default {
     transitionDuration: { press: '80ms', pick: '120ms', move: '160ms', theme: '240ms' },
     transitionTimingFunction: { DEFAULT: 'cubic-bezier(.2,0,0,1)' },
     extend: {
-      height: { ctl: '28px', 'ctl-sm': '24px', row: '24px', cell: '27px', bar: '38px', mast: '52px', touch: '52px', tabs: '62px', field: '40px' },
+      height: {
+        ctl: '28px',
+        'ctl-sm': '24px',
+        row: '24px',
+        cell: '27px',
+        bar: '38px',
+        mast: '52px',
+        touch: '52px',
+        tabs: '62px',
+        field: '40px',
+      },
       width: { tray: '176px', insp: '292px', 'insp-wide': '344px', head: '84px', margin: '24px' },
       outlineWidth: { ring: '2px' },
     },
