@@ -6,22 +6,47 @@ import { changeMs, highestMs } from './search';
 export type Margin = (ms: number) => number;
 
 /**
- * Spans in which a margin is at least zero.
+ * Spans in which a margin is at least zero, for nodes between which it rises or falls all the way.
  *
  * @param margin  continuous, or with jumps at the nodes only
- * @param nodes   epoch ms, rising, first and last are the ends of the span; between neighbours the margin has at most
- *                one extremum
- * @returns sorted and disjoint spans; touching ones joined
- * @throws RangeError if there are fewer than two nodes (programmer error)
+ * @param nodes   epoch ms, rising; first and last are the ends of the span
+ * @returns sorted and disjoint spans
  *
- * Error   edges ≤ 0.5 ms; a dip or a peak between nodes is found when a neighbouring node's slope shows it, its depth
- *         within 2·10⁻⁷°
- * Source  extrema between nodes by golden section where three neighbours turn, edges by bisection: so a grazing
- *         culmination is neither lost nor invented
+ * Error   edges ≤ 0.5 ms
+ * Source  bisection between nodes of different sign
+ */
+export function spansBetweenTurns(margin: Margin, nodes: readonly number[]): Spans {
+  return spansThrough(
+    margin,
+    nodes.map((ms) => ({ ms, value: margin(ms) })),
+  );
+}
+
+/**
+ * Spans in which a margin is at least zero, for nodes between which it turns once at most.
+ *
+ * @param margin  continuous, or with jumps at the nodes only
+ * @param nodes   epoch ms, rising; first and last are the ends of the span
+ * @returns sorted and disjoint spans
+ *
+ * Error   edges ≤ 0.5 ms; the height of a turn ≤ 2·10⁻⁷°
+ * Source  turns by golden section where three neighbours show one, so a grazing one is neither lost nor invented;
+ *         then spansBetweenTurns
  */
 export function spansWhere(margin: Margin, nodes: readonly number[]): Spans {
-  if (nodes.length < 2) throw new RangeError('A span has two ends');
-  const points = withExtrema(margin, nodes);
+  return spansThrough(margin, withExtrema(margin, nodes));
+}
+
+/** Whole steps over a span, both ends included. */
+export function stepsOver(span: Interval, stepMs: number): number[] {
+  const [startMs, endMs] = [span.start.getTime(), span.end.getTime()];
+  const count = Math.max(1, Math.ceil((endMs - startMs) / stepMs));
+  return Array.from({ length: count + 1 }, (_, index) => startMs + ((endMs - startMs) * index) / count);
+}
+
+type Point = { ms: number; value: number };
+
+function spansThrough(margin: Margin, points: readonly Point[]): Spans {
   const spans: [number, number][] = [];
   let sinceMs: number | null = null;
   points.forEach((point, index) => {
@@ -39,15 +64,6 @@ export function spansWhere(margin: Margin, nodes: readonly number[]): Spans {
   if (sinceMs !== null && last) spans.push([sinceMs, last.ms]);
   return spans;
 }
-
-/** Whole steps over a span, both ends included. */
-export function stepsOver(span: Interval, stepMs: number): number[] {
-  const [startMs, endMs] = [span.start.getTime(), span.end.getTime()];
-  const count = Math.max(1, Math.ceil((endMs - startMs) / stepMs));
-  return Array.from({ length: count + 1 }, (_, index) => startMs + ((endMs - startMs) * index) / count);
-}
-
-type Point = { ms: number; value: number };
 
 /** Adds the extremum between three neighbours where it could turn the sign of all three. */
 function withExtrema(margin: Margin, nodes: readonly number[]): Point[] {
