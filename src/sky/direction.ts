@@ -25,7 +25,7 @@ export function catalogueDirection(source: SkyPosition): Vector3 {
  * @param velocity   of the observer, in units of c, same axes
  * @returns unit vector
  *
- * Source  special relativity; Explanatory Supplement 3rd ed. 2013, eq. 7.40; the same form as ERFA ab, without its
+ * Source  special relativity; Explanatory Supplement 3rd ed. 2013, ch. 7 (memory); the same form as ERFA ab, without its
  *         solar-potential term (0.4 µas)
  */
 export function aberrated(direction: Vector3, velocity: Vector3): Vector3 {

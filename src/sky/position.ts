@@ -20,7 +20,7 @@ export type RotationOptions = { dut1Seconds?: number };
  *
  * Error   ≤ 0.1″ against ERFA atco13 (tests/sky/position.test.ts); limits as earthFrameAt
  * Source  precession, nutation, sidereal time: astronomy-engine; annual and diurnal aberration: Explanatory
- *         Supplement 3rd ed. 2013, §7.2; sign conventions as ERFA hd2ae
+ *         Supplement 3rd ed. 2013, ch. 7; sign conventions as ERFA hd2ae
  */
 export function azEl(source: SkyPosition, site: Geodetic, at: Date, opts: RotationOptions = {}): AzEl {
   const frame = earthFrameAt(at.getTime(), opts.dut1Seconds);
@@ -38,7 +38,7 @@ export function azEl(source: SkyPosition, site: Geodetic, at: Date, opts: Rotati
  *
  * Error   ≤ 0.002° against ERFA hd2pa where el < 89° (tests/sky/position.test.ts); diurnal aberration is left out
  *         (0.3″ / tan of the zenith distance)
- * Source  TMS eq. 4.24, both arguments times cos φ so that it holds at the Earth's poles
+ * Source  spherical triangle (sign as ERFA hd2pa), both arguments times cos φ so that it holds at the Earth's poles
  */
 export function parallacticAngleDeg(
   source: SkyPosition,

@@ -85,7 +85,7 @@ export type SiteFrame = {
  *           mount's pointing model holds them)
  * @throws RangeError if an input is not finite or the latitude is out of range (programmer error)
  *
- * Source  TMS §4.2; diurnal aberration: Explanatory Supplement 3rd ed. 2013, §7.2
+ * Source  TMS ch. 4; diurnal aberration: Explanatory Supplement 3rd ed. 2013, ch. 7 (memory)
  */
 export function siteFrame(g: Geodetic): SiteFrame {
   const { x, y } = geodeticToItrf(g);
