@@ -16,8 +16,9 @@ import { celestialBaseline } from './celestial';
  * @returns seconds, negative when the second station is nearer to the source; rate, s/s
  * @throws RangeError if an input is not finite or out of range (programmer error)
  *
- * Error   ≤ 3·10⁻⁶ of |b|/c (as −w/c, tests/array/uvw.test.ts), rate ≤ 2·10⁻⁴ of |b|ω/c against ERFA (tests/array/delay.test.ts). Left out: the second
- *         station's motion during the delay (up to 0.03 µs), relativity, atmosphere, polar motion
+ * Error   ≤ 3·10⁻⁶ of |b|/c (as −w/c, tests/array/uvw.test.ts); rate ≤ 2·10⁻⁴ of |b|ω/c against ERFA's catalogue
+ *         direction (tests/array/delay.test.ts). Left out: the second station's motion during the delay (up to
+ *         0.03 µs), relativity, atmosphere, polar motion
  * Source  science: τ = −b·ŝ/c (TMS ch. 4), its derivative with the Earth’s rotation
  */
 export function geometricDelay(

@@ -36,8 +36,8 @@ const HALF_TURN_MS = 43_082_045;
  * @returns sorted, disjoint, half-open intervals inside the span, edges on milliseconds; empty if never
  * @throws RangeError if an input is not finite or out of range (programmer error)
  *
- * Error   edges ≤ 0.1 s or, where the source moves along a limit, what 0.1″ of elevation is worth: tested to 1 s or 0.002°
- *         against ERFA (tests/sky/windows.test.ts)
+ * Error   edges ≤ 0.1 s or, where the source moves along a limit, what 0.1″ of elevation is worth; tested against
+ *         ERFA to 1 s or 0.002° (tests/sky/windows.test.ts)
  * Source  science: exact geometry cut at the culminations, where elevation turns; masks sampled each minute, each corner
  *         and extremum refined
  */
