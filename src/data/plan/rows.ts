@@ -13,7 +13,9 @@ import { unpackPlan, type GroupRow, type PlanRows, type ScanRow } from '../../sc
 import type { SessionRow } from '../session/scope';
 import type { Revs } from './dto';
 
-const scansJson = (where: SQL) => sql<string>`(
+type StoredPlan = { startMs: number; lengthSeconds: number; scans: string; groups: string };
+
+const scansJson = (where: SQL) => sql`(
   SELECT json_group_array(json_array(
     ${scans.id}, ${scans.sourceId}, ${scans.modeId}, (${scans.startMs} - ${sessions.startMs}) / 1000,
     ${scans.lengthSeconds},
@@ -23,7 +25,7 @@ const scansJson = (where: SQL) => sql<string>`(
     ${scans.groupId}, ${scans.leg}, ${scans.comment}) ORDER BY ${scans.startMs}, ${scans.id})
   FROM ${scans} WHERE ${scans.sessionId} = ${sessions.id} AND ${where})`;
 
-const groupsJson = (where: SQL) => sql<string>`(
+const groupsJson = (where: SQL) => sql`(
   SELECT json_group_array(json_array(
     ${groups.id}, ${groups.targetId}, ${groups.calibratorId}, ${groups.targetOnSeconds},
     ${groups.calibratorOnSeconds}, ${groups.turnSeconds}, ${groups.first}) ORDER BY ${groups.id})
@@ -34,17 +36,14 @@ export async function readPlanRows(
   from: Database | Tx,
   session: SessionRow,
 ): Promise<{ plan: PlanRows; revs: Revs; seq: number }> {
-  const [row] = await from
-    .select({
-      startMs: sessions.startMs,
-      lengthSeconds: sessions.lengthSeconds,
-      scans: scansJson(sql`1`),
-      groups: groupsJson(sql`1`),
-      revs: sql<string>`(SELECT json_group_object(${subjects.id}, ${subjects.rev}) FROM ${subjects} WHERE ${subjects.sessionId} = ${sessions.id})`,
-      seq: sql<number>`(SELECT coalesce(max(${journal.seq}), 0) FROM ${journal} WHERE ${journal.sessionId} = ${sessions.id})`,
-    })
-    .from(sessions)
-    .where(sql`${sessions.id} = ${session.id}`);
+  const [row] = await from.all<StoredPlan & { revs: string; seq: number }>(sql`
+    SELECT ${sessions.startMs} AS startMs, ${sessions.lengthSeconds} AS lengthSeconds,
+      ${scansJson(sql`true`)} AS scans, ${groupsJson(sql`true`)} AS groups,
+      (SELECT json_group_object(${subjects.id}, ${subjects.rev}) FROM ${subjects}
+        WHERE ${subjects.sessionId} = ${sessions.id}) AS revs,
+      (SELECT coalesce(max(${journal.seq}), 0) FROM ${journal}
+        WHERE ${journal.sessionId} = ${sessions.id}) AS seq
+    FROM ${sessions} WHERE ${sessions.id} = ${session.id}`);
   if (!row) throw new Error(`Session ${session.id} went away while it was read.`);
   return { plan: planRows(session, row), revs: JSON.parse(row.revs) as Revs, seq: row.seq };
 }
@@ -73,15 +72,10 @@ export async function readSubjects(
   const scanIsAsked = sql`(${scans.id} IN ${asked} OR ${scans.groupId} IN ${oneOf(withLegsOf)})`;
   const groupIsAsked = sql`(${groups.id} IN ${asked} OR ${groups.id} IN (
     SELECT ${scans.groupId} FROM ${scans} WHERE ${scans.sessionId} = ${sessions.id} AND ${scanIsAsked} AND ${scans.groupId} IS NOT NULL))`;
-  const [row] = await tx
-    .select({
-      startMs: sessions.startMs,
-      lengthSeconds: sessions.lengthSeconds,
-      scans: scansJson(scanIsAsked),
-      groups: groupsJson(groupIsAsked),
-    })
-    .from(sessions)
-    .where(sql`${sessions.id} = ${session.id}`);
+  const [row] = await tx.all<StoredPlan>(sql`
+    SELECT ${sessions.startMs} AS startMs, ${sessions.lengthSeconds} AS lengthSeconds,
+      ${scansJson(scanIsAsked)} AS scans, ${groupsJson(groupIsAsked)} AS groups
+    FROM ${sessions} WHERE ${sessions.id} = ${session.id}`);
   if (!row) throw new Error(`Session ${session.id} went away while it was changed.`);
   return unpackPlan(planRows(session, row));
 }
@@ -89,10 +83,7 @@ export async function readSubjects(
 export const oneOf = (values: readonly (string | number)[]): SQL =>
   sql`(SELECT value FROM json_each(${JSON.stringify(values)}))`;
 
-function planRows(
-  session: SessionRow,
-  row: { startMs: number; lengthSeconds: number; scans: string; groups: string },
-): PlanRows {
+function planRows(session: SessionRow, row: StoredPlan): PlanRows {
   return {
     sessionId: session.id,
     startMs: row.startMs,
