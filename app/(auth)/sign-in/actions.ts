@@ -20,7 +20,7 @@ const schema = z.object({
   email: z
     .string()
     .trim()
-    .min(1, 'Enter your e-mail.')
+    .min(1, { error: 'Enter your e-mail.', abort: true })
     .max(254, 'An e-mail has at most 254 characters.')
     .regex(/^[^\s@]+@[^\s@]+$/, 'An e-mail has the form name@place.'),
   password: z.string().min(1, 'Enter your password.').max(256, 'A password has at most 256 characters.'),
@@ -32,7 +32,7 @@ export async function signIn(_: SignInState, form: FormData): Promise<SignInStat
   const parsed = schema.safeParse({ email: typed ?? '', password: form.get('password') ?? '' });
   if (!parsed.success) {
     const { fieldErrors: fields } = z.flattenError(parsed.error);
-    return { ok: false, code: 'invalid', message: 'Something is missing below.', fields, email };
+    return { ok: false, code: 'invalid', message: 'Look at what is said below.', fields, email };
   }
   const answer = await startLogin(parsed.data.email, parsed.data.password);
   if (!answer.ok) {
