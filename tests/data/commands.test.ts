@@ -13,10 +13,10 @@ import {
   newId,
   sourceId,
   START_MS,
-  useDatabase,
+  openDatabase,
 } from '@/tests/helpers/database';
 
-useDatabase();
+openDatabase();
 
 let session: { id: string; code: string };
 let anna: Viewer;

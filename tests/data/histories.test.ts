@@ -8,9 +8,9 @@ import { replay } from '@/src/schedule/journal';
 import { emptyJournal, takeDo, takeRedo, takeUndo, type Journal } from '@/src/schedule/journal-memory';
 import type { Plan, Scan } from '@/src/schedule/plan';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { makeScan, makeSession, makeViewer, newId, START_MS, useDatabase } from '@/tests/helpers/database';
+import { makeScan, makeSession, makeViewer, newId, START_MS, openDatabase } from '@/tests/helpers/database';
 
-useDatabase();
+openDatabase();
 
 type Move = { who: 0 | 1; what: 'add' | 'move' | 'remove' | 'undo' | 'redo'; scan: number; seconds: number };
 

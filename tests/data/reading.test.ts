@@ -5,9 +5,9 @@ import { takeAct } from '@/src/data/plan/write';
 import { derivedState } from '@/src/data/session/dto';
 import { listSessions, readSession } from '@/src/data/session/read';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { makeScan, makeSession, makeViewer, newId, NOW, useDatabase } from '@/tests/helpers/database';
+import { makeScan, makeSession, makeViewer, newId, NOW, openDatabase } from '@/tests/helpers/database';
 
-useDatabase();
+openDatabase();
 
 const body = () => ({
   kind: 'do',

@@ -5,11 +5,11 @@ import { GET } from '@/app/api/sessions/[sessionId]/journal/route';
 import { database } from '@/db/client';
 import { signIn } from '@/src/viewer/login';
 import { jar } from '@/tests/helpers/cookie-jar';
-import { makeScan, makeSession, newId, useDatabase } from '@/tests/helpers/database';
+import { makeScan, makeSession, newId, openDatabase } from '@/tests/helpers/database';
 
 vi.mock('next/headers', async () => (await import('@/tests/helpers/cookie-jar')).headersModule);
 
-useDatabase();
+openDatabase();
 
 const HOST = 'antiphon.example';
 const body = (over = {}) => ({

@@ -2,10 +2,10 @@ import { readdirSync } from 'node:fs';
 import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { database } from '@/db/client';
-import { makeScan, makeSession, makeViewer, newId, useDatabase } from '@/tests/helpers/database';
+import { makeScan, makeSession, makeViewer, newId, openDatabase } from '@/tests/helpers/database';
 import { takeAct } from '@/src/data/plan/write';
 
-useDatabase();
+openDatabase();
 
 const run = (sql: string) => database().client.execute(sql);
 

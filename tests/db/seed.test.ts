@@ -6,9 +6,9 @@ import { demoStartMs, seedDemo } from '@/db/seed';
 import { SOURCES } from '@/db/seed-data/sources';
 import { takeAct } from '@/src/data/plan/write';
 import { SIDEREAL_DAY_SECONDS } from '@/src/units/constants';
-import { makeScan, makeViewer, newId, NOW, useDatabase } from '@/tests/helpers/database';
+import { makeScan, makeViewer, newId, NOW, openDatabase } from '@/tests/helpers/database';
 
-useDatabase({ isSeeded: false });
+openDatabase({ isSeeded: false });
 
 const now = Date.parse(NOW);
 const day = 86_400_000;

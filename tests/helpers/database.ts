@@ -19,7 +19,7 @@ export const MODE_ID = seedId('mode', '22 GHz');
 export const sourceId = (name: string) => seedId('source', name);
 
 /** A real file of its own for the test file that calls it, migrated, with the demo in it. */
-export function useDatabase({ isSeeded = true } = {}): void {
+export function openDatabase({ isSeeded = true } = {}): void {
   const folder = mkdtempSync(path.join(tmpdir(), 'antiphon-test-'));
   process.env.DATABASE_URL = `file:${path.join(folder, 'test.db')}`;
   process.env.ANTIPHON_NOW = NOW;

@@ -5,11 +5,11 @@ import { seedDemo } from '@/db/seed';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { signIn } from '@/src/viewer/login';
 import { jar } from '@/tests/helpers/cookie-jar';
-import { NOW, useDatabase } from '@/tests/helpers/database';
+import { NOW, openDatabase } from '@/tests/helpers/database';
 
 vi.mock('next/headers', async () => (await import('@/tests/helpers/cookie-jar')).headersModule);
 
-useDatabase({ isSeeded: false });
+openDatabase({ isSeeded: false });
 process.env.ANTIPHON_DEMO = '0';
 process.env.ANTIPHON_NOW = '';
 

@@ -7,7 +7,7 @@ import { currentViewer } from '@/src/viewer/current-viewer';
 import { passwordMatches } from '@/src/viewer/password';
 import { safeReturnPath } from '@/src/viewer/return-path';
 import { jar } from '@/tests/helpers/cookie-jar';
-import { useDatabase } from '@/tests/helpers/database';
+import { openDatabase } from '@/tests/helpers/database';
 
 vi.mock('next/headers', async () => (await import('@/tests/helpers/cookie-jar')).headersModule);
 vi.mock('next/navigation', () => ({
@@ -16,7 +16,7 @@ vi.mock('next/navigation', () => ({
   },
 }));
 
-useDatabase();
+openDatabase();
 
 const form = (email: string, password: string, next?: string) => {
   const data = new FormData();

@@ -15,7 +15,7 @@ import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { ActFailure, Revs, Taken } from './dto';
 import { parseAct, type ActInput } from './input';
 import { commandOf, decideStep, findAct, readChanges, readSteps, revsOf, subjectState } from './journal';
-import { oneOf, readSubjects, readTouched } from './rows';
+import { readSubjects, readTouched } from './rows';
 import { saveDifference } from './save';
 import { changeSentence, subjectWords } from './sentences';
 
