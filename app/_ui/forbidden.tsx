@@ -1,0 +1,33 @@
+import Link from 'next/link';
+import { ROLES, roleLabel, whoCanGrant, type Verb, type Viewer } from '@/src/access/policy';
+import { BareFrame } from './bare-frame';
+import { EmptySheet } from './empty-sheet';
+
+/** A page that the viewer's roles have no part in: which right it takes, and who can give it. */
+export function Forbidden({ verb, viewer }: { verb: Verb; viewer: Viewer | null }) {
+  const { heading, message } = whoCanGrant(verb);
+  const labels = ROLES.flatMap((role) => viewer?.grants.filter((grant) => grant.role === role) ?? []).map(
+    roleLabel,
+  );
+  return (
+    <BareFrame status="403">
+      <EmptySheet
+        heading={heading}
+        actions={
+          <Link href="/sessions" className="btn btn-primary">
+            Sessions
+          </Link>
+        }
+      >
+        {labels.length > 0 ? (
+          <>
+            You are signed in as <b>{labels.join(', ')}</b>.{' '}
+          </>
+        ) : (
+          'You have no role yet. '
+        )}
+        {message}
+      </EmptySheet>
+    </BareFrame>
+  );
+}
