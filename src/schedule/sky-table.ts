@@ -1,0 +1,150 @@
+import { prepareSite, trackElevationDeg, tracksOf } from '../sky/track';
+import type { Interval, SkyStation } from '../sky/types';
+import { overlap, windowsFor } from '../sky/windows';
+import type { PlanSettings, PlanSource, PlanStation } from './context';
+import type { StationCode } from './plan';
+
+type Span = readonly [startMs: number, endMs: number];
+
+/** Elevations and windows of a session's sources, small enough to travel: what ribbons and counts are drawn from. */
+export type SkyTable = {
+  startMs: number;
+  stepSeconds: number;
+  /** hundredths of a degree at startMs + n · step, by source and station */
+  elevations: Readonly<Record<string, Readonly<Record<StationCode, readonly number[]>>>>;
+  /** times above mask and limits, whole milliseconds */
+  windows: Readonly<Record<string, Readonly<Record<StationCode, readonly Span[]>>>>;
+  /** times when at least n + 1 stations see the source */
+  common: Readonly<Record<string, readonly (readonly Span[])[]>>;
+};
+
+/** So far apart that the table stays small and a straight line between is below a pixel on the sheet. */
+const STEP_SECONDS = 600;
+
+/**
+ * Elevations every ten minutes, windows, and common windows of at least 1 … n stations.
+ *
+ * @param settings  minElevationDeg holds on top of each station's own limit
+ * @param span      half-open span of UTC
+ * @returns nodes reach the span's end or go past it by less than a step
+ *
+ * Error   windows as `visibilityWindows`; elevations rounded to 0.01°
+ */
+export function skyTable(
+  stations: readonly PlanStation[],
+  sources: readonly PlanSource[],
+  settings: Pick<PlanSettings, 'minElevationDeg'>,
+  span: Interval,
+): SkyTable {
+  const startMs = span.start.getTime();
+  const steps = Math.ceil((span.end.getTime() - startMs) / (STEP_SECONDS * 1000)) + 1;
+  const places = sources.map((source) => source.position);
+  const tracks = tracksOf(places, span);
+  const sites = stations.map((station) => prepareSite(station.site));
+  const windows = windowsFor(
+    places,
+    stations.map((station) => skyStation(station, settings)),
+    span,
+  );
+  const elevationsOf = (track: (typeof tracks)[number]) =>
+    stations.map((station, index): [StationCode, number[]] => {
+      const site = sites[index] ?? station.site;
+      const at = (step: number) => trackElevationDeg(track, site, startMs + step * STEP_SECONDS * 1000);
+      return [station.code, Array.from({ length: steps }, (_, step) => Math.round(at(step) * 100))];
+    });
+  return {
+    startMs,
+    stepSeconds: STEP_SECONDS,
+    elevations: Object.fromEntries(
+      sources.map((source, index) => {
+        const track = tracks[index];
+        return [source.id, track ? Object.fromEntries(elevationsOf(track)) : {}];
+      }),
+    ),
+    windows: Object.fromEntries(
+      sources.map((source, index) => [
+        source.id,
+        Object.fromEntries(
+          stations.map((station, at) => [station.code, (windows[index]?.[at] ?? []).map(spanOf)]),
+        ),
+      ]),
+    ),
+    common: Object.fromEntries(
+      sources.map((source, index) => [
+        source.id,
+        stations.map((_, least) => overlap(windows[index] ?? [], least + 1).map(spanOf)),
+      ]),
+    ),
+  };
+}
+
+/**
+ * A station's limits for a session: its own, its mount's and the session's lowest elevation, by the stricter.
+ */
+export function skyStation(
+  station: PlanStation,
+  settings: Pick<PlanSettings, 'minElevationDeg'>,
+): SkyStation {
+  const { minDeg, maxDeg } = station.mount.elevation;
+  return {
+    site: station.site,
+    minElevationDeg: Math.max(station.minElevationDeg, settings.minElevationDeg, minDeg),
+    maxElevationDeg: Math.min(station.maxElevationDeg, maxDeg),
+    horizon: station.horizon,
+  };
+}
+
+/**
+ * Elevation by straight line between the table's nodes; the end nodes hold outside.
+ *
+ * @returns degrees; null if the table lacks the pair
+ *
+ * Error   ≤ 0.03° from 0° to 60° of elevation, ≤ 0.15° to 85°, 1.3° where a source passes through the zenith or,
+ *         under the horizon, the nadir (tests/schedule/sky-table.test.ts)
+ */
+export function tableElevationDeg(
+  table: SkyTable,
+  sourceId: string,
+  station: StationCode,
+  atMs: number,
+): number | null {
+  const nodes = table.elevations[sourceId]?.[station];
+  if (!nodes || nodes.length === 0) return null;
+  const at = Math.max(0, Math.min(nodes.length - 1, (atMs - table.startMs) / (table.stepSeconds * 1000)));
+  const left = nodes[Math.floor(at)] ?? 0;
+  const right = nodes[Math.min(nodes.length - 1, Math.floor(at) + 1)] ?? left;
+  return (left + (right - left) * (at - Math.floor(at))) / 100;
+}
+
+/**
+ * How many stations see a source, as steps over the whole span.
+ *
+ * @returns adjoining steps, each with a count; adjacent ones differ
+ */
+export function stationsUp(
+  table: SkyTable,
+  sourceId: string,
+  fromMs: number,
+  toMs: number,
+): { startMs: number; endMs: number; up: number }[] {
+  const spans = Object.values(table.windows[sourceId] ?? {}).flat();
+  const edges = [fromMs, ...spans.flat().filter((ms) => ms > fromMs && ms < toMs), toMs].sort(
+    (a, b) => a - b,
+  );
+  const steps: { startMs: number; endMs: number; up: number }[] = [];
+  for (let index = 0; index + 1 < edges.length; index++) {
+    const startMs = edges[index] ?? fromMs;
+    const endMs = edges[index + 1] ?? toMs;
+    if (endMs <= startMs) continue;
+    const up = spans.filter(([start, end]) => start <= startMs && end >= endMs).length;
+    const last = steps.at(-1);
+    if (last && last.up === up) last.endMs = endMs;
+    else steps.push({ startMs, endMs, up });
+  }
+  return steps;
+}
+
+const spanOf = (interval: Interval): Span => [
+  Math.round(interval.start.getTime()),
+  Math.round(interval.end.getTime()),
+];
