@@ -1,0 +1,147 @@
+import { scanPath, type ScanPath } from '../sky/cable';
+import { horizonElevationDeg, prepareHorizon, type Horizon } from '../sky/horizon';
+import { prepareSite, trackAzEl, trackOf, type Track } from '../sky/track';
+import type { AzEl, Geodetic, Interval } from '../sky/types';
+import { trackWindows } from '../sky/windows';
+import type { PlanContext, PlanSource, PlanStation } from './context';
+import { skyStation } from './sky-table';
+
+/** How near a station comes to its limits while it follows a source. */
+export type Sight = {
+  startAzEl: AzEl;
+  stopAzEl: AzEl;
+  minElevationDeg: number;
+  /** least room to a limit, negative outside it; at the instant and by the limit told */
+  worst: {
+    marginDeg: number;
+    elevationDeg: number;
+    limitDeg: number;
+    side: 'low' | 'mask' | 'high';
+    atMs: number;
+  };
+  /** first instant outside the limits, of those looked at; null if none */
+  outFromMs: number | null;
+  path: ScanPath;
+};
+
+const STEP_MS = 60_000;
+/** A mask may have narrow steps, so it is looked at more often. */
+const MASK_STEP_MS = 15_000;
+const TRACK_MS = 2 * 86_400_000;
+
+/**
+ * A station's view of a source from start to stop.
+ *
+ * @param startMs  epoch ms, UTC; less than stopMs
+ * @returns limits are the stricter of mask, station, session and mount
+ * @throws RangeError if the span is empty (programmer error)
+ *
+ * Error   looked at every minute (15 s with a mask) and at both ends: a dip between is missed only if it lasts less;
+ *         at a start and stop above the limits elevation cannot dip by more than 0.01° in a minute
+ */
+export function sightOf(
+  station: PlanStation,
+  source: PlanSource,
+  settings: PlanContext['settings'],
+  startMs: number,
+  stopMs: number,
+): Sight {
+  const at = directionAt(station, source, startMs);
+  const limits = limitsOf(station, settings);
+  const path = scanPath(at, { start: new Date(startMs), end: new Date(stopMs) });
+  let worst: Sight['worst'] | null = null;
+  let minElevationDeg = Infinity;
+  let outFromMs: number | null = null;
+  for (const atMs of instants(startMs, stopMs, limits.horizon ? MASK_STEP_MS : STEP_MS)) {
+    const direction = at(atMs);
+    const room = roomAt(limits, direction);
+    if (room.marginDeg < 0) outFromMs ??= atMs;
+    if (!worst || room.marginDeg < worst.marginDeg) worst = { ...room, atMs };
+    minElevationDeg = Math.min(minElevationDeg, direction.elevationDeg);
+  }
+  if (!worst) throw new RangeError('A view has a length');
+  return { startAzEl: path.start, stopAzEl: path.end, minElevationDeg, worst, outFromMs, path };
+}
+
+/**
+ * Times from start to stop in which a station sees a source above all its limits.
+ *
+ * @returns sorted, disjoint, half-open
+ *
+ * Error   as `visibilityWindows`
+ */
+export function upWithin(
+  station: PlanStation,
+  source: PlanSource,
+  settings: PlanContext['settings'],
+  startMs: number,
+  stopMs: number,
+): Interval[] {
+  const span = { start: new Date(startMs), end: new Date(stopMs) };
+  const own = skyStation(station, settings);
+  const { minDeg, maxDeg } = station.mount.elevation;
+  const limits = {
+    ...own,
+    minElevationDeg: Math.max(own.minElevationDeg, minDeg),
+    maxElevationDeg: Math.min(own.maxElevationDeg ?? 90, maxDeg),
+  };
+  return trackWindows(trackNear(source, startMs), source.position, limits, span);
+}
+
+/**
+ * A source's fast track about an instant, made once for each two days.
+ *
+ * @returns a track good for a day outside its own span
+ */
+export function trackNear(source: PlanSource, atMs: number): Track {
+  const bucket = Math.floor(atMs / TRACK_MS);
+  const known = tracks.get(source) ?? new Map<number, Track>();
+  tracks.set(source, known);
+  const track = known.get(bucket);
+  if (track) return track;
+  const start = new Date(bucket * TRACK_MS);
+  const made = trackOf(source.position, { start, end: new Date((bucket + 1) * TRACK_MS) });
+  known.set(bucket, made);
+  return made;
+}
+
+const tracks = new WeakMap<PlanSource, Map<number, Track>>();
+const frames = new WeakMap<Geodetic, ReturnType<typeof prepareSite>>();
+const horizons = new WeakMap<PlanStation, { horizon: Horizon | null }>();
+
+function directionAt(station: PlanStation, source: PlanSource, startMs: number): (atMs: number) => AzEl {
+  const frame = frames.get(station.site) ?? prepareSite(station.site);
+  frames.set(station.site, frame);
+  const track = trackNear(source, startMs);
+  return (atMs) => trackAzEl(track, frame, atMs);
+}
+
+type Limits = { lowestDeg: number; highestDeg: number; horizon: Horizon | null };
+
+function limitsOf(station: PlanStation, settings: PlanContext['settings']): Limits {
+  const known = horizons.get(station) ?? { horizon: prepareHorizon(station.horizon) };
+  horizons.set(station, known);
+  const { minDeg, maxDeg } = station.mount.elevation;
+  return {
+    lowestDeg: Math.max(station.minElevationDeg, settings.minElevationDeg, minDeg),
+    highestDeg: Math.min(station.maxElevationDeg, maxDeg),
+    horizon: known.horizon,
+  };
+}
+
+function roomAt(limits: Limits, { azimuthDeg, elevationDeg }: AzEl): Omit<Sight['worst'], 'atMs'> {
+  const maskDeg = limits.horizon ? horizonElevationDeg(limits.horizon, azimuthDeg) : -90;
+  const isMask = maskDeg > limits.lowestDeg;
+  const floorDeg = isMask ? maskDeg : limits.lowestDeg;
+  const below = elevationDeg - floorDeg;
+  const above = limits.highestDeg - elevationDeg;
+  // close to the highest is no matter until it is passed
+  if (above < 0 && above < below)
+    return { marginDeg: above, elevationDeg, limitDeg: limits.highestDeg, side: 'high' };
+  return { marginDeg: below, elevationDeg, limitDeg: floorDeg, side: isMask ? 'mask' : 'low' };
+}
+
+function* instants(startMs: number, stopMs: number, stepMs: number): Generator<number> {
+  for (let ms = startMs; ms < stopMs; ms += stepMs) yield ms;
+  yield stopMs;
+}
