@@ -3,6 +3,8 @@
 import { archivo, serif, serifGreek } from './_fonts/fonts';
 import { BareFrame } from './_ui/bare-frame';
 import { Broken } from './_ui/broken';
+import './_ui/masthead.css';
+import './_ui/sheet.css';
 import './globals.css';
 
 /** Stands in for the root layout when that itself fails; the device chooses the theme. */

@@ -16,10 +16,9 @@ export function Broken({ error, retry }: { error: unknown; retry: () => void }) 
           <button type="button" className="btn btn-primary" onClick={retry}>
             Try again
           </button>
-          {/* a full load, so that nothing of what broke is kept */}
-          <a href="/" className="btn">
+          <button type="button" className="btn" onClick={() => window.location.assign('/')}>
             Sessions
-          </a>
+          </button>
         </>
       }
     >
