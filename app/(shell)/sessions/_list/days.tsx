@@ -1,0 +1,97 @@
+import { dayText } from '@/app/_ui/format';
+import type { SessionListItem } from '@/src/data/session/dto';
+import { MS_PER_DAY } from '@/src/units/time';
+import type { ListedStation } from './listing';
+
+const DAYS_BEFORE = 3;
+const DAYS_SHOWN = 32;
+const HEAD = 28.5;
+const FIRST = 38;
+
+type DaysProps = {
+  sessions: readonly SessionListItem[];
+  stations: readonly ListedStation[];
+  nowMs: number;
+};
+
+/** Days of year from left to right, a thin stave for each station, a block for each session and station. */
+export function Days({ sessions, stations, nowMs }: DaysProps) {
+  const firstMs = Math.floor(nowMs / MS_PER_DAY) * MS_PER_DAY - DAYS_BEFORE * MS_PER_DAY;
+  const lastMs = firstMs + DAYS_SHOWN * MS_PER_DAY;
+  const x = (ms: number) => `${(((ms - firstMs) / (lastMs - firstMs)) * 100).toFixed(3)}%`;
+  const pitch = stations.length > 12 ? 5 : 9;
+  const foot = FIRST + Math.max(6, stations.length) * pitch + 1;
+  const inView = sessions.filter((s) => s.startMs < lastMs && s.startMs + s.lengthSeconds * 1000 > firstMs);
+  return (
+    <svg className="days" height={foot + 20} aria-hidden="true">
+      {Array.from({ length: DAYS_SHOWN + 1 }, (_, day) => (
+        <Day key={day} day={day} firstMs={firstMs} x={x} foot={foot} />
+      ))}
+      <line x1="0" x2="100%" y1={HEAD} y2={HEAD} stroke="var(--ink)" />
+      {stations.map(({ code }, index) => {
+        const y = FIRST + index * pitch + 0.5;
+        return <line key={code} x1="0" x2="100%" y1={y} y2={y} stroke="var(--rule)" strokeWidth={0.75} />;
+      })}
+      {inView.map((session) => {
+        const startMs = Math.max(firstMs, session.startMs);
+        const stopMs = Math.min(lastMs, session.startMs + session.lengthSeconds * 1000);
+        const width = `max(5px, ${(((stopMs - startMs) / (lastMs - firstMs)) * 100).toFixed(3)}%)`;
+        return (
+          <g key={session.id}>
+            {stations.map(({ code }, index) =>
+              session.stations.includes(code) ? (
+                <rect
+                  key={code}
+                  x={x(startMs)}
+                  y={FIRST + index * pitch - pitch / 3 + 0.5}
+                  height={(pitch * 2) / 3}
+                  style={{ width }}
+                  fill="var(--sunk)"
+                  stroke="var(--ink2)"
+                />
+              ) : null,
+            )}
+            <text x={x(startMs)} y={foot + 13} fontSize={11.5} fontWeight={600}>
+              {session.code}
+            </text>
+          </g>
+        );
+      })}
+      <line x1={x(nowMs)} x2={x(nowMs)} y1="24" y2={foot} stroke="var(--ink)" strokeWidth={2} />
+      <text x={x(nowMs)} y={foot + 13} textAnchor="middle" fontSize={11.5} fontWeight={600}>
+        now
+      </text>
+    </svg>
+  );
+}
+
+type DayProps = { day: number; firstMs: number; x: (ms: number) => string; foot: number };
+
+/** A day and its number; weeks are counted from today, and alone are numbered where it is narrow. */
+function Day({ day, firstMs, x, foot }: DayProps) {
+  const ms = firstMs + day * MS_PER_DAY;
+  const isWeek = (day - DAYS_BEFORE) % 7 === 0;
+  return (
+    <>
+      <line
+        x1={x(ms)}
+        x2={x(ms)}
+        y1={isWeek ? 4 : 24}
+        y2={foot}
+        stroke={isWeek ? 'var(--rule)' : 'var(--hair)'}
+      />
+      {day < DAYS_SHOWN && (
+        <text
+          x={x(ms + MS_PER_DAY / 2)}
+          y="20"
+          fontSize={11.5}
+          textAnchor="middle"
+          className={isWeek ? undefined : 'from-desk'}
+          style={{ fill: 'var(--ink2)' }}
+        >
+          {dayText(ms)}
+        </text>
+      )}
+    </>
+  );
+}
