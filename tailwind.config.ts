@@ -68,7 +68,7 @@ export default {
     borderWidth: {
       DEFAULT: '1px',
       0: '0',
-      hair: '0.75px',
+      thin: '0.75px',
       mark: '1.25px',
       frame: '1.5px',
       head: '2px',

@@ -1,0 +1,63 @@
+import type { Steps, Timeline } from '@/src/data/plan/dto';
+import type { PlanContext, PlanMode } from '@/src/schedule/context';
+import type { Command } from '@/src/schedule/commands';
+import type { Plan, ScanId, ScanStation, StationCode, SubjectId } from '@/src/schedule/plan';
+import type { View } from './scale';
+
+export type PendingAct = { actId: string } & ({ kind: 'do'; command: Command } | { kind: 'undo' | 'redo' });
+
+/** What is held over the sheet, by pointer or by keys, before it is dropped. */
+export type Placing = {
+  by: 'pointer' | 'keys';
+  what: 'new' | 'move' | 'length';
+  /** null for a scan that does not exist yet */
+  scanId: ScanId | null;
+  sourceId: string;
+  modeId: string;
+  startMs: number;
+  lengthSeconds: number;
+  /** a new scan takes whoever is up; a moved one keeps its stations */
+  stations: 'all-up' | readonly ScanStation[];
+  /** what the start snapped to, for the read-out */
+  snappedTo: string | null;
+  /** pointer on the sheet, px; keys have none */
+  pointer: { x: number; y: number } | null;
+  /** a scan dragged out of the staves by one note loses this station */
+  outStation: StationCode | null;
+};
+
+export type Notice = {
+  message: string;
+  /** offered when someone else changed the same thing meanwhile */
+  mine: Command | null;
+};
+
+export type SnapMode = 'slew' | 'grid' | 'off';
+
+export type TimelineState = {
+  session: Timeline['session'];
+  stations: Timeline['stations'];
+  sources: Timeline['sources'];
+  context: PlanContext;
+  mode: PlanMode;
+  canEdit: boolean;
+
+  confirmed: Plan;
+  revs: Readonly<Record<SubjectId, number>>;
+  seq: number;
+  steps: Steps;
+  pending: readonly PendingAct[];
+  /** confirmed with the pending acts applied: what is drawn */
+  plan: Plan;
+  line: 'ok' | 'lost';
+  notice: Notice | null;
+
+  view: View;
+  snap: SnapMode;
+  chosen: { scanId: ScanId; station: StationCode | null } | null;
+  traySourceId: string | null;
+  pinnedSourceId: string | null;
+  placing: Placing | null;
+  /** said by the live region */
+  said: string;
+};

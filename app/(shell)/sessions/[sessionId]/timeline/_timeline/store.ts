@@ -1,0 +1,67 @@
+import { createContext, useContext } from 'react';
+import { useStore } from 'zustand';
+import { createStore, type StoreApi } from 'zustand/vanilla';
+import { staveOrder } from '@/app/_ui/stave-order';
+import type { Timeline } from '@/src/data/plan/dto';
+import { unpackPlan } from '@/src/schedule/plan-rows';
+import { HOUR } from './scale';
+import type { TimelineState } from './state';
+
+export type TimelineStore = StoreApi<TimelineState>;
+
+export function createTimelineStore(timeline: Timeline): TimelineStore {
+  const plan = unpackPlan(timeline.plan);
+  const mode = timeline.modes.find(({ id }) => id === timeline.session.modeId) ?? timeline.modes[0];
+  if (!mode) throw new Error(`session ${timeline.session.code} has no mode`);
+  return createStore<TimelineState>(() => ({
+    session: timeline.session,
+    stations: staveOrder(timeline.stations),
+    sources: timeline.sources,
+    context: {
+      stations: byKey(timeline.stations, 'code'),
+      sources: byKey(timeline.sources, 'id'),
+      modes: byKey(timeline.modes, 'id'),
+      away: {},
+      clockReadAtMs: {},
+      nowMs: timeline.nowMs,
+      settings: timeline.settings,
+    },
+    mode,
+    canEdit: timeline.canEdit,
+    confirmed: plan,
+    revs: timeline.revs,
+    seq: timeline.seq,
+    steps: timeline.steps,
+    pending: [],
+    plan,
+    line: 'ok',
+    notice: null,
+    view: firstView(plan.span),
+    snap: 'slew',
+    chosen: null,
+    traySourceId: null,
+    pinnedSourceId: null,
+    placing: null,
+    said: '',
+  }));
+}
+
+const StoreContext = createContext<TimelineStore | null>(null);
+export const TimelineProvider = StoreContext.Provider;
+
+export function useTimelineStore(): TimelineStore {
+  const store = useContext(StoreContext);
+  if (!store) throw new Error('outside the timeline');
+  return store;
+}
+
+export const useTimeline = <T>(select: (state: TimelineState) => T): T =>
+  useStore(useTimelineStore(), select);
+
+function firstView(span: { startMs: number; lengthSeconds: number }) {
+  const hours = span.lengthSeconds * 1000 <= 8 * HOUR ? span.lengthSeconds / 3600 : 8;
+  return { startMs: span.startMs, hours: hours < 8 ? 8 : hours };
+}
+
+const byKey = <T, K extends keyof T>(items: readonly T[], key: K): Record<string, T> =>
+  Object.fromEntries(items.map((item) => [String(item[key]), item]));

@@ -1,0 +1,93 @@
+'use client';
+
+import { usePathname, useRouter } from 'next/navigation';
+import { useEffect, useState } from 'react';
+import type { Timeline as TimelineDto } from '@/src/data/plan/dto';
+import { Inspector } from '../_inspector/inspector';
+import { ActsProvider } from './acts';
+import { createDerivedStore, DerivedProvider } from './derived';
+import { DragProvider } from './drag-provider';
+import { KeyPlacingProvider } from './key-placing';
+import { Middle } from './middle';
+import { createSender } from './sender';
+import { createTimelineStore, TimelineProvider, useTimelineStore } from './store';
+import { ToolBar } from './tool-bar';
+import { Tray } from './tray';
+import { useSky } from './use-sky';
+
+/** The sheet of a session: tool bar, tray, staves, notes, inspector. */
+export function Timeline({ timeline }: { timeline: TimelineDto }) {
+  const [store] = useState(() => createTimelineStore(timeline));
+  const router = useRouter();
+  const pathname = usePathname();
+  const [sender] = useState(() =>
+    createSender(store, () => router.push(`/sign-in?next=${encodeURIComponent(pathname)}`)),
+  );
+  const [acts] = useState(() => ({
+    dispatch: sender.dispatch,
+    undo: () => sender.step('undo'),
+    redo: () => sender.step('redo'),
+  }));
+  useEffect(() => {
+    void sender.catchUp();
+    const onReturn = () => {
+      sender.wake();
+      if (document.visibilityState === 'visible') void sender.catchUp();
+    };
+    const onUndoKey = (event: KeyboardEvent) => {
+      if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z' || isTyping(event.target))
+        return;
+      event.preventDefault();
+      if (store.getState().canEdit) sender.step(event.shiftKey ? 'redo' : 'undo');
+    };
+    const onLeave = (event: BeforeUnloadEvent) => {
+      if (store.getState().pending.length > 0) event.preventDefault();
+    };
+    window.addEventListener('online', onReturn);
+    document.addEventListener('visibilitychange', onReturn);
+    window.addEventListener('beforeunload', onLeave);
+    window.addEventListener('keydown', onUndoKey);
+    return () => {
+      window.removeEventListener('online', onReturn);
+      document.removeEventListener('visibilitychange', onReturn);
+      window.removeEventListener('beforeunload', onLeave);
+      window.removeEventListener('keydown', onUndoKey);
+    };
+  }, [sender, store]);
+  return (
+    <TimelineProvider value={store}>
+      <ActsProvider value={acts}>
+        <WithDerived>
+          <Frame />
+        </WithDerived>
+      </ActsProvider>
+    </TimelineProvider>
+  );
+}
+
+function WithDerived({ children }: { children: React.ReactNode }) {
+  const store = useTimelineStore();
+  const [derived] = useState(() => createDerivedStore(store));
+  useEffect(() => derived.start(), [derived]);
+  return <DerivedProvider value={derived}>{children}</DerivedProvider>;
+}
+
+function Frame() {
+  const { table, problem, again } = useSky();
+  return (
+    <KeyPlacingProvider table={table}>
+      <DragProvider table={table}>
+        <ToolBar />
+        <div className="grid min-h-0 flex-1 desk:grid-cols-[176px_minmax(0,1fr)_292px] desk:overflow-hidden">
+          <Tray table={table} />
+          <Middle table={table} problem={problem} again={again} />
+          <Inspector />
+        </div>
+      </DragProvider>
+    </KeyPlacingProvider>
+  );
+}
+
+const isTyping = (target: EventTarget | null) =>
+  target instanceof HTMLElement &&
+  (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT)$/.test(target.tagName));
