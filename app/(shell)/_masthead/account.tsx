@@ -14,11 +14,16 @@ export function Account({ viewer }: { viewer: Viewer }) {
           <path d="M0 0h7L3.5 5z" fill="currentColor" />
         </svg>
       </button>
-      <ThemeSwitch />
+      <div className="from-narrow">
+        <ThemeSwitch />
+      </div>
       <div id="account" popover="auto" role="dialog" aria-label="Account" className="float account">
         <p className="text-small text-ink2">Signed in as</p>
         <p className="break-words font-strong">{viewer.email}</p>
         {labels.length > 1 && <p className="mt-1 text-small text-ink2">{labels.join(', ')}</p>}
+        <div className="until-narrow">
+          Theme: <ThemeSwitch />
+        </div>
         <form action={signOut} className="mt-2.5">
           <button type="submit" className="btn w-full">
             Sign out

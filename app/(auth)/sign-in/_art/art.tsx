@@ -25,7 +25,7 @@ export function Art({ scene }: { scene: Scene | null }) {
         <br />
         listening together.
       </p>
-      <svg viewBox={`0 170 ${WIDTH} ${foot - 150}`} preserveAspectRatio="xMinYMin slice" aria-hidden="true">
+      <svg viewBox={`0 170 ${WIDTH} ${foot - 150}`} preserveAspectRatio="xMaxYMin meet" aria-hidden="true">
         {scene && <Hours scene={scene} across={across} foot={foot + 8} />}
         {staves.map((stave, index) => (
           <StaveDrawing

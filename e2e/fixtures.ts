@@ -1,0 +1,103 @@
+import AxeBuilder from '@axe-core/playwright';
+import { existsSync, mkdirSync } from 'node:fs';
+import path from 'node:path';
+import { test as base, expect, type Browser, type Page } from '@playwright/test';
+import { ACCOUNTS, DEMO_PASSWORD } from '../db/seed-data/accounts';
+
+export const PASSWORD = DEMO_PASSWORD;
+
+export type Person = 'admin' | 'scheduler' | 'operatorAf' | 'operatorBm' | 'correlator' | 'investigator';
+
+const PEOPLE: Readonly<Record<Person, { role: string; stationCode?: string }>> = {
+  admin: { role: 'admin' },
+  scheduler: { role: 'scheduler' },
+  operatorAf: { role: 'operator', stationCode: 'Af' },
+  operatorBm: { role: 'operator', stationCode: 'Bm' },
+  correlator: { role: 'correlator' },
+  investigator: { role: 'investigator' },
+};
+
+export function emailOf(person: Person): string {
+  const { role, stationCode } = PEOPLE[person];
+  const account = ACCOUNTS.find((entry) => entry.role === role && entry.stationCode === stationCode);
+  if (!account) throw new Error(`the demo has no ${person}`);
+  return account.email;
+}
+
+export async function signIn(page: Page, email: string, password = PASSWORD): Promise<void> {
+  await page.getByLabel('E-mail').fill(email);
+  await page.getByRole('textbox', { name: 'Password' }).fill(password);
+  await page.getByRole('button', { name: 'Sign in', exact: true }).click();
+}
+
+type WorkerFixtures = {
+  /** the file of a signed-in state; each worker signs a person in once */
+  stateOf: (person: Person) => Promise<string>;
+};
+
+type TestFixtures = {
+  /** a page with the person signed in */
+  pageAs: (person: Person) => Promise<Page>;
+};
+
+export const test = base.extend<TestFixtures, WorkerFixtures>({
+  stateOf: [
+    async ({ browser }, use, worker) => {
+      const folder = path.join(worker.project.outputDir, 'signed-in', String(worker.workerIndex));
+      await use(async (person) => {
+        const file = path.join(folder, `${person}.json`);
+        if (!existsSync(file))
+          await saveState(browser, { person, file, baseURL: worker.project.use.baseURL });
+        return file;
+      });
+    },
+    { scope: 'worker' },
+  ],
+  pageAs: async ({ browser, stateOf, baseURL, viewport }, use) => {
+    const opened: Page[] = [];
+    await use(async (person) => {
+      const storageState = await stateOf(person);
+      const context = await browser.newContext({ storageState, baseURL, viewport });
+      const page = await context.newPage();
+      opened.push(page);
+      return page;
+    });
+    await Promise.all(opened.map((page) => page.context().close()));
+  },
+});
+
+type Saving = { person: Person; file: string; baseURL: string | undefined };
+
+async function saveState(browser: Browser, { person, file, baseURL }: Saving): Promise<void> {
+  mkdirSync(path.dirname(file), { recursive: true });
+  const context = await browser.newContext({ baseURL });
+  const page = await context.newPage();
+  await page.goto('/sign-in');
+  await signIn(page, emailOf(person));
+  await expect(page.getByRole('heading', { name: 'Sessions' })).toBeVisible();
+  await context.storageState({ path: file });
+  await context.close();
+}
+
+export const THEMES = ['day', 'night'] as const;
+
+export async function setThemeCookie(
+  page: Page,
+  theme: (typeof THEMES)[number],
+  baseURL: string,
+): Promise<void> {
+  await page.context().addCookies([{ name: 'antiphon_theme', value: theme, url: baseURL }]);
+}
+
+/** Nothing that axe finds against WCAG 2.2 A and AA. */
+export async function expectAccessible(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page })
+    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
+    .analyze();
+  const said = violations.map(
+    ({ id, help, nodes }) => `${id}: ${help}\n  ${nodes.map((n) => n.html).join('\n  ')}`,
+  );
+  expect(said, said.join('\n')).toEqual([]);
+}
+
+export { expect };
