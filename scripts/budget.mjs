@@ -72,7 +72,7 @@ async function weighTimeline() {
 async function signInAndFindTimeline(page) {
   await page.goto(`${address}/sign-in`);
   await page.getByLabel('E-mail').fill('scheduler@antiphon.example');
-  await page.getByLabel('Password').fill('antiphon-demo');
+  await page.getByRole('textbox', { name: 'Password' }).fill('antiphon-demo');
   await page.getByRole('button', { name: 'Sign in' }).click();
   await page.waitForURL((url) => url.pathname !== '/sign-in');
   await page.goto(`${address}/sessions`);
