@@ -23,7 +23,11 @@ export function Masthead({ viewer, nowMs, place, title, sub }: MastheadProps) {
       <a className="skip" href="#main">
         Skip to the page
       </a>
-      <Link href="/" className={place.kind === 'network' ? 'mast-logo mast-logo-margin' : 'mast-logo'}>
+      <Link
+        href="/"
+        title="Sessions"
+        className={place.kind === 'network' ? 'mast-logo mast-logo-margin' : 'mast-logo'}
+      >
         <Mark />
         <span>Antiphon</span>
       </Link>

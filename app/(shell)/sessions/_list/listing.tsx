@@ -66,12 +66,12 @@ export function Listing({ sessions, stations, nowMs, find: asked }: ListingProps
           codes={stations.map(({ code }) => code)}
           actions={
             <button type="button" className="btn btn-primary" onClick={showAll}>
-              Show all {sessions.length}
+              Show all sessions
             </button>
           }
         >
           {find.trim() === ''
-            ? `There are ${sessions.length} sessions, none of them ${show}.`
+            ? `None of your sessions is ${show}.`
             : `None ${show === 'all' ? '' : `${show} `}has “${find.trim()}” in its code, title or stations.`}
         </EmptySheet>
       )}
