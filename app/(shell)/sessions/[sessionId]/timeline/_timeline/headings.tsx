@@ -22,7 +22,7 @@ export function Headings({ frame, plan, numbers, sources, chosenId, placingId }:
     scans.map((scan) => ({
       id: scan.id,
       middle: barOf(frame, scan).middle,
-      half: far ? (numbers.get(scan.id) ?? '').length * 3.4 + 1 : 14,
+      half: far ? (numbers.get(scan.id) ?? '').length * 3.4 + 1 : 12,
       isKept: scan.id === chosenId,
     })),
   );

@@ -55,6 +55,8 @@ export type TimelineState = {
   view: View;
   snap: SnapMode;
   chosen: { scanId: ScanId; station: StationCode | null } | null;
+  /** below desk width the tray is a drawer */
+  isTrayOpen: boolean;
   traySourceId: string | null;
   pinnedSourceId: string | null;
   placing: Placing | null;

@@ -39,6 +39,7 @@ export function createTimelineStore(timeline: Timeline): TimelineStore {
     view: firstView(plan.span),
     snap: 'slew',
     chosen: null,
+    isTrayOpen: false,
     traySourceId: null,
     pinnedSourceId: null,
     placing: null,

@@ -13,6 +13,7 @@ export function ToolBar() {
       <div className="flex h-bar w-tray items-center gap-2 px-3.5">
         <h2 className="text-lead">Sources</h2>
         <SourceCount />
+        <TrayButton />
       </div>
       <ShowPart />
       <SnapPart />
@@ -25,6 +26,22 @@ export function ToolBar() {
 function SourceCount() {
   const count = useTimeline((state) => state.sources.length);
   return <span className="text-ink3">{count}</span>;
+}
+
+function TrayButton() {
+  const store = useTimelineStore();
+  const isOpen = useTimeline((state) => state.isTrayOpen);
+  return (
+    <button
+      type="button"
+      className="btn btn-sm desk:hidden"
+      aria-expanded={isOpen}
+      aria-controls="tray"
+      onClick={() => store.setState({ isTrayOpen: !isOpen })}
+    >
+      {isOpen ? 'Hide' : 'Show'}
+    </button>
+  );
 }
 
 function ShowPart() {

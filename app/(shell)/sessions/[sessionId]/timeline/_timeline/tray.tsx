@@ -14,11 +14,16 @@ import { useTimeline, useTimelineStore } from './store';
 export function Tray({ table }: { table: SkyTable | null }) {
   const sources = useTimeline((state) => state.sources);
   const canEdit = useTimeline((state) => state.canEdit);
+  const isOpen = useTimeline((state) => state.isTrayOpen);
   const [find, setFind] = useState('');
   const word = find.trim().toLowerCase().replace('−', '-');
   const found = sources.filter(({ name }) => name.toLowerCase().includes(word));
   return (
-    <aside aria-label="Sources" className="flex min-h-0 flex-col border-r border-rule">
+    <aside
+      id="tray"
+      aria-label="Sources"
+      className={`${isOpen ? 'flex' : 'hidden'} max-h-[50dvh] min-h-0 flex-col border-b border-rule desk:flex desk:max-h-none desk:border-b-0 desk:border-r`}
+    >
       <div className="border-b border-rule px-[12px] py-[9px]">
         <label className="sr-only" htmlFor="find-source">
           Find a source
