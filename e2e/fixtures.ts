@@ -42,9 +42,9 @@ type TestFixtures = {
 
 export const test = base.extend<TestFixtures, WorkerFixtures>({
   stateOf: [
-    async ({ browser }, use, worker) => {
+    async ({ browser }, provide, worker) => {
       const folder = path.join(worker.project.outputDir, 'signed-in', String(worker.workerIndex));
-      await use(async (person) => {
+      await provide(async (person) => {
         const file = path.join(folder, `${person}.json`);
         if (!existsSync(file))
           await saveState(browser, { person, file, baseURL: worker.project.use.baseURL });
@@ -53,9 +53,9 @@ export const test = base.extend<TestFixtures, WorkerFixtures>({
     },
     { scope: 'worker' },
   ],
-  pageAs: async ({ browser, stateOf, baseURL, viewport }, use) => {
+  pageAs: async ({ browser, stateOf, baseURL, viewport }, provide) => {
     const opened: Page[] = [];
-    await use(async (person) => {
+    await provide(async (person) => {
       const storageState = await stateOf(person);
       const context = await browser.newContext({ storageState, baseURL, viewport });
       const page = await context.newPage();

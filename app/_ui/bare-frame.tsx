@@ -1,4 +1,3 @@
-import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { Mark } from './mark';
 
@@ -7,10 +6,10 @@ export function BareFrame({ status, children }: { status: string; children: Reac
   return (
     <div className="flex min-h-dvh flex-col">
       <header className="mast">
-        <Link href="/" className="mast-logo bare-logo">
+        <div className="mast-logo bare-logo">
           <Mark />
           <span>Antiphon</span>
-        </Link>
+        </div>
         <p className="ml-auto self-center px-6 text-small text-ink2">{status}</p>
       </header>
       <main id="main" className="flex min-h-0 flex-1 flex-col">

@@ -16,9 +16,11 @@ export function Broken({ error, retry }: { error: unknown; retry: () => void }) 
           <button type="button" className="btn btn-primary" onClick={retry}>
             Try again
           </button>
-          <button type="button" className="btn" onClick={() => window.location.assign('/')}>
-            Sessions
-          </button>
+          <form action="/">
+            <button type="submit" className="btn">
+              Sessions
+            </button>
+          </form>
         </>
       }
     >
