@@ -3,6 +3,7 @@
 import { useActs } from '../_timeline/acts';
 import { useDerived } from '../_timeline/derived';
 import { useKeyPlacing } from '../_timeline/key-placing';
+import { INSPECTOR_ID } from '../_timeline/places';
 import { ROLE_WORDS } from '../_timeline/said';
 import { useTimeline } from '../_timeline/store';
 import { removeScan } from '@/src/schedule/gestures/remove-scan';
@@ -21,6 +22,8 @@ export function Inspector() {
   const scan = plan.scans.find(({ id }) => id === chosenId);
   return (
     <aside
+      id={INSPECTOR_ID}
+      tabIndex={-1}
       aria-label="Chosen scan"
       className="flex min-h-0 flex-col gap-2.5 overflow-y-auto border-l border-rule px-[16px] py-[12px]"
     >

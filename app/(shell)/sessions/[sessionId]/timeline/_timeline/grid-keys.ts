@@ -4,6 +4,7 @@ import { toggleStation } from '@/src/schedule/gestures/toggle-station';
 import { useActs } from './acts';
 import { useDerivedStore } from './derived';
 import { useKeyPlacing } from './key-placing';
+import { INSPECTOR_ID } from './places';
 import { inView } from './scans';
 import { clampView, frameOf, HOUR, LEVELS } from './scale';
 import type { TimelineState } from './state';
@@ -129,6 +130,9 @@ export function useGridKeys() {
         if (sourceId !== undefined) placing.startNew(sourceId);
         return true;
       }
+      case 'enter':
+        document.getElementById(INSPECTOR_ID)?.focus();
+        return state.chosen !== null;
       case 'escape':
         store.setState({ chosen: null });
         return true;

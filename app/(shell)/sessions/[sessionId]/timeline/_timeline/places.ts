@@ -1,4 +1,5 @@
 export const GRID_ID = 'timeline-grid';
+export const INSPECTOR_ID = 'chosen-scan';
 export const SHEET_ID = 'timeline-sheet';
 
 /** Move mode started elsewhere gives the grid the focus, so that its keys act. */

@@ -81,7 +81,22 @@ export function useSheetPointer(frame: Frame) {
       : placing;
   }
 
-  return { onPointerDown };
+  /** The pointer shows what a press would take hold of. */
+  function onPointerMove(event: ReactPointerEvent<HTMLDivElement>) {
+    const { plan, stations, canEdit, placing } = store.getState();
+    if (placing || event.buttons !== 0) return;
+    const at = pointIn(event.currentTarget, event);
+    const hit = hitAt(frame, plan, stations, at.x, at.y);
+    event.currentTarget.style.cursor = !hit
+      ? ''
+      : !canEdit
+        ? 'pointer'
+        : hit.part === 'stop'
+          ? 'ew-resize'
+          : 'grab';
+  }
+
+  return { onPointerDown, onPointerMove };
 }
 
 export function pickedUp(scan: Scan, what: 'move' | 'length', pointer: Placing['pointer']): Placing {
