@@ -5,4 +5,5 @@ export default {
   poweredByHeader: false,
   agentRules: false,
   serverExternalPackages: ['@libsql/client', 'libsql', '@node-rs/argon2'],
+  experimental: { authInterrupts: true },
 };
