@@ -160,16 +160,6 @@ export function legOf(
   return leg;
 }
 
-/**
- * The plan's interval of a station in a scan, seen or not; made once for each scan.
- */
-export function stationSight(scan: Scan, member: ScanStation, context: PlanContext): Sight | null {
-  const station = context.stations[member.station];
-  const source = context.sources[scan.sourceId];
-  if (!station || !source) return null;
-  return cachedFor(scan, member, station, source, context).sight;
-}
-
 type Way = Pick<
   PathLeg,
   | 'motorStartDeg'
