@@ -1,4 +1,4 @@
-import type { ActFailure, JournalPage, Taken } from '@/src/data/plan/dto';
+import type { ActFailure, JournalPage, Revs, Taken } from '@/src/data/plan/dto';
 import type { Failure } from '@/src/data/errors';
 import { applyCommand, CommandRefused, subjectsOf, type Command } from '@/src/schedule/commands';
 import type { Plan } from '@/src/schedule/plan';
@@ -15,8 +15,9 @@ const RETRY_SECONDS = [5, 15, 60];
 export function createSender(store: TimelineStore, onSignedOut: () => void) {
   let running = false;
   let wake: (() => void) | null = null;
-  /** own rows newer than the last catch-up; they are applied already */
-  const ownSeqs = new Set<number>();
+  let catching: Promise<void> = Promise.resolve();
+  /** rows newer than the last catch-up that the confirmed plan holds already */
+  const applied = new Set<number>();
   const url = () => `/api/sessions/${store.getState().session.id}`;
 
   function dispatch(command: Command): boolean {
@@ -50,15 +51,14 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
       let failures = 0;
       for (let [act] = store.getState().pending; act; [act] = store.getState().pending) {
         const answer = await post(act);
-        if (answer === null) {
+        const isDone = answer !== null && (answer.ok ? await taken(act, answer) : await refused(act, answer));
+        if (!isDone) {
           store.setState({ line: 'lost' });
           await pause(RETRY_SECONDS[Math.min(failures++, RETRY_SECONDS.length - 1)] ?? 60);
           continue;
         }
         failures = 0;
         store.setState({ line: 'ok' });
-        if (answer.ok) taken(act, answer);
-        else await refused(act, answer);
       }
     } finally {
       running = false;
@@ -89,20 +89,25 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
     }
   }
 
-  function taken(act: PendingAct, answer: Taken) {
-    const { confirmed, revs, pending } = store.getState();
-    ownSeqs.add(answer.seq);
+  /**
+   * A do-row may be applied out of turn: the server took it only because nothing unseen touched its subjects.
+   * An undo or redo may stand on rows not seen here, so the journal brings it in its turn.
+   */
+  async function taken(act: PendingAct, answer: Taken): Promise<boolean> {
+    if (answer.kind !== 'do') await catchUp();
+    const { confirmed, revs, seq, pending } = store.getState();
+    const isIn = answer.seq <= seq || applied.has(answer.seq);
+    if (!isIn && answer.kind !== 'do') return false;
+    if (!isIn) applied.add(answer.seq);
     settle(
-      applyCommand(confirmed, answer.command).plan,
+      isIn ? confirmed : applyCommand(confirmed, answer.command).plan,
       pending.filter((other) => other.actId !== act.actId),
-      {
-        revs: { ...revs, ...answer.subjects },
-        steps: answer.steps,
-      },
+      { revs: newer(revs, answer.subjects), steps: answer.steps },
     );
+    return true;
   }
 
-  async function refused(act: PendingAct, failure: ActFailure) {
+  async function refused(act: PendingAct, failure: ActFailure): Promise<boolean> {
     const { confirmed, pending } = store.getState();
     settle(
       confirmed,
@@ -110,26 +115,34 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
     );
     if (failure.code === 'unauthenticated') {
       onSignedOut();
-      return;
+      return true;
     }
     if (failure.code === 'conflict') await catchUp();
     const mine = failure.reason === 'changed' && act.kind === 'do' ? act.command : null;
     store.setState({ notice: { message: failure.message, mine } });
+    return true;
   }
 
   /** Brings the confirmed plan up to the journal's end: what others did, and what the page's props missed. */
-  async function catchUp() {
+  function catchUp(): Promise<void> {
+    catching = catching.then(readOn, readOn);
+    return catching;
+  }
+
+  async function readOn(): Promise<void> {
     for (let more = true; more;) {
       const page = await fetchPage();
       if (!page?.ok) return;
       const { confirmed, revs, pending } = store.getState();
-      let plan = confirmed;
-      const newRevs = { ...revs };
-      for (const entry of page.entries) {
-        if (!ownSeqs.delete(entry.seq)) plan = applyCommand(plan, entry.command).plan;
-        for (const [id, rev] of Object.entries(entry.subjects)) newRevs[id] = Math.max(newRevs[id] ?? 0, rev);
+      const news = page.entries.filter(({ seq }) => !applied.has(seq));
+      const plan = news.reduce((current, { command }) => applyCommand(current, command).plan, confirmed);
+      const arrived = new Set(news.map(({ actId }) => actId));
+      for (const { seq } of page.entries) applied.delete(seq);
+      if (page.entries.length > 0) {
+        const newRevs = page.entries.reduce((current, { subjects }) => newer(current, subjects), revs);
+        const waiting = pending.filter(({ kind, actId }) => kind !== 'do' || !arrived.has(actId));
+        settle(plan, waiting, { revs: newRevs, seq: page.seq });
       }
-      settle(plan, pending, { revs: newRevs, seq: page.seq });
       more = page.hasMore;
     }
   }
@@ -189,3 +202,9 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
 }
 
 export type Sender = ReturnType<typeof createSender>;
+
+function newer(revs: Revs, changed: Revs): Revs {
+  const merged = { ...revs };
+  for (const [id, rev] of Object.entries(changed)) merged[id] = Math.max(merged[id] ?? 0, rev);
+  return merged;
+}

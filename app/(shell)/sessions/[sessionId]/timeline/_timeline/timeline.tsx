@@ -1,7 +1,7 @@
 'use client';
 
 import { usePathname, useRouter } from 'next/navigation';
-import { useEffect, useState } from 'react';
+import { lazy, Suspense, useEffect, useState } from 'react';
 import type { Timeline as TimelineDto } from '@/src/data/plan/dto';
 import { Inspector } from '../_inspector/inspector';
 import { ActsProvider } from './acts';
@@ -9,8 +9,8 @@ import { createDerivedStore, DerivedProvider } from './derived';
 import { DragProvider } from './drag-provider';
 import { KeyPlacingProvider } from './key-placing';
 import { Middle } from './middle';
-import { createSender } from './sender';
-import { createTimelineStore, TimelineProvider, useTimelineStore } from './store';
+import { createSender, type Sender } from './sender';
+import { createTimelineStore, TimelineProvider, useTimeline, useTimelineStore } from './store';
 import { ToolBar } from './tool-bar';
 import { Tray } from './tray';
 import { useSky } from './use-sky';
@@ -59,9 +59,30 @@ export function Timeline({ timeline }: { timeline: TimelineDto }) {
       <ActsProvider value={acts}>
         <WithDerived>
           <Frame />
+          <LiveWhenReady sender={sender} />
         </WithDerived>
       </ActsProvider>
     </TimelineProvider>
+  );
+}
+
+const Live = lazy(() => import('./live'));
+
+const LIVE_AFTER_MS = 2000;
+
+/** Loaded when the sheet has long been drawn: the first catch-up is made without it. */
+function LiveWhenReady({ sender }: { sender: Sender }) {
+  const sessionId = useTimeline((state) => state.session.id);
+  const [isDue, setIsDue] = useState(false);
+  useEffect(() => {
+    const timer = setTimeout(() => setIsDue(true), LIVE_AFTER_MS);
+    return () => clearTimeout(timer);
+  }, []);
+  if (!isDue) return null;
+  return (
+    <Suspense>
+      <Live sessionId={sessionId} sender={sender} />
+    </Suspense>
   );
 }
 

@@ -1,0 +1,4 @@
+/** Keys of what changes behind the viewer's back: each is the address it is read from. */
+export const liveKeys = {
+  journal: (sessionId: string) => `/api/sessions/${sessionId}/journal` as const,
+};
