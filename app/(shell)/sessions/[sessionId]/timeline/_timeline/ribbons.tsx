@@ -73,17 +73,26 @@ export function RiseAndSet({ frame, table, sourceId, stations }: Props) {
   );
 }
 
-/** Counts the ribbons. */
-export function StationsUpStrip({ frame, table, sourceId }: Omit<Props, 'stations'>) {
+/** Counts the ribbons; without a source in focus there are none. */
+export function StationsUpStrip({
+  frame,
+  table,
+  sourceId,
+}: Pick<Props, 'frame' | 'table'> & { sourceId: string | null }) {
   const y = frame.upBase;
   const endMs = Math.min(viewEndMs(frame.view), lastMs(table));
   const startMs = Math.max(frame.view.startMs, table.startMs);
-  const steps = endMs > startMs ? stationsUp(table, sourceId, startMs, endMs) : [];
+  const steps = sourceId !== null && endMs > startMs ? stationsUp(table, sourceId, startMs, endMs) : [];
   return (
     <g>
       <text x={10} y={y - 6} fontSize={11} className="fill-ink2">
         Stations up
       </text>
+      {sourceId === null && (
+        <text x={frame.left + 6} y={y - 6} fontSize={11} className="fill-ink3">
+          Choose a scan or a source to see where it is up.
+        </text>
+      )}
       {steps.map(({ startMs: from, endMs: to, up }) => {
         const x1 = xOf(frame, from);
         const x2 = xOf(frame, to);

@@ -63,7 +63,7 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
         placingId={fadedScanId}
       />
       <FringeStrip frame={frame} plan={plan} outlook={outlook} chosenId={chosenId} />
-      {focusId !== null && <StationsUpStrip frame={frame} table={table} sourceId={focusId} />}
+      <StationsUpStrip frame={frame} table={table} sourceId={focusId} />
       <g clipPath="url(#bars-clip)">{chosen && <ChosenBars frame={frame} scan={chosen} />}</g>
       <Axis frame={frame} />
       <Ghost frame={frame} table={table} />
