@@ -208,3 +208,24 @@ for (const theme of THEMES) {
     await expectAccessible(page);
   });
 }
+
+test('a scan is edited by its form, errors stand beside the field', async ({ pageAs }) => {
+  const page = await pageAs('scheduler');
+  const { grid, inspector } = await openTimeline(page);
+  await grid.focus();
+  await page.keyboard.press('ArrowRight');
+  await inspector.getByRole('button', { name: 'Edit scan' }).click();
+  const dialog = page.getByRole('dialog', { name: 'Edit scan 1' });
+  await dialog.getByLabel('Length').fill('long');
+  await dialog.getByRole('button', { name: 'Keep scan 1' }).click();
+  await expect(dialog.getByLabel('Length')).toHaveAccessibleDescription(
+    /“long” is no length\. Write it as 12 min/,
+  );
+  await dialog.getByLabel('Length').fill('8 min');
+  await dialog.getByRole('checkbox', { name: 'Bm' }).uncheck();
+  await dialog.getByRole('button', { name: 'Keep scan 1' }).click();
+  await expect(dialog).toBeHidden();
+  await expect(inspector.getByText('8 min', { exact: true })).toBeVisible();
+  await page.keyboard.press('Control+z');
+  await expect(inspector.getByText('10 min', { exact: true })).toBeVisible();
+});

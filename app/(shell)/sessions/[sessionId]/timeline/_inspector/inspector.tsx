@@ -1,5 +1,6 @@
 'use client';
 
+import { lazy, Suspense, useState } from 'react';
 import { useActs } from '../_timeline/acts';
 import { useDerived } from '../_timeline/derived';
 import { useKeyPlacing } from '../_timeline/key-placing';
@@ -110,14 +111,21 @@ function Time({ label, value }: { label: string; value: string }) {
   );
 }
 
+const EditScan = lazy(() => import('./edit-scan'));
+
 function Actions({ scan }: { scan: Scan }) {
   const canEdit = useTimeline((state) => state.canEdit);
   const plan = useTimeline((state) => state.plan);
+  const number = useDerived((derived) => derived.numbers.get(scan.id)) ?? '';
+  const [isEditing, setIsEditing] = useState(false);
   const { dispatch } = useActs();
-  const { startMove, startLength } = useKeyPlacing();
+  const { startMove } = useKeyPlacing();
   if (!canEdit) return null;
   return (
     <div className="mt-auto flex gap-2 pb-0.5 pt-2">
+      <button type="button" className="btn" onClick={() => setIsEditing(true)}>
+        Edit scan
+      </button>
       <button
         type="button"
         className="btn"
@@ -128,19 +136,16 @@ function Actions({ scan }: { scan: Scan }) {
       </button>
       <button
         type="button"
-        className="btn"
-        title="Change the length with the arrow keys (L)"
-        onClick={() => startLength(scan.id)}
-      >
-        Length
-      </button>
-      <button
-        type="button"
         className="btn btn-danger ml-auto"
         onClick={() => dispatch(removeScan(plan, scan.id))}
       >
         Remove
       </button>
+      {isEditing && (
+        <Suspense>
+          <EditScan scan={scan} number={number} onClose={() => setIsEditing(false)} />
+        </Suspense>
+      )}
     </div>
   );
 }
