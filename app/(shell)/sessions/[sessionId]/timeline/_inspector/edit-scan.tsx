@@ -59,12 +59,7 @@ export default function EditScan({ scan, number, onClose }: Props) {
         </>
       }
     >
-      <form
-        id="edit-scan"
-        onSubmit={keep}
-        noValidate
-        className="flex flex-col gap-3.5"
-      >
+      <form id="edit-scan" onSubmit={keep} noValidate className="flex flex-col gap-3.5">
         <div className="grid grid-cols-2 gap-3.5">
           <Field
             label="Start, day and UT"
