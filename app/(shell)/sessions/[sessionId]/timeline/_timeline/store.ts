@@ -4,28 +4,22 @@ import { createStore, type StoreApi } from 'zustand/vanilla';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { HOUR } from './scale';
+import { planContextOf } from '../../_plan/plan-context';
+import { clampView, HOUR } from './scale';
 import type { TimelineState } from './state';
 
 export type TimelineStore = StoreApi<TimelineState>;
 
-export function createTimelineStore(timeline: Timeline): TimelineStore {
+export function createTimelineStore(timeline: Timeline, chosenScanId: string | null = null): TimelineStore {
   const plan = unpackPlan(timeline.plan);
+  const chosen = plan.scans.find(({ id }) => id === chosenScanId);
   const mode = timeline.modes.find(({ id }) => id === timeline.session.modeId) ?? timeline.modes[0];
   if (!mode) throw new Error(`session ${timeline.session.code} has no mode`);
   return createStore<TimelineState>(() => ({
     session: timeline.session,
     stations: staveOrder(timeline.stations),
     sources: timeline.sources,
-    context: {
-      stations: byKey(timeline.stations, 'code'),
-      sources: byKey(timeline.sources, 'id'),
-      modes: byKey(timeline.modes, 'id'),
-      away: {},
-      clockReadAtMs: {},
-      nowMs: timeline.nowMs,
-      settings: timeline.settings,
-    },
+    context: planContextOf(timeline),
     mode,
     canEdit: timeline.canEdit,
     confirmed: plan,
@@ -36,9 +30,9 @@ export function createTimelineStore(timeline: Timeline): TimelineStore {
     plan,
     line: 'ok',
     notice: null,
-    view: firstView(plan.span),
+    view: chosen ? clampView({ hours: 8, startMs: chosen.startMs - 3 * HOUR }, plan) : firstView(plan.span),
     snap: 'slew',
-    chosen: null,
+    chosen: chosen ? { scanId: chosen.id, station: null } : null,
     isTrayOpen: false,
     traySourceId: null,
     pinnedSourceId: null,
@@ -63,6 +57,3 @@ function firstView(span: { startMs: number; lengthSeconds: number }) {
   const hours = span.lengthSeconds * 1000 <= 8 * HOUR ? span.lengthSeconds / 3600 : 8;
   return { startMs: span.startMs, hours: hours < 8 ? 8 : hours };
 }
-
-const byKey = <T, K extends keyof T>(items: readonly T[], key: K): Record<string, T> =>
-  Object.fromEntries(items.map((item) => [String(item[key]), item]));

@@ -15,9 +15,11 @@ import { ToolBar } from './tool-bar';
 import { Tray } from './tray';
 import { useSky } from './use-sky';
 
+type Props = { timeline: TimelineDto; chosenScanId: string | null };
+
 /** The sheet of a session: tool bar, tray, staves, notes, inspector. */
-export function Timeline({ timeline }: { timeline: TimelineDto }) {
-  const [store] = useState(() => createTimelineStore(timeline));
+export function Timeline({ timeline, chosenScanId }: Props) {
+  const [store] = useState(() => createTimelineStore(timeline, chosenScanId));
   const router = useRouter();
   const pathname = usePathname();
   const [sender] = useState(() =>

@@ -1,0 +1,26 @@
+import type { Metadata } from 'next';
+import { forbidden, notFound } from 'next/navigation';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { readTimeline } from '@/src/data/plan/read';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { SessionFrame } from '../_head/session-frame';
+import { Fringes } from './_fringes/fringes';
+
+export const metadata: Metadata = { title: 'Fringes' };
+
+export default async function FringesPage({ params }: { params: Promise<{ sessionId: string }> }) {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const { sessionId } = await params;
+  const answer = await readTimeline(viewer, sessionId);
+  if (!answer.ok) {
+    if (answer.code === 'forbidden') forbidden();
+    notFound();
+  }
+  const { timeline } = answer;
+  return (
+    <SessionFrame viewer={viewer} session={timeline.session} nowMs={timeline.nowMs}>
+      <Fringes timeline={timeline} />
+    </SessionFrame>
+  );
+}
