@@ -23,7 +23,7 @@ test('correlator staff read the matrix, find what fails and why, and go to it on
   await page.getByRole('checkbox', { name: /^Strong/ }).uncheck();
   await page.getByRole('checkbox', { name: /^Fair/ }).uncheck();
   await page.getByRole('checkbox', { name: /^Not on/ }).uncheck();
-  await page.getByLabel('Source').selectOption({ label: 'J0738+1742' });
+  await page.getByLabel('Source', { exact: true }).selectOption({ label: 'J0738+1742' });
   await panel.getByRole('button', { name: 'Next that fails' }).click();
   await expect(panel.getByText(/^Doubtful: SNR|^None expected: SNR/)).toBeVisible();
   const heading = await panel.getByRole('heading', { level: 1 }).innerText();

@@ -184,6 +184,7 @@ function MatrixRow({ row, columns, filter, sourceName, choice, isNewDay }: RowPr
           isFaint={!filter.verdicts.has(cell.verdict)}
           isChosen={isChosen && keyOf(cell) === choice.pairKey}
           isInColumn={keyOf(cell) === choice.pairKey}
+          isInRow={isChosen}
           onChoose={() => choice.choose(scan.id, keyOf(cell))}
         />
       ))}
@@ -209,10 +210,11 @@ type CellProps = {
   isFaint: boolean;
   isChosen: boolean;
   isInColumn: boolean;
+  isInRow: boolean;
   onChoose: () => void;
 };
 
-function MatrixCell({ cell, line, isFaint, isChosen, isInColumn, onChoose }: CellProps) {
+function MatrixCell({ cell, line, isFaint, isChosen, isInColumn, isInRow, onChoose }: CellProps) {
   const ref = useRef<HTMLTableCellElement>(null);
   useEffect(() => {
     if (isChosen) ref.current?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
@@ -233,15 +235,17 @@ function MatrixCell({ cell, line, isFaint, isChosen, isInColumn, onChoose }: Cel
         }`}
         style={{ fontStretch: '82%', height: 24 }}
       >
-        <CellContent cell={cell} />
+        <CellContent cell={cell} isOnWash={isInColumn || isInRow} />
       </span>
     </td>
   );
 }
 
-function CellContent({ cell }: { cell: OutlookCell }) {
+function CellContent({ cell, isOnWash }: { cell: OutlookCell; isOnWash: boolean }) {
   if (cell.verdict === 'not-on')
-    return <span className="w-full text-center text-ink3">{notOnWord(cell)}</span>;
+    return (
+      <span className={`w-full text-center ${isOnWash ? 'text-ink2' : 'text-ink3'}`}>{notOnWord(cell)}</span>
+    );
   return (
     <>
       <FringeMark verdict={cell.verdict} />
