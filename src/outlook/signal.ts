@@ -34,7 +34,7 @@ type Ends = Pick<ScanEnd, 'station' | 'place'>;
  *          coherence is the atmosphere's, 1 where the mode has no coherence time
  *
  * Left out: SEFD's change with elevation (zenith value, f = 1); the clocks' coherence; DUT1 (0.9 s turn u, v by 13.5″).
- * Error   1e-9 relative of its inputs (tests/outlook/fringe-outlook.test.ts)
+ * Error   1e-9 relative of its inputs (tests/outlook/signal.test.ts)
  * Source  TMS ch. 6, as `baselineNoiseJy`, `correlatedFluxJy`, `atmosphereCoherence`
  */
 export function signalOf(
