@@ -2,12 +2,22 @@ import type { NoddingGroup, PlanSpan, Scan, ScanStation, StationCode } from './p
 import { CommandRefused } from './refused';
 import { clockText, lengthText } from './words';
 
+/** Long enough for any scan and any session; without a bound one slip of the finger would take hours to check. */
+const LONGEST_SCAN_SECONDS = 86_400;
+const LONGEST_SESSION_SECONDS = 14 * 86_400;
+/** Where positions are worked out (src/sky/position.ts), a year inside both ends. */
+const FIRST_MS = Date.UTC(1901, 0, 1);
+const LAST_MS = Date.UTC(2099, 0, 1);
+const YEARS = 'must lie between the years 1901 and 2098. Look at the year.';
+
+const isInRange = (ms: number) => ms >= FIRST_MS && ms < LAST_MS;
+
 /**
  * The scan as a plan keeps it (stations by code), or a refusal by what the scan itself shows.
  * Overlap, slew, horizon and the session's ends are problems of a plan, not reasons to refuse.
  *
  * @param stations  codes of the session; the scan may use no other
- * @throws CommandRefused  part-second, length, double-station, nothing-left, unknown-station, leg
+ * @throws CommandRefused  part-second, length, time, double-station, nothing-left, unknown-station, leg
  */
 export function acceptScan(scan: Scan, stations: readonly StationCode[]): Scan {
   const who = scanWho(scan);
@@ -22,6 +32,14 @@ export function acceptScan(scan: Scan, stations: readonly StationCode[]): Scan {
     const read = `${scan.lengthSeconds < 0 ? '−' : ''}${lengthText(scan.lengthSeconds)}`;
     throw new CommandRefused('length', scan.id, `${who} cannot last ${read}. Give it 1 s or more.`);
   }
+  if (scan.lengthSeconds > LONGEST_SCAN_SECONDS) {
+    throw new CommandRefused(
+      'length',
+      scan.id,
+      `${who} cannot last longer than 24 h. Give a shorter length.`,
+    );
+  }
+  if (!isInRange(scan.startMs)) throw new CommandRefused('time', scan.id, `${who} ${YEARS}`);
   if ((scan.groupId === null) !== (scan.leg === null)) {
     const message = `${who} must be a target or calibrator leg of a nodding group, or belong to no group.`;
     throw new CommandRefused('leg', scan.id, message);
@@ -59,7 +77,7 @@ export function acceptGroup(group: NoddingGroup): NoddingGroup {
 /**
  * The session's span, or a refusal.
  *
- * @throws CommandRefused  part-second, length
+ * @throws CommandRefused  part-second, length, time
  */
 export function acceptSpan(span: PlanSpan): PlanSpan {
   const whole = Number.isSafeInteger(span.startMs) && span.startMs % 1000 === 0;
@@ -70,6 +88,14 @@ export function acceptSpan(span: PlanSpan): PlanSpan {
     const message = `The session ends before it starts. Set an end after ${safeClock(span.startMs)} UT.`;
     throw new CommandRefused('length', 'span', message);
   }
+  if (span.lengthSeconds > LONGEST_SESSION_SECONDS) {
+    throw new CommandRefused(
+      'length',
+      'span',
+      'A session cannot last longer than 14 days. Set an earlier end.',
+    );
+  }
+  if (!isInRange(span.startMs)) throw new CommandRefused('time', 'span', `The session ${YEARS}`);
   return span;
 }
 

@@ -3,6 +3,7 @@ import type { SubjectId } from './plan';
 export type RefusalCode =
   | 'empty'
   | 'length'
+  | 'time'
   | 'part-second'
   | 'double-station'
   | 'nothing-left'

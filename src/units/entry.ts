@@ -49,7 +49,7 @@ export function readTimeEntry(text: string, nearMs: number): Entry<number> {
 /**
  * A length as people type it: "12" or "12 min", "720 s", "12:30", "1 h 30 min".
  *
- * @returns whole seconds, at least 1, or a sentence
+ * @returns whole seconds, 1 to 86 400, or a sentence
  */
 export function readLengthEntry(text: string): Entry<number> {
   const word = text.trim().toLowerCase();
@@ -64,6 +64,7 @@ export function readLengthEntry(text: string): Entry<number> {
         : null;
   if (seconds === null) return refuse(`“${text.trim()}” is no length. Write it as 12 min or 720 s.`);
   if (seconds < 1) return refuse('A scan lasts at least 1 s. Give a longer length.');
+  if (seconds > 86_400) return refuse('A scan lasts at most 24 h. Give a shorter length.');
   return { ok: true, value: seconds };
 }
 

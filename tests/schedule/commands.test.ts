@@ -144,6 +144,8 @@ describe('a wrong command is refused with a sentence', () => {
   it.each([
     ['nothing to do', command(), 'empty', null, /nothing to do/],
     ['a length of zero', add({ lengthSeconds: 0 }), 'length', 'new', /cannot last 0 s\. Give it 1 s or more/],
+    ['a scan longer than a day', add({ lengthSeconds: 86_401 }), 'length', 'new', /longer than 24 h/],
+    ['a scan in the year 2400', add({ startMs: Date.UTC(2400, 0, 1) }), 'time', 'new', /Look at the year/],
     ['a negative length', add({ lengthSeconds: -60 }), 'length', 'new', /cannot last −1 min 00 s/],
     [
       'a length in part seconds',
@@ -233,6 +235,8 @@ describe('a wrong command is refused with a sentence', () => {
     ['a group without time on target', group({ targetOnSeconds: 0 }), 'length', 'g2', /1 s or more/],
     ['a group in part seconds', group({ turnSeconds: 0.5 }), 'part-second', 'g2', /whole seconds/],
     ['a session that ends before it starts', span(T0, -1), 'length', 'span', /ends before it starts/],
+    ['a session of three years', span(T0, 3 * 365 * 86_400), 'length', 'span', /longer than 14 days/],
+    ['a session in the year 1800', span(Date.UTC(1800, 0, 1), 60), 'time', 'span', /Look at the year/],
     ['a session in part seconds', span(T0 + 500, 60), 'part-second', 'span', /whole seconds/],
   ])('%s', (_title, given, code, subjectId, message) => {
     const refused = refusal(plan, given);

@@ -40,9 +40,12 @@ describe('a length as people type it', () => {
     expect(readLengthEntry(text)).toEqual({ ok: true, value: seconds });
   });
 
-  it.each(['', '0', '0 s', 'long', '-5', '12.5'])('“%s” is refused with a sentence', (text) => {
-    const entry = readLengthEntry(text);
-    expect(entry.ok).toBe(false);
-    if (!entry.ok) expect(entry.message).toMatch(/\.$/);
-  });
+  it.each(['', '0', '0 s', 'long', '-5', '12.5', '25 h', '99999999'])(
+    '“%s” is refused with a sentence',
+    (text) => {
+      const entry = readLengthEntry(text);
+      expect(entry.ok).toBe(false);
+      if (!entry.ok) expect(entry.message).toMatch(/\.$/);
+    },
+  );
 });

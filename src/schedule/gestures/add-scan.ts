@@ -2,14 +2,14 @@ import type { Command } from '../commands';
 import type { PlanContext } from '../context';
 import { judgePlacement } from '../feasibility';
 import { stationPaths } from '../paths';
-import type { Plan, ScanId, StationCode } from '../plan';
+import type { Plan, ScanId, ScanStation, StationCode } from '../plan';
 
 /**
  * A new scan.
  *
  * @param args  id = new, made by the caller; startMs on a whole second; without stations: those that see the source
  *              for the whole scan and are free
- * @returns stations by code, for the whole scan
+ * @returns stations by code; a code alone takes part for the whole scan
  */
 export function addScan(
   plan: Plan,
@@ -20,11 +20,11 @@ export function addScan(
     modeId: string;
     startMs: number;
     lengthSeconds: number;
-    stations?: readonly StationCode[];
+    stations?: readonly (StationCode | ScanStation)[];
   },
 ): Command {
   const { stations, ...given } = args;
-  const codes =
+  const taking =
     stations ??
     judgePlacement(
       plan,
@@ -32,7 +32,9 @@ export function addScan(
       { ignoreScanId: null, stations: 'all-up', ...given },
       stationPaths(plan, context),
     ).stations;
-  const members = [...codes].sort().map((station) => ({ station, lateSeconds: 0, earlySeconds: 0 }));
+  const members = taking
+    .map((one) => (typeof one === 'string' ? { station: one, lateSeconds: 0, earlySeconds: 0 } : one))
+    .sort((a, b) => (a.station < b.station ? -1 : 1));
   const scan = { ...given, stations: members, groupId: null, leg: null, comment: '' };
   return { verb: 'add-scan', edits: [{ kind: 'add-scan', scan }] };
 }
