@@ -1,7 +1,7 @@
 // Before anything else, in words that a Node of any age understands.
 var parts = process.versions.node.split('.').map(Number);
 
-if (parts[0] < 20 || (parts[0] === 20 && parts[1] < 12)) {
-  console.error('Antiphon needs Node 20.12 or newer; this is ' + process.versions.node + '.');
+if (parts[0] < 20 || (parts[0] === 20 && parts[1] < 19)) {
+  console.error('Antiphon needs Node 20.19 or newer; this is ' + process.versions.node + '.');
   process.exit(1);
 }
