@@ -16,13 +16,16 @@ type Props = { scan: Scan; number: string; onClose: () => void };
 /** The scan as a form: start, length, stations and comment in one change, for those who cannot or will not drag. */
 export default function EditScan({ scan, number, onClose }: Props) {
   const stations = useTimeline((state) => state.stations);
-  const plan = useTimeline((state) => state.plan);
+  const revs = useTimeline((state) => state.revs);
+  const [seenRevs] = useState(revs);
   const { dispatch } = useActs();
   const [start, setStart] = useState(`${dayText(scan.startMs)} ${clockText(scan.startMs)}`);
   const [length, setLength] = useState(shortLengthText(scan.lengthSeconds));
   const [codes, setCodes] = useState<readonly StationCode[]>(scan.stations.map(({ station }) => station));
   const [comment, setComment] = useState(scan.comment);
   const [isTried, setIsTried] = useState(false);
+  const [isRefused, setIsRefused] = useState(false);
+  const refusal = useTimeline((state) => state.notice?.message);
   const startEntry = readTimeEntry(start, scan.startMs);
   const lengthEntry = readLengthEntry(length);
 
@@ -37,7 +40,8 @@ export default function EditScan({ scan, number, onClose }: Props) {
       return isKept ? known : { station, lateSeconds: 0, earlySeconds: 0 };
     });
     const changes = { startMs: startEntry.value, lengthSeconds, stations: members, comment: comment.trim() };
-    if (dispatch(editScan(plan, scan.id, changes))) onClose();
+    if (dispatch((plan) => editScan(plan, scan.id, changes), seenRevs)) onClose();
+    else setIsRefused(true);
   };
 
   const toggle = (code: StationCode) =>
@@ -60,6 +64,11 @@ export default function EditScan({ scan, number, onClose }: Props) {
       }
     >
       <form id="edit-scan" onSubmit={keep} noValidate className="flex flex-col gap-3.5">
+        {isRefused && refusal !== undefined && (
+          <p role="alert" className="error-box">
+            {refusal}
+          </p>
+        )}
         <div className="grid grid-cols-2 gap-3.5">
           <Field
             label="Start, day and UT"

@@ -115,7 +115,6 @@ const EditScan = lazy(() => import('./edit-scan'));
 
 function Actions({ scan }: { scan: Scan }) {
   const canEdit = useTimeline((state) => state.canEdit);
-  const plan = useTimeline((state) => state.plan);
   const number = useDerived((derived) => derived.numbers.get(scan.id)) ?? '';
   const [isEditing, setIsEditing] = useState(false);
   const { dispatch } = useActs();
@@ -137,7 +136,7 @@ function Actions({ scan }: { scan: Scan }) {
       <button
         type="button"
         className="btn btn-danger ml-auto"
-        onClick={() => dispatch(removeScan(plan, scan.id))}
+        onClick={() => dispatch((plan) => removeScan(plan, scan.id))}
       >
         Remove
       </button>

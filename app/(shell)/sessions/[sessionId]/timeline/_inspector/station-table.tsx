@@ -14,7 +14,6 @@ export function StationTable({ scan }: { scan: Scan }) {
   const least = useTimeline((state) => state.context.settings.leastSpareSeconds);
   const chosen = useTimeline((state) => state.chosen?.station ?? null);
   const canEdit = useTimeline((state) => state.canEdit);
-  const plan = useTimeline((state) => state.plan);
   const legs = useDerived((derived) => derived.legs);
   const { dispatch } = useActs();
   return (
@@ -72,7 +71,7 @@ export function StationTable({ scan }: { scan: Scan }) {
                     type="button"
                     className="text-small text-ink2 underline underline-offset-[3px]"
                     aria-label={`${takesPart ? 'Take' : 'Put'} ${code} ${takesPart ? 'out' : 'in'}`}
-                    onClick={() => dispatch(toggleStation(plan, scan.id, code))}
+                    onClick={() => dispatch((plan) => toggleStation(plan, scan.id, code))}
                   >
                     {takesPart ? 'out' : 'in'}
                   </button>

@@ -53,6 +53,7 @@ export function DragProvider({ table, children }: { table: SkyTable | null; chil
       stations: 'all-up',
       snappedTo: null,
       pointer: { x, y },
+      seenRevs: store.getState().revs,
       outStation: null,
     });
   };

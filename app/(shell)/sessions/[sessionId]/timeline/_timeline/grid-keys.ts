@@ -1,4 +1,5 @@
 import type { KeyboardEvent } from 'react';
+import type { Plan, ScanId, StationCode } from '@/src/schedule/plan';
 import { removeScan } from '@/src/schedule/gestures/remove-scan';
 import { toggleStation } from '@/src/schedule/gestures/toggle-station';
 import { useActs } from './acts';
@@ -80,13 +81,13 @@ export function useGridKeys() {
   }
 
   function onScan(key: string): boolean {
-    const { plan, chosen, canEdit } = store.getState();
-    if (!chosen || !canEdit) return false;
+    const { chosen, canEdit, placing: isHeld } = store.getState();
+    if (!chosen || !canEdit || isHeld) return false;
     if (key === 'm') placing.startMove(chosen.scanId);
     else if (key === 'l') placing.startLength(chosen.scanId);
-    else if (key === 'delete' || key === 'backspace') acts.dispatch(removeScan(plan, chosen.scanId));
-    else if (key === ' ' && chosen.station !== null)
-      acts.dispatch(toggleStation(plan, chosen.scanId, chosen.station));
+    else if (key === 'delete' || key === 'backspace')
+      acts.dispatch((plan) => removeScan(plan, chosen.scanId));
+    else if (key === ' ' && chosen.station !== null) acts.dispatch(toggleOf(chosen.scanId, chosen.station));
     else return false;
     return true;
   }
@@ -155,6 +156,9 @@ export function useGridKeys() {
     }
   };
 }
+
+const toggleOf = (scanId: ScanId, station: StationCode) => (plan: Plan) =>
+  toggleStation(plan, scanId, station);
 
 /** The first scan in view: where the arrows begin. */
 function firstSeen({ plan, view, stations }: TimelineState): number {

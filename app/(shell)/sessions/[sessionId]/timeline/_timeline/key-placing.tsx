@@ -64,9 +64,9 @@ export function KeyPlacingProvider({
     focusGrid();
   };
   const pick = (scanId: ScanId, what: 'move' | 'length') => {
-    const { plan, canEdit } = store.getState();
+    const { plan, canEdit, revs } = store.getState();
     const scan = plan.scans.find(({ id }) => id === scanId);
-    if (scan && canEdit) begin(pickedUp(scan, what, null));
+    if (scan && canEdit) begin(pickedUp(scan, what, null, revs));
   };
   const change = (update: (placing: Placing) => Placing) => {
     const { placing } = store.getState();
@@ -119,6 +119,7 @@ function newPlacing(state: TimelineState, sourceId: string): Placing {
     stations: 'all-up',
     snappedTo: null,
     pointer: null,
+    seenRevs: state.revs,
     outStation: null,
   };
 }

@@ -1,32 +1,40 @@
 import type { ActFailure, JournalPage, Revs, Taken } from '@/src/data/plan/dto';
 import type { Failure } from '@/src/data/errors';
 import { applyCommand, CommandRefused, subjectsOf, type Command } from '@/src/schedule/commands';
-import type { Plan } from '@/src/schedule/plan';
+import type { Plan, SubjectId } from '@/src/schedule/plan';
 import { newId } from './ids';
+import { createOwnRevs } from './own-revs';
 import type { PendingAct } from './state';
 import type { TimelineStore } from './store';
 
 const RETRY_SECONDS = [5, 15, 60];
 
+/** What to do, or how to make it from the plan as it is now. */
+export type Doing = Command | ((plan: Plan) => Command);
+
 /**
  * Carries acts to the server: one in flight, in order, each applied at once on the sheet and again on the
- * confirmed plan when it is taken. A lost line keeps them waiting.
+ * confirmed plan when it is taken. An act stands on the revisions its person saw; only answers to this window's
+ * own acts move them on. A lost line or an ended login keeps acts waiting.
  */
-export function createSender(store: TimelineStore, onSignedOut: () => void) {
+export function createSender(store: TimelineStore) {
   let running = false;
   let wake: (() => void) | null = null;
   let catching: Promise<void> = Promise.resolve();
   /** rows newer than the last catch-up that the confirmed plan holds already */
   const applied = new Set<number>();
+  const own = createOwnRevs();
   const url = () => `/api/sessions/${store.getState().session.id}`;
 
-  function dispatch(command: Command): boolean {
+  /** @param seenRevs  what the person saw when the gesture began; now, if it took no time */
+  function dispatch(doing: Doing, seenRevs: Revs = store.getState().revs): boolean {
     const { plan, pending } = store.getState();
     try {
-      const next = applyCommand(plan, command).plan;
+      const command = typeof doing === 'function' ? doing(plan) : doing;
+      const seen = Object.fromEntries(subjectsOf(plan, command).map((id) => [id, seenRevs[id] ?? 0]));
       store.setState({
-        plan: next,
-        pending: [...pending, { actId: newId(), kind: 'do', command }],
+        plan: applyCommand(plan, command).plan,
+        pending: [...pending, { actId: newId(), kind: 'do', command, seen }],
         notice: null,
       });
     } catch (error) {
@@ -51,6 +59,10 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
       let failures = 0;
       for (let [act] = store.getState().pending; act; [act] = store.getState().pending) {
         const answer = await post(act);
+        if (answer && !answer.ok && answer.code === 'unauthenticated') {
+          store.setState({ line: 'signed-out' });
+          return;
+        }
         const isDone = answer !== null && (answer.ok ? await taken(act, answer) : await refused(act, answer));
         if (!isDone) {
           store.setState({ line: 'lost' });
@@ -65,28 +77,18 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
     }
   }
 
-  /** null where no answer came: the line, or a server that fell over. */
+  /** null where no answer of ours came: the line, or something between that answers in its own words. */
   async function post(act: PendingAct): Promise<Taken | ActFailure | null> {
-    const { confirmed, revs } = store.getState();
+    const { actId, kind } = act;
     const body =
       act.kind === 'do'
-        ? {
-            ...act,
-            seen: Object.fromEntries(subjectsOf(confirmed, act.command).map((id) => [id, revs[id] ?? 0])),
-          }
-        : act;
-    try {
-      const response = await fetch(`${url()}/commands`, {
-        method: 'POST',
-        headers: { 'content-type': 'application/json' },
-        body: JSON.stringify(body),
-      });
-      const answer = (await response.json()) as Taken | ActFailure;
-      return !answer.ok && answer.code === 'unexpected' && response.status >= 502 ? null : answer;
-    } catch (error) {
-      if (error instanceof TypeError || error instanceof SyntaxError) return null;
-      throw error;
-    }
+        ? { actId, kind, command: act.command, seen: own.advanced(act.seen) }
+        : { actId, kind };
+    return ask<Taken | ActFailure>(`${url()}/commands`, {
+      method: 'POST',
+      headers: { 'content-type': 'application/json' },
+      body: JSON.stringify(body),
+    });
   }
 
   /**
@@ -94,7 +96,8 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
    * An undo or redo may stand on rows not seen here, so the journal brings it in its turn.
    */
   async function taken(act: PendingAct, answer: Taken): Promise<boolean> {
-    if (answer.kind !== 'do') await catchUp();
+    if (act.kind === 'do') own.note(own.advanced(act.seen), answer.subjects);
+    else await catchUp();
     const { confirmed, revs, seq, pending } = store.getState();
     const isIn = answer.seq <= seq || applied.has(answer.seq);
     if (!isIn && answer.kind !== 'do') return false;
@@ -107,19 +110,24 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
     return true;
   }
 
+  /** Takes the act off the sheet, and with it what was done on top of it: later acts on the same, and steps behind. */
   async function refused(act: PendingAct, failure: ActFailure): Promise<boolean> {
     const { confirmed, pending } = store.getState();
-    settle(
-      confirmed,
-      pending.filter((other) => other.actId !== act.actId),
-    );
-    if (failure.code === 'unauthenticated') {
-      onSignedOut();
-      return true;
-    }
+    const behind = pending.slice(pending.findIndex(({ actId }) => actId === act.actId) + 1);
+    const touched = new Set<SubjectId>(act.kind === 'do' ? Object.keys(act.seen) : []);
+    const kept = behind.filter((other) => {
+      if (other.kind !== 'do') return act.kind !== 'do';
+      const subjects = Object.keys(other.seen);
+      if (!subjects.some((id) => touched.has(id))) return true;
+      subjects.forEach((id) => touched.add(id));
+      return false;
+    });
+    settle(confirmed, kept);
     if (failure.code === 'conflict') await catchUp();
+    const lost = behind.length - kept.length;
+    const more = lost > 0 ? ` ${lost} later ${lost === 1 ? 'step' : 'steps'} of yours went with it.` : '';
     const mine = failure.reason === 'changed' && act.kind === 'do' ? act.command : null;
-    store.setState({ notice: { message: failure.message, mine } });
+    store.setState({ notice: { message: `${failure.message}${more}`, mine } });
     return true;
   }
 
@@ -131,30 +139,38 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
 
   async function readOn(): Promise<void> {
     for (let more = true; more;) {
-      const page = await fetchPage();
-      if (!page?.ok) return;
-      const { confirmed, revs, pending } = store.getState();
-      const news = page.entries.filter(({ seq }) => !applied.has(seq));
-      const plan = news.reduce((current, { command }) => applyCommand(current, command).plan, confirmed);
-      const arrived = new Set(news.map(({ actId }) => actId));
-      for (const { seq } of page.entries) applied.delete(seq);
-      if (page.entries.length > 0) {
-        const newRevs = page.entries.reduce((current, { subjects }) => newer(current, subjects), revs);
-        const waiting = pending.filter(({ kind, actId }) => kind !== 'do' || !arrived.has(actId));
-        settle(plan, waiting, { revs: newRevs, seq: page.seq });
-      }
+      const page = await ask<JournalPage | Failure>(`${url()}/journal?after=${store.getState().seq}`);
+      if (page === null) return store.setState({ line: 'lost' });
+      if (!page.ok) return unread(page);
+      if (store.getState().line !== 'ok' && !running) store.setState({ line: 'ok' });
+      if (page.entries.length > 0) takeIn(page);
       more = page.hasMore;
     }
   }
 
-  async function fetchPage(): Promise<JournalPage | Failure | null> {
-    try {
-      const response = await fetch(`${url()}/journal?after=${store.getState().seq}`);
-      return (await response.json()) as JournalPage | Failure;
-    } catch (error) {
-      if (error instanceof TypeError || error instanceof SyntaxError) return null;
-      throw error;
+  function takeIn(page: JournalPage) {
+    const { confirmed, revs, pending } = store.getState();
+    const news = page.entries.filter(({ seq }) => !applied.has(seq));
+    const plan = news.reduce((current, { command }) => applyCommand(current, command).plan, confirmed);
+    const mine = new Set(pending.map(({ actId }) => actId));
+    let newRevs = revs;
+    for (const { seq, actId, subjects } of page.entries) {
+      if (mine.has(actId)) own.note(pick(newRevs, Object.keys(subjects)), subjects);
+      newRevs = newer(newRevs, subjects);
+      applied.delete(seq);
     }
+    const arrived = new Set(news.map(({ actId }) => actId));
+    const waiting = pending.filter(({ kind, actId }) => kind !== 'do' || !arrived.has(actId));
+    settle(plan, waiting, { revs: newRevs, seq: page.seq });
+  }
+
+  /** Others' changes could not be read: the sheet may be old, and says so. */
+  function unread(failure: Failure) {
+    if (failure.code === 'unauthenticated') store.setState({ line: 'signed-out' });
+    else
+      store.setState({
+        notice: { message: `The plan could not be brought up to date. ${failure.message}`, mine: null },
+      });
   }
 
   /** The confirmed plan with the waiting acts on top; one that no longer fits is dropped with its reason. */
@@ -198,10 +214,33 @@ export function createSender(store: TimelineStore, onSignedOut: () => void) {
     });
   }
 
-  return { dispatch, step, catchUp, wake: () => wake?.() };
+  /** Sends what waits at once: the line is back, or someone signed in again. */
+  function resume() {
+    wake?.();
+    void pump();
+  }
+
+  return { dispatch, step, catchUp, resume };
 }
 
 export type Sender = ReturnType<typeof createSender>;
+
+const CODES = new Set(['invalid', 'unauthenticated', 'forbidden', 'not_found', 'conflict', 'unexpected']);
+
+/** An answer of ours, or null. */
+async function ask<T extends { ok: true } | Failure>(address: string, init?: RequestInit): Promise<T | null> {
+  try {
+    const response = await fetch(address, init);
+    const answer = (await response.json()) as T;
+    return answer.ok === true || ('code' in answer && CODES.has(answer.code)) ? answer : null;
+  } catch (error) {
+    if (error instanceof TypeError || error instanceof SyntaxError) return null;
+    throw error;
+  }
+}
+
+const pick = (revs: Revs, ids: readonly SubjectId[]): Revs =>
+  Object.fromEntries(ids.map((id) => [id, revs[id] ?? 0]));
 
 function newer(revs: Revs, changed: Revs): Revs {
   const merged = { ...revs };

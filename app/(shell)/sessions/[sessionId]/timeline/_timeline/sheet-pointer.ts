@@ -11,6 +11,8 @@ import { useDrop } from './use-drop';
 
 const PICK_UP_PX = 4;
 
+type Point = { x: number; y: number };
+
 /** Choosing by click, moving and stretching by drag; a touch chooses, and moves by the buttons of the inspector. */
 export function useSheetPointer(frame: Frame) {
   const store = useTimelineStore();
@@ -38,10 +40,11 @@ export function useSheetPointer(frame: Frame) {
   /** The drag is computed from the scan as it was at pick-up, never from the last frame. */
   function followDrag(sheet: HTMLElement, hit: Hit, from: { x: number; y: number }) {
     let isHeld = false;
+    const { revs } = store.getState();
     const move = (event: PointerEvent) => {
       const at = pointIn(sheet, event);
       isHeld ||= Math.hypot(at.x - from.x, at.y - from.y) >= PICK_UP_PX;
-      if (isHeld) store.setState({ placing: placingOf(hit, from, at) });
+      if (isHeld) store.setState({ placing: placingOf(hit, from, at, revs) });
     };
     const end = (event: PointerEvent) => {
       stop();
@@ -66,8 +69,8 @@ export function useSheetPointer(frame: Frame) {
     window.addEventListener('keydown', escape, true);
   }
 
-  function placingOf(hit: Hit, from: { x: number; y: number }, at: { x: number; y: number }): Placing {
-    const held0 = pickedUp(hit.scan, hit.part === 'stop' ? 'length' : 'move', at);
+  function placingOf(hit: Hit, from: Point, at: Point, revs: Placing['seenRevs']): Placing {
+    const held0 = pickedUp(hit.scan, hit.part === 'stop' ? 'length' : 'move', at, revs);
     const state = store.getState();
     if (hit.part === 'stop') {
       const stopMs = scanStopMs(hit.scan) + msAt(frame, at.x) - msAt(frame, from.x);
@@ -99,7 +102,12 @@ export function useSheetPointer(frame: Frame) {
   return { onPointerDown, onPointerMove };
 }
 
-export function pickedUp(scan: Scan, what: 'move' | 'length', pointer: Placing['pointer']): Placing {
+export function pickedUp(
+  scan: Scan,
+  what: 'move' | 'length',
+  pointer: Placing['pointer'],
+  seenRevs: Placing['seenRevs'],
+): Placing {
   return {
     by: pointer ? 'pointer' : 'keys',
     what,
@@ -111,6 +119,7 @@ export function pickedUp(scan: Scan, what: 'move' | 'length', pointer: Placing['
     stations: scan.stations,
     snappedTo: null,
     pointer,
+    seenRevs,
     outStation: null,
   };
 }

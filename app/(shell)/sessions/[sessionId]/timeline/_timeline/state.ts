@@ -1,10 +1,13 @@
-import type { Steps, Timeline } from '@/src/data/plan/dto';
+import type { Revs, Steps, Timeline } from '@/src/data/plan/dto';
 import type { PlanContext, PlanMode } from '@/src/schedule/context';
 import type { Command } from '@/src/schedule/commands';
 import type { Plan, ScanId, ScanStation, StationCode, SubjectId } from '@/src/schedule/plan';
 import type { View } from './scale';
 
-export type PendingAct = { actId: string } & ({ kind: 'do'; command: Command } | { kind: 'undo' | 'redo' });
+/** seen: the revisions that the person saw, fixed when the gesture began */
+export type PendingAct = { actId: string } & (
+  { kind: 'do'; command: Command; seen: Revs } | { kind: 'undo' | 'redo' }
+);
 
 /** What is held over the sheet, by pointer or by keys, before it is dropped. */
 export type Placing = {
@@ -22,6 +25,8 @@ export type Placing = {
   snappedTo: string | null;
   /** pointer on the sheet, px; keys have none */
   pointer: { x: number; y: number } | null;
+  /** the revisions when it was taken up */
+  seenRevs: Revs;
   /** a scan dragged out of the staves by one note loses this station */
   outStation: StationCode | null;
 };
@@ -49,7 +54,7 @@ export type TimelineState = {
   pending: readonly PendingAct[];
   /** confirmed with the pending acts applied: what is drawn */
   plan: Plan;
-  line: 'ok' | 'lost';
+  line: 'ok' | 'lost' | 'signed-out';
   notice: Notice | null;
 
   view: View;
@@ -60,6 +65,4 @@ export type TimelineState = {
   traySourceId: string | null;
   pinnedSourceId: string | null;
   placing: Placing | null;
-  /** said by the live region */
-  said: string;
 };

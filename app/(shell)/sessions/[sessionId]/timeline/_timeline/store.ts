@@ -37,7 +37,6 @@ export function createTimelineStore(timeline: Timeline, chosenScanId: string | n
     traySourceId: null,
     pinnedSourceId: null,
     placing: null,
-    said: '',
   }));
 }
 

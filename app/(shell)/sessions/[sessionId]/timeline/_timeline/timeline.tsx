@@ -1,6 +1,5 @@
 'use client';
 
-import { usePathname, useRouter } from 'next/navigation';
 import { lazy, Suspense, useEffect, useState } from 'react';
 import type { Timeline as TimelineDto } from '@/src/data/plan/dto';
 import { Inspector } from '../_inspector/inspector';
@@ -20,11 +19,7 @@ type Props = { timeline: TimelineDto; chosenScanId: string | null };
 /** The sheet of a session: tool bar, tray, staves, notes, inspector. */
 export function Timeline({ timeline, chosenScanId }: Props) {
   const [store] = useState(() => createTimelineStore(timeline, chosenScanId));
-  const router = useRouter();
-  const pathname = usePathname();
-  const [sender] = useState(() =>
-    createSender(store, () => router.push(`/sign-in?next=${encodeURIComponent(pathname)}`)),
-  );
+  const [sender] = useState(() => createSender(store));
   const [acts] = useState(() => ({
     dispatch: sender.dispatch,
     undo: () => sender.step('undo'),
@@ -33,7 +28,7 @@ export function Timeline({ timeline, chosenScanId }: Props) {
   useEffect(() => {
     void sender.catchUp();
     const onReturn = () => {
-      sender.wake();
+      sender.resume();
       if (document.visibilityState === 'visible') void sender.catchUp();
     };
     const onUndoKey = (event: KeyboardEvent) => {

@@ -144,14 +144,9 @@ function EditPart() {
   const canEdit = useTimeline((state) => state.canEdit);
   const undoName = useTimeline((state) => nameOfUndo(state));
   const redoName = useTimeline((state) => (state.pending.length > 0 ? null : nameOf(state.steps.redo)));
-  const waiting = useTimeline((state) => (state.line === 'lost' ? state.pending.length : 0));
   return (
     <div className="ml-auto flex h-bar items-center gap-2 px-3.5">
-      {waiting > 0 && (
-        <span role="status" className="chip border-dashed border-ochre bg-ochre-wash">
-          No line: {waiting} {waiting === 1 ? 'change' : 'changes'} waiting
-        </span>
-      )}
+      <LineState />
       {canEdit ? (
         <>
           <StepButton word="Undo" name={undoName} keys="Ctrl or ⌘ Z" run={undo} />
@@ -162,6 +157,25 @@ function EditPart() {
       )}
       <ProblemCount />
     </div>
+  );
+}
+
+/** What keeps changes from going out, and how many wait. */
+function LineState() {
+  const line = useTimeline((state) => state.line);
+  const waiting = useTimeline((state) => state.pending.length);
+  if (line === 'ok') return null;
+  const count = `${waiting} ${waiting === 1 ? 'change' : 'changes'} waiting`;
+  return (
+    <span role="status" className="chip border-dashed border-ochre bg-ochre-wash">
+      {line === 'lost' ? 'No line' : 'The login has ended'}
+      {waiting > 0 && `: ${count}`}
+      {line === 'signed-out' && (
+        <a href="/sign-in" target="_blank" rel="noreferrer" className="underline">
+          Sign in
+        </a>
+      )}
+    </span>
   );
 }
 

@@ -3,11 +3,12 @@ import { addScan } from '@/src/schedule/gestures/add-scan';
 import { changeLength } from '@/src/schedule/gestures/change-length';
 import { moveScan } from '@/src/schedule/gestures/move-scan';
 import { toggleStation } from '@/src/schedule/gestures/toggle-station';
-import type { Command } from '@/src/schedule/commands';
+import type { PlanContext } from '@/src/schedule/context';
 import type { ScanId } from '@/src/schedule/plan';
 import { useActs } from './acts';
 import { newId } from './ids';
 import { judge } from './placement';
+import type { Doing } from './sender';
 import type { Placing, TimelineState } from './state';
 import { useTimelineStore } from './store';
 
@@ -23,11 +24,12 @@ export function useDrop(): (way: Way) => void {
     if (!placing) return;
     store.setState({ placing: null });
     if (placing.outStation !== null && placing.scanId !== null) {
-      dispatch(toggleStation(state.plan, placing.scanId, placing.outStation));
-      showToast({
-        message: `${placing.outStation} was left out of the scan.`,
-        action: { label: 'Undo', run: undo },
-      });
+      const { scanId, outStation } = placing;
+      const isDone = dispatch((plan) => toggleStation(plan, scanId, outStation), placing.seenRevs);
+      if (isDone) {
+        const message = `${outStation} was left out of the scan.`;
+        showToast({ message, action: { label: 'Undo', run: undo } });
+      }
       return;
     }
     if (placing.what !== 'new' && !copy && isWhereItWas(placing, state)) return;
@@ -36,27 +38,24 @@ export function useDrop(): (way: Way) => void {
       showToast({ message: `Not dropped. ${judged.reason} Hold Shift to drop it all the same.` });
       return;
     }
-    const { scanId, command } = commandOf(placing, state, copy);
-    if (dispatch(command)) store.setState({ chosen: { scanId, station: null } });
+    const { scanId, doing } = doingOf(placing, state.context, copy);
+    if (dispatch(doing, placing.seenRevs)) store.setState({ chosen: { scanId, station: null } });
   };
 }
 
-function commandOf(
-  placing: Placing,
-  { plan, context }: TimelineState,
-  copy: boolean,
-): { scanId: ScanId; command: Command } {
+function doingOf(placing: Placing, context: PlanContext, copy: boolean): { scanId: ScanId; doing: Doing } {
   const { scanId, sourceId, modeId, startMs, lengthSeconds, stations } = placing;
   if (scanId === null || copy) {
     const id = newId();
-    const codes = stations === 'all-up' ? {} : { stations: stations.map(({ station }) => station) };
+    const members = stations === 'all-up' ? {} : { stations };
     return {
       scanId: id,
-      command: addScan(plan, context, { id, sourceId, modeId, startMs, lengthSeconds, ...codes }),
+      doing: (plan) => addScan(plan, context, { id, sourceId, modeId, startMs, lengthSeconds, ...members }),
     };
   }
-  if (placing.what === 'length') return { scanId, command: changeLength(plan, scanId, lengthSeconds) };
-  return { scanId, command: moveScan(plan, scanId, startMs) };
+  if (placing.what === 'length')
+    return { scanId, doing: (plan) => changeLength(plan, scanId, lengthSeconds) };
+  return { scanId, doing: (plan) => moveScan(plan, scanId, startMs) };
 }
 
 function isWhereItWas({ scanId, startMs, lengthSeconds }: Placing, { plan }: TimelineState): boolean {
