@@ -146,7 +146,12 @@ for (const theme of THEMES) {
 test('on a phone nothing runs out of the screen', async ({ pageAs }) => {
   const page = await pageAs('scheduler');
   await page.setViewportSize({ width: 390, height: 844 });
-  for (const address of ['/sessions', '/sessions/ARC-951/timeline']) {
+  for (const address of [
+    '/sessions',
+    '/sessions/ARC-951/timeline',
+    '/sessions/ARC-031/timeline',
+    '/sessions/ARC-031/fringes',
+  ]) {
     await page.goto(address);
     await expect(page.getByRole('main')).toBeVisible();
     const overflow = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);

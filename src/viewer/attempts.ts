@@ -16,9 +16,10 @@ const build = (): Limits => ({
 const store: typeof globalThis & { antiphonAttempts?: Limits } = globalThis;
 const limits = () => (store.antiphonAttempts ??= build());
 
-/** Counts a try before the password is looked at; answers the seconds to wait, 0 to go on. */
+/** Counts a try before the password is looked at; answers the seconds to wait, 0 to go on. A blocked account takes nothing from the total, so that it cannot lock the others out. */
 export async function countAttempt(email: string): Promise<number> {
-  return Math.max(await take(limits().account, email), await take(limits().total, 'all'));
+  const wait = await take(limits().account, email);
+  return wait > 0 ? wait : take(limits().total, 'all');
 }
 
 /** A right password gives its tries back, so that only wrong ones add up. */

@@ -13,8 +13,6 @@ const session = (code: string, startHours: number, stations = ['Af', 'Bm']): Ses
   startMs: nowMs + startHours * HOUR_MS,
   lengthSeconds: 2 * 3600,
   stations,
-  modeName: '22 GHz',
-  sourceCount: 1,
   scanCount: 0,
   canReadPlan: true,
 });

@@ -4,6 +4,7 @@ import { readJournal, readTimeline } from '@/src/data/plan/read';
 import { takeAct } from '@/src/data/plan/write';
 import { derivedState } from '@/src/data/session/dto';
 import { listSessions, readSession } from '@/src/data/session/read';
+import { listStations } from '@/src/data/station/read';
 import { unpackPlan } from '@/src/schedule/plan-rows';
 import { makeScan, makeSession, makeViewer, newId, NOW, openDatabase } from '@/tests/helpers/database';
 
@@ -113,8 +114,29 @@ describe('who reads and writes a plan', () => {
   });
 });
 
+describe('the stations of a list', () => {
+  it('come with name and longitude, and nothing else', async () => {
+    const answer = await listStations(await makeViewer('operator', { stationCode: 'Af' }), ['Af']);
+    expect(answer).toEqual({
+      ok: true,
+      stations: [
+        { code: 'Af', name: 'Arrow Fell', site: { longitudeDeg: expect.closeTo(12.1, 1) as number } },
+      ],
+    });
+  });
+
+  it('are not for one without a role', async () => {
+    const nobody = { userId: 'x', email: 'x@antiphon.example', theme: null, grants: [] };
+    expect(await listStations(nobody, ['Af'])).toMatchObject({ code: 'forbidden' });
+  });
+
+  it('that do not exist are left out', async () => {
+    expect(await listStations(await makeViewer('admin'), ['Zz'])).toEqual({ ok: true, stations: [] });
+  });
+});
+
 describe('the list of sessions', () => {
-  it('says how many scans and sources, and hides the draft’s count from operators', async () => {
+  it('says how many scans, and hides the draft’s count from operators', async () => {
     const find = async (role: 'scheduler' | 'operator') => {
       const viewer = await makeViewer(role, role === 'operator' ? { stationCode: 'Af' } : {});
       const answer = await listSessions(viewer);
@@ -122,7 +144,6 @@ describe('the list of sessions', () => {
     };
     expect(await find('scheduler')).toMatchObject({
       scanCount: 73,
-      sourceCount: 11,
       stations: ['Af', 'Bm', 'Cf', 'Dp', 'Em', 'Fn'],
       canReadPlan: true,
     });

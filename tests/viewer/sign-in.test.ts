@@ -2,7 +2,7 @@ import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { signIn, signOut } from '@/app/(auth)/sign-in/actions';
 import { setTheme } from '@/app/(auth)/theme-action';
 import { database } from '@/db/client';
-import { TRIES_PER_ACCOUNT } from '@/src/viewer/attempts';
+import { countAttempt, TRIES_IN_TOTAL, TRIES_PER_ACCOUNT } from '@/src/viewer/attempts';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { passwordMatches } from '@/src/viewer/password';
 import { safeReturnPath } from '@/src/viewer/return-path';
@@ -77,6 +77,7 @@ describe('sign-in', () => {
       ok: false,
       code: 'invalid',
       message: 'That e-mail and password do not match.',
+      advice: 'Check both, or ask an administrator for a new password.',
       email,
     });
     expect(jar.size).toBe(0);
@@ -102,6 +103,13 @@ describe('sign-in', () => {
     const answer = await signIn(null, form(email, 'antiphon-demo'));
     expect(answer?.message).toMatch(/^Too many tries\. Try again in 1\d min \d\d s\.$/);
     await expect(signIn(null, form('operator@arrowfell.example', 'antiphon-demo'))).rejects.toThrow('to');
+  });
+
+  it('lets one blocked account lock out nobody else, however often it is tried', async () => {
+    const waits = [];
+    for (let n = 0; n < TRIES_IN_TOTAL + 20; n++) waits.push(await countAttempt('blocked@antiphon.example'));
+    expect(waits.filter((wait) => wait > 0).length).toBeGreaterThanOrEqual(TRIES_IN_TOTAL);
+    expect(await countAttempt('other@antiphon.example')).toBe(0);
   });
 
   it('takes a password of no account for wrong', async () => {

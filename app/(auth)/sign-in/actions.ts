@@ -11,6 +11,7 @@ export type SignInState = {
   ok: false;
   code: 'invalid';
   message: string;
+  advice?: string;
   fields?: { email?: string[]; password?: string[] };
   /** what was typed, to be kept */
   email: string;
@@ -36,10 +37,11 @@ export async function signIn(_: SignInState, form: FormData): Promise<SignInStat
   }
   const answer = await startLogin(parsed.data.email, parsed.data.password);
   if (!answer.ok) {
-    const message =
-      answer.reason === 'mismatch'
-        ? 'That e-mail and password do not match.'
-        : `Too many tries. Try again in ${lengthText(answer.waitSeconds)}.`;
+    if (answer.reason === 'mismatch') {
+      const advice = 'Check both, or ask an administrator for a new password.';
+      return { ok: false, code: 'invalid', message: 'That e-mail and password do not match.', advice, email };
+    }
+    const message = `Too many tries. Try again in ${lengthText(answer.waitSeconds)}.`;
     return { ok: false, code: 'invalid', message, email };
   }
   redirect(safeReturnPath(form.get('next')) as Route);

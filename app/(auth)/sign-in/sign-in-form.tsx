@@ -32,7 +32,7 @@ export function SignInForm({ next, demo }: { next: string; demo: DemoAccounts | 
       {state && (
         <div ref={problem} tabIndex={-1} role="alert" className="error-box">
           <p className="font-strong">{state.message}</p>
-          {!state.fields && <p>Check both, or ask an administrator for a new password.</p>}
+          {state.advice !== undefined && <p>{state.advice}</p>}
         </div>
       )}
       <input type="hidden" name="next" value={next} />

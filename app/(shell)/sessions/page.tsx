@@ -3,9 +3,8 @@ import { forbidden } from 'next/navigation';
 import { Suspense } from 'react';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
-import { db } from '@/db/client';
-import { readStations } from '@/src/data/plan/context';
 import { listSessions } from '@/src/data/session/read';
+import { listStations } from '@/src/data/station/read';
 import type { Viewer } from '@/src/access/policy';
 import { nowMs } from '@/src/env';
 import { currentViewer } from '@/src/viewer/current-viewer';
@@ -36,6 +35,8 @@ async function Sessions({ viewer, now, find }: { viewer: Viewer; now: number; fi
   const answer = await listSessions(viewer);
   if (!answer.ok) forbidden();
   const codes = [...new Set(answer.sessions.flatMap((session) => session.stations))];
-  const stations = staveOrder(await readStations(db(), codes)).map(({ code, name }) => ({ code, name }));
+  const named = await listStations(viewer, codes);
+  if (!named.ok) forbidden();
+  const stations = staveOrder(named.stations).map(({ code, name }) => ({ code, name }));
   return <Listing sessions={answer.sessions} stations={stations} nowMs={now} find={find} />;
 }

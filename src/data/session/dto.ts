@@ -16,8 +16,6 @@ export type SessionHead = {
 };
 
 export type SessionListItem = SessionHead & {
-  modeName: string;
-  sourceCount: number;
   /** null where the viewer may not see the draft plan */
   scanCount: number | null;
   canReadPlan: boolean;

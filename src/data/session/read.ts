@@ -1,9 +1,7 @@
 import 'server-only';
-import { eq, sql } from 'drizzle-orm';
+import { sql } from 'drizzle-orm';
 import { db } from '../../../db/client';
-import { modes } from '../../../db/schema/modes';
 import { scans } from '../../../db/schema/scans';
-import { sessionSources } from '../../../db/schema/session-sources';
 import { sessionStations } from '../../../db/schema/session-stations';
 import { sessions } from '../../../db/schema/sessions';
 import { can, whoCanGrant, type Viewer } from '../../access/policy';
@@ -24,13 +22,10 @@ export const listSessions = (viewer: Viewer): Promise<{ ok: true; sessions: Sess
         state: sessions.state,
         startMs: sessions.startMs,
         lengthSeconds: sessions.lengthSeconds,
-        modeName: modes.name,
-        stations: sql<string>`(SELECT json_group_array(${sessionStations.stationCode} ORDER BY ${sessionStations.stationCode}) FROM ${sessionStations} WHERE ${sessionStations.sessionId} = ${sessions.id})`,
-        sourceCount: sql<number>`(SELECT count(*) FROM ${sessionSources} WHERE ${sessionSources.sessionId} = ${sessions.id})`,
-        scanCount: sql<number>`(SELECT count(*) FROM ${scans} WHERE ${scans.sessionId} = ${sessions.id})`,
+        stations: sql<string>`(SELECT json_group_array(${sessionStations.stationCode} ORDER BY ${sessionStations.stationCode}) FROM ${sessionStations} WHERE ${sessionStations}.session_id = ${sessions}.id)`,
+        scanCount: sql<number>`(SELECT count(*) FROM ${scans} WHERE ${scans}.session_id = ${sessions}.id)`,
       })
       .from(sessions)
-      .innerJoin(modes, eq(modes.id, sessions.modeId))
       .where(readableBy(viewer))
       .orderBy(sql`${sessions.startMs} DESC`, sessions.code);
     const now = nowMs();
@@ -61,5 +56,16 @@ function listItem(
   const stations = JSON.parse(row.stations) as string[];
   const canReadPlan = can(viewer, 'plan.read-draft', subjectOf({ id: row.id, stations }));
   const scanCount = canReadPlan ? row.scanCount : null;
-  return { ...row, state: derivedState(row, now), stations, scanCount, canReadPlan };
+  const { id, code, title, startMs, lengthSeconds } = row;
+  return {
+    id,
+    code,
+    title,
+    state: derivedState(row, now),
+    startMs,
+    lengthSeconds,
+    stations,
+    scanCount,
+    canReadPlan,
+  };
 }
