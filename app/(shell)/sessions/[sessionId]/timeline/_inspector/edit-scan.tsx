@@ -34,11 +34,14 @@ export default function EditScan({ scan, number, onClose }: Props) {
     setIsTried(true);
     if (!startEntry.ok || !lengthEntry.ok) return;
     const lengthSeconds = lengthEntry.value;
-    const members = [...codes].sort().map((station) => {
-      const known = scan.stations.find((member) => member.station === station);
-      const isKept = known && known.lateSeconds + known.earlySeconds < lengthSeconds;
-      return isKept ? known : { station, lateSeconds: 0, earlySeconds: 0 };
-    });
+    const members = [...codes].sort().map(
+      (code) =>
+        scan.stations.find(({ station }) => station === code) ?? {
+          station: code,
+          lateSeconds: 0,
+          earlySeconds: 0,
+        },
+    );
     const changes = { startMs: startEntry.value, lengthSeconds, stations: members, comment: comment.trim() };
     if (dispatch((plan) => editScan(plan, scan.id, changes), seenRevs)) onClose();
     else setIsRefused(true);
