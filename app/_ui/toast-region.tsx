@@ -2,7 +2,7 @@
 
 import { useEffect } from 'react';
 import { Toaster as Region, toast as put } from 'sonner';
-import { setToastDoor, type Toast } from './toast';
+import { setToastDoor, setToastEnd, type Toast } from './toast';
 
 const SHOWN_MS = 6000;
 const SLOT = 'only';
@@ -13,7 +13,11 @@ export default function ToastRegion() {
     setToastDoor(({ message, action }: Toast) => {
       put(message, { id: SLOT, ...(action && { action: { label: action.label, onClick: action.run } }) });
     });
-    return () => setToastDoor(null);
+    setToastEnd(() => put.dismiss(SLOT));
+    return () => {
+      setToastDoor(null);
+      setToastEnd(null);
+    };
   }, []);
   return (
     <Region

@@ -33,3 +33,16 @@ export function setToastDoor(door: Show | null): void {
   if (door && waiting) door(waiting);
   if (door) waiting = null;
 }
+
+let hide: (() => void) | null = null;
+
+/** Takes the toast away: what it said is no longer so. */
+export function hideToast(): void {
+  waiting = null;
+  hide?.();
+}
+
+/** For the Toaster: how a toast is taken away. */
+export function setToastEnd(end: (() => void) | null): void {
+  hide = end;
+}

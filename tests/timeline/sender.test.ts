@@ -103,12 +103,8 @@ class Server {
 
   private settle(result: ReturnType<typeof takeDo> | ReturnType<typeof takeUndo>, actId: string) {
     if (!result.ok) {
-      return {
-        ok: false,
-        code: 'conflict',
-        reason: 'changed',
-        message: 'It was changed meanwhile.',
-      } as const;
+      const reason = result.reason === 'nothing' ? 'nothing' : 'changed';
+      return { ok: false, code: 'conflict', reason, message: 'It was changed meanwhile.' } as const;
     }
     this.journal = result.journal;
     const seq = this.journal.rows.at(-1)?.seq ?? 0;
@@ -286,5 +282,24 @@ describe('the plan and the journal', () => {
     await sender.catchUp();
     expect(move(ONE, 700)).toBe(false);
     expect(store.getState().notice?.message).toBe('This scan is no longer in the plan. It was removed.');
+  });
+});
+
+describe('a step', () => {
+  it('is not asked for when there is nothing of one’s own to take back', async () => {
+    const { sender, settled } = open();
+    sender.step('undo');
+    await settled();
+    expect(server.posts).toEqual([]);
+  });
+
+  it('pressed once too often leaves no error behind', async () => {
+    const { store, sender, startOf, settled, move } = open();
+    move(ONE, 700);
+    for (let press = 0; press < 3; press++) sender.step('undo');
+    await settled();
+    expect(startOf(ONE)).toBe(600);
+    expect(store.getState().pending).toEqual([]);
+    expect(store.getState().notice).toBeNull();
   });
 });

@@ -26,7 +26,7 @@ export function Inspector() {
       id={INSPECTOR_ID}
       tabIndex={-1}
       aria-label="Chosen scan"
-      className="flex min-h-0 flex-col gap-2.5 overflow-y-auto border-l border-rule px-[16px] py-[12px]"
+      className="relative flex min-h-0 flex-col gap-2.5 overflow-y-auto border-l border-rule px-[16px] py-[12px]"
     >
       {scan ? <ScanPanel scan={scan} /> : <NothingChosen count={plan.scans.length} />}
     </aside>
@@ -121,7 +121,7 @@ function Actions({ scan }: { scan: Scan }) {
   const { startMove } = useKeyPlacing();
   if (!canEdit) return null;
   return (
-    <div className="mt-auto flex gap-2 pb-0.5 pt-2">
+    <div className="sticky bottom-[-12px] mt-auto flex gap-2 bg-paper pb-[12px] pt-2">
       <button type="button" className="btn" onClick={() => setIsEditing(true)}>
         Edit scan
       </button>

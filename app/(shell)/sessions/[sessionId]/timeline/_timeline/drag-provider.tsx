@@ -53,6 +53,7 @@ export function DragProvider({ table, children }: { table: SkyTable | null; chil
       stations: 'all-up',
       snappedTo: null,
       pointer: { x, y },
+      isCopy: false,
       seenRevs: store.getState().revs,
       outStation: null,
     });
@@ -60,12 +61,13 @@ export function DragProvider({ table, children }: { table: SkyTable | null; chil
   return (
     <DndContext
       id="tray"
+      accessibility={{ announcements: SILENT, screenReaderInstructions: INSTRUCTIONS }}
       sensors={sensors}
       autoScroll={false}
       onDragStart={({ active }) => store.setState({ traySourceId: String(active.id), placing: null })}
       onDragMove={onDragMove}
       onDragCancel={() => store.setState({ placing: null })}
-      onDragEnd={() => drop({ force: held.shift, copy: false })}
+      onDragEnd={() => drop({ force: held.shift })}
     >
       {children}
       <DragOverlay dropAnimation={null} modifiers={[besidePointer]}>
@@ -86,6 +88,15 @@ function Slip() {
     </div>
   );
 }
+
+/** A drag by mouse is not spoken; move mode by keys has its own live sentence. */
+const SILENT = {
+  onDragStart: () => undefined,
+  onDragOver: () => undefined,
+  onDragEnd: () => undefined,
+  onDragCancel: () => undefined,
+};
+const INSTRUCTIONS = { draggable: 'Press Enter to place it with the keys.' };
 
 /** The slip hangs at the right of the pointer. */
 const besidePointer: Modifier = ({ activatorEvent, activeNodeRect, transform }) => {

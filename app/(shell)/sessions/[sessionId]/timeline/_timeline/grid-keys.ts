@@ -70,11 +70,12 @@ export function useGridKeys() {
   }
 
   function zoom(by: 1 | -1 | 'all') {
-    const { view, plan } = store.getState();
+    const { view, plan, chosen } = store.getState();
     const at = LEVELS.findIndex(({ hours }) => hours === view.hours);
     const level = by === 'all' ? LEVELS[0] : LEVELS[Math.max(0, Math.min(LEVELS.length - 1, at + by))];
     if (!level) return;
-    const middle = view.startMs + (view.hours * HOUR) / 2;
+    const about = plan.scans.find(({ id }) => id === chosen?.scanId)?.startMs;
+    const middle = about ?? view.startMs + (view.hours * HOUR) / 2;
     store.setState({
       view: clampView({ hours: level.hours, startMs: middle - (level.hours * HOUR) / 2 }, plan),
     });
@@ -143,12 +144,13 @@ export function useGridKeys() {
   }
 
   return (event: KeyboardEvent<HTMLElement>) => {
-    event.currentTarget.removeAttribute('data-by');
+    if (!MODIFIERS.has(event.key)) event.currentTarget.removeAttribute('data-by');
     const isHandled =
       store.getState().placing?.by === 'keys'
         ? inMoveMode(event)
         : !event.ctrlKey &&
           !event.metaKey &&
+          !event.altKey &&
           (onScan(event.key.toLowerCase()) || anywhere(event.key.toLowerCase()));
     if (isHandled) {
       event.preventDefault();
@@ -156,6 +158,8 @@ export function useGridKeys() {
     }
   };
 }
+
+const MODIFIERS = new Set(['Shift', 'Control', 'Alt', 'Meta']);
 
 const toggleOf = (scanId: ScanId, station: StationCode) => (plan: Plan) =>
   toggleStation(plan, scanId, station);

@@ -93,8 +93,8 @@ function ScanCell({ id, scan, column, selected }: CellProps) {
   return (
     <span role="gridcell" id={id} aria-colindex={column} aria-selected={selected}>
       Scan {number}, {name}, {clockText(scan.startMs)} to {clockText(scanStopMs(scan))},{' '}
-      {scan.stations.length} stations, fringes on {cells.filter(isExpected).length} of {cells.length}{' '}
-      baselines
+      {scan.stations.length} {scan.stations.length === 1 ? 'station' : 'stations'}, fringes on{' '}
+      {cells.filter(isExpected).length} of {cells.length} baselines
       {problems > 0 && `, ${problems} ${problems === 1 ? 'problem' : 'problems'}`}
     </span>
   );

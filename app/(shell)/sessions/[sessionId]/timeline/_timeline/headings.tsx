@@ -22,7 +22,7 @@ export function Headings({ frame, plan, numbers, sources, chosenId, placingId }:
     scans.map((scan) => ({
       id: scan.id,
       middle: barOf(frame, scan).middle,
-      half: far ? (numbers.get(scan.id) ?? '').length * 3.4 + 1 : 12,
+      half: far ? (numbers.get(scan.id) ?? '').length * 3.4 + 1 : 11,
       isKept: scan.id === chosenId,
     })),
   );
@@ -57,7 +57,7 @@ export function Headings({ frame, plan, numbers, sources, chosenId, placingId }:
                 fontSize={11}
                 textAnchor="middle"
                 className={isChosen ? 'fill-on-ink' : 'fill-ink2'}
-                style={{ fontStretch: '76%' }}
+                style={{ fontStretch: '70%' }}
               >
                 {word}
               </text>

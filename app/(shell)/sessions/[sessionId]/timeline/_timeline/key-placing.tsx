@@ -92,12 +92,14 @@ export function KeyPlacingProvider({
     drop: (force) => {
       const { placing } = store.getState();
       if (placing?.by !== 'keys') return;
-      drop({ force, copy: false });
-      say('');
+      drop({ force });
+      if (store.getState().placing === null) say('');
+      focusGrid();
     },
     cancel: () => {
       store.setState({ placing: null });
       say('');
+      focusGrid();
     },
   };
   return <KeyContext.Provider value={value}>{children}</KeyContext.Provider>;
@@ -119,6 +121,7 @@ function newPlacing(state: TimelineState, sourceId: string): Placing {
     stations: 'all-up',
     snappedTo: null,
     pointer: null,
+    isCopy: false,
     seenRevs: state.revs,
     outStation: null,
   };
@@ -142,7 +145,9 @@ export function sentenceOf(judged: Judged, number: string | null): string {
     VERDICT_WORDS[verdict],
     reason,
     `${expected} of ${possible} baselines.`,
-    tightest ? `${tightest.station} has ${spareWords(tightest.spareSeconds)}.` : '',
+    tightest
+      ? `${tightest.station} ${tightest.spareSeconds < 0 ? 'is' : 'has'} ${spareWords(tightest.spareSeconds)}.`
+      : '',
   ];
   return parts.filter((part) => part !== '').join(' ');
 }

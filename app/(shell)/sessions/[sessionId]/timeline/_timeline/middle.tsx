@@ -47,7 +47,7 @@ export function Middle({ table, problem, again }: Props) {
       <MoveBar />
       <Footnotes onLoud={setLoudKey} />
       <div className="flex-none overflow-hidden">
-        <Overview width={frame.width} />
+        <Overview width={width} />
       </div>
     </div>
   );

@@ -1,4 +1,5 @@
 import { useStore } from 'zustand';
+import { staveOrder } from '@/app/_ui/stave-order';
 import { isExpected, scanOutlook } from '@/src/outlook/fringe-outlook';
 import type { PlanContext } from '@/src/schedule/context';
 import { judgePlacement, neighboursOf, placedScan, type Placement } from '@/src/schedule/feasibility';
@@ -36,7 +37,11 @@ export function judge(placing: Placing, plan: Plan, context: PlanContext): Judge
   const cells = scanOutlook(scan, plan, context);
   const ways = scan.stations.flatMap((member) => {
     const atMs = placing.startMs + member.lateSeconds * 1000;
-    const { previous } = neighboursOf(paths.get(member.station) ?? [], placing.scanId, atMs);
+    const { previous } = neighboursOf(
+      paths.get(member.station) ?? [],
+      asPlacement(placing).ignoreScanId,
+      atMs,
+    );
     const leg = legOf(scan, member, context, previous);
     const from = previous && { stopMs: previous.stopMs, elevationDeg: previous.stopAzEl.elevationDeg };
     return leg ? [{ leg, from }] : [];
@@ -44,8 +49,8 @@ export function judge(placing: Placing, plan: Plan, context: PlanContext): Judge
   return {
     placing,
     sourceName: context.sources[placing.sourceId]?.name ?? '',
-    can: judgement.stations,
-    cannot: judgement.cannot,
+    can: inStaveOrder(judgement.stations, (code) => code, context),
+    cannot: inStaveOrder(judgement.cannot, ({ station }) => station, context),
     ways,
     expected: cells.filter(isExpected).length,
     possible: cells.filter(({ verdict }) => verdict !== 'not-on').length,
@@ -53,6 +58,12 @@ export function judge(placing: Placing, plan: Plan, context: PlanContext): Judge
     verdict: judgement.verdict,
     reason: judgement.reason === '' ? '' : `${judgement.reason}.`,
   };
+}
+
+/** West to east, as the staves stand. */
+function inStaveOrder<T>(items: readonly T[], codeOf: (item: T) => StationCode, context: PlanContext): T[] {
+  const order = staveOrder(Object.values(context.stations)).map(({ code }) => code);
+  return [...items].sort((a, b) => order.indexOf(codeOf(a)) - order.indexOf(codeOf(b)));
 }
 
 /** The judgement of what is held now, or null. */
@@ -118,8 +129,9 @@ function candidatesFor(
 }
 
 /** A moved scan keeps who joins late and leaves early. */
-function asPlacement({ scanId, sourceId, modeId, startMs, lengthSeconds, stations }: Placing): Placement {
-  return { ignoreScanId: scanId, sourceId, modeId, startMs, lengthSeconds, stations };
+function asPlacement(placing: Placing): Placement {
+  const { scanId, isCopy, sourceId, modeId, startMs, lengthSeconds, stations } = placing;
+  return { ignoreScanId: isCopy ? null : scanId, sourceId, modeId, startMs, lengthSeconds, stations };
 }
 
 const SNAP_WORDS: Readonly<Record<Exclude<SnapKind, 'grid'>, (station: StationCode) => string>> = {

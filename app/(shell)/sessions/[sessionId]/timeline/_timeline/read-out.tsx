@@ -26,7 +26,10 @@ export function ReadOut({ frame }: { frame: Frame }) {
         top: staveTop(frame, Math.min(2, frame.staveCount - 1)) + 38,
       }}
     >
-      <h3 className="mb-[3px] text-[13.5px]">{judged.sourceName}</h3>
+      <h3 className="mb-[3px] text-[13.5px]">
+        {placing.isCopy && 'Copy of '}
+        {judged.sourceName}
+      </h3>
       <ReadOutRows judged={judged} />
       <Verdict judged={judged} />
     </div>

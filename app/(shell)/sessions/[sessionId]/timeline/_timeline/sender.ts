@@ -4,7 +4,7 @@ import { applyCommand, CommandRefused, subjectsOf, type Command } from '@/src/sc
 import type { Plan, SubjectId } from '@/src/schedule/plan';
 import { newId } from './ids';
 import { createOwnRevs } from './own-revs';
-import type { PendingAct } from './state';
+import type { PendingAct, TimelineState } from './state';
 import type { TimelineStore } from './store';
 
 const RETRY_SECONDS = [5, 15, 60];
@@ -48,6 +48,7 @@ export function createSender(store: TimelineStore) {
 
   function step(kind: 'undo' | 'redo') {
     const { pending } = store.getState();
+    if (!canStep(store.getState(), kind)) return;
     store.setState({ pending: [...pending, { actId: newId(), kind }], notice: null });
     void pump();
   }
@@ -123,6 +124,8 @@ export function createSender(store: TimelineStore) {
       return false;
     });
     settle(confirmed, kept);
+    // pressed once too often: nothing happened, so nothing is said
+    if (failure.reason === 'nothing') return true;
     if (failure.code === 'conflict') await catchUp();
     const lost = behind.length - kept.length;
     const more = lost > 0 ? ` ${lost} later ${lost === 1 ? 'step' : 'steps'} of yours went with it.` : '';
@@ -192,7 +195,10 @@ export function createSender(store: TimelineStore) {
         return false;
       }
     });
-    const { chosen } = store.getState();
+    const { chosen, placing } = store.getState();
+    const heldId = placing?.scanId ?? null;
+    const isHeldGone = heldId !== null && !plan.scans.some(({ id }) => id === heldId);
+    if (isHeldGone) notice = { message: 'The scan you were moving was removed.', mine: null };
     const stillThere = chosen && plan.scans.some((scan) => scan.id === chosen.scanId);
     store.setState({
       confirmed,
@@ -201,6 +207,7 @@ export function createSender(store: TimelineStore) {
       notice,
       ...more,
       ...(chosen && !stillThere && { chosen: null }),
+      ...(isHeldGone && { placing: null }),
     });
   }
 
@@ -221,6 +228,16 @@ export function createSender(store: TimelineStore) {
   }
 
   return { dispatch, step, catchUp, resume };
+}
+
+/** Whether a step is worth asking for; how far back steps that wait will go is the server's to say. */
+export function canStep(
+  { pending, steps }: Pick<TimelineState, 'pending' | 'steps'>,
+  kind: 'undo' | 'redo',
+): boolean {
+  if (pending.some((act) => act.kind !== 'do')) return true;
+  const hasWaiting = pending.length > 0;
+  return kind === 'undo' ? hasWaiting || steps.undo !== null : !hasWaiting && steps.redo !== null;
 }
 
 export type Sender = ReturnType<typeof createSender>;

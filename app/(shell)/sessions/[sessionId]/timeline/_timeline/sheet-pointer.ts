@@ -20,6 +20,7 @@ export function useSheetPointer(frame: Frame) {
 
   function onPointerDown(event: ReactPointerEvent<HTMLDivElement>) {
     if (event.button !== 0) return;
+    store.setState({ placing: null });
     const sheet = event.currentTarget;
     const { plan, stations, canEdit } = store.getState();
     const at = pointIn(sheet, event);
@@ -49,7 +50,7 @@ export function useSheetPointer(frame: Frame) {
     const end = (event: PointerEvent) => {
       stop();
       if (event.type === 'pointercancel') store.setState({ placing: null });
-      else if (isHeld) drop({ force: held.shift, copy: held.copy });
+      else if (isHeld) drop({ force: held.shift });
     };
     const escape = (event: KeyboardEvent) => {
       if (event.key !== 'Escape') return;
@@ -119,6 +120,7 @@ export function pickedUp(
     stations: scan.stations,
     snappedTo: null,
     pointer,
+    isCopy: what === 'move' && pointer !== null && held.copy,
     seenRevs,
     outStation: null,
   };

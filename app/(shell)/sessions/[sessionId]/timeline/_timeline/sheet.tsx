@@ -9,7 +9,7 @@ import { ChosenBars, ChosenWash, Headings } from './headings';
 import { NowLine } from './now-line';
 import { ProblemMarks } from './problem-marks';
 import { Ribbons, RiseAndSet, StationsUpStrip } from './ribbons';
-import { Brackets, Notes, Slews } from './scans';
+import { Brackets, inView, Notes, Slews } from './scans';
 import type { Frame } from './scale';
 import { Staves, TimeLines } from './staves';
 import { focusOf } from './tool-bar';
@@ -23,10 +23,12 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
   const sources = useTimeline((state) => state.context.sources);
   const focusId = useTimeline(focusOf);
   const chosenId = useTimeline((state) => state.chosen?.scanId ?? null);
-  const fadedScanId = useTimeline((state) => state.placing?.scanId ?? null);
+  const fadedScanId = useTimeline((state) =>
+    state.placing?.isCopy ? null : (state.placing?.scanId ?? null),
+  );
   const derived = useStore(useDerivedStore());
   const { plan, numbers, legs, lateKeys, outlook } = derived;
-  const chosen = plan.scans.find(({ id }) => id === chosenId);
+  const chosen = plan.scans.find((scan) => scan.id === chosenId && inView(frame, scan));
   return (
     <svg width={frame.width} height={frame.height} aria-hidden="true" className="block flex-none select-none">
       <HatchPatterns />

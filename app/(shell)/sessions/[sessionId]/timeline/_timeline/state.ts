@@ -25,6 +25,8 @@ export type Placing = {
   snappedTo: string | null;
   /** pointer on the sheet, px; keys have none */
   pointer: { x: number; y: number } | null;
+  /** Ctrl or ⌘ is held: the scan stays and a copy is dropped */
+  isCopy: boolean;
   /** the revisions when it was taken up */
   seenRevs: Revs;
   /** a scan dragged out of the staves by one note loses this station */

@@ -51,7 +51,9 @@ function ShowPart() {
   const move = (hours: number) =>
     store.setState({ view: clampView({ ...view, startMs: view.startMs + hours * HOUR }, plan) });
   const show = (hours: number) => {
-    const middle = view.startMs + (view.hours * HOUR) / 2;
+    const chosenId = store.getState().chosen?.scanId;
+    const about = plan.scans.find(({ id }) => id === chosenId)?.startMs;
+    const middle = about ?? view.startMs + (view.hours * HOUR) / 2;
     store.setState({ view: clampView({ hours, startMs: middle - (hours * HOUR) / 2 }, plan) });
   };
   return (

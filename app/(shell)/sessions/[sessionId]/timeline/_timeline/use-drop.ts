@@ -1,4 +1,4 @@
-import { showToast } from '@/app/_ui/toast';
+import { hideToast, showToast } from '@/app/_ui/toast';
 import { addScan } from '@/src/schedule/gestures/add-scan';
 import { changeLength } from '@/src/schedule/gestures/change-length';
 import { moveScan } from '@/src/schedule/gestures/move-scan';
@@ -12,13 +12,13 @@ import type { Doing } from './sender';
 import type { Placing, TimelineState } from './state';
 import { useTimelineStore } from './store';
 
-type Way = { force: boolean; copy: boolean };
+type Way = { force: boolean };
 
 /** Drops what is held: one command, or a refusal that says why. */
 export function useDrop(): (way: Way) => void {
   const store = useTimelineStore();
   const { dispatch, undo } = useActs();
-  return ({ force, copy }) => {
+  return ({ force }) => {
     const state = store.getState();
     const { placing } = state;
     if (!placing) return;
@@ -32,20 +32,28 @@ export function useDrop(): (way: Way) => void {
       }
       return;
     }
-    if (placing.what !== 'new' && !copy && isWhereItWas(placing, state)) return;
+    if (placing.what !== 'new' && !placing.isCopy && isWhereItWas(placing, state)) return;
     const judged = judge(placing, state.plan, state.context);
-    if (judged.verdict === 'no' && !force) {
-      showToast({ message: `Not dropped. ${judged.reason} Hold Shift to drop it all the same.` });
+    const isHopeless = placing.what === 'new' && judged.can.length === 0;
+    if (isHopeless || (judged.verdict === 'no' && !force)) {
+      if (placing.by === 'keys') store.setState({ placing });
+      const more = isHopeless
+        ? ''
+        : placing.by === 'keys'
+          ? ' Shift Enter drops it all the same.'
+          : ' Hold Shift to drop it all the same.';
+      showToast({ message: `Not dropped. ${judged.reason}${more}` });
       return;
     }
-    const { scanId, doing } = doingOf(placing, state.context, copy);
+    hideToast();
+    const { scanId, doing } = doingOf(placing, state.context);
     if (dispatch(doing, placing.seenRevs)) store.setState({ chosen: { scanId, station: null } });
   };
 }
 
-function doingOf(placing: Placing, context: PlanContext, copy: boolean): { scanId: ScanId; doing: Doing } {
-  const { scanId, sourceId, modeId, startMs, lengthSeconds, stations } = placing;
-  if (scanId === null || copy) {
+function doingOf(placing: Placing, context: PlanContext): { scanId: ScanId; doing: Doing } {
+  const { scanId, isCopy, sourceId, modeId, startMs, lengthSeconds, stations } = placing;
+  if (scanId === null || isCopy) {
     const id = newId();
     const members = stations === 'all-up' ? {} : { stations };
     return {
