@@ -36,6 +36,38 @@ describe('the database itself', () => {
     await expect(run('UPDATE subjects SET rev = rev - 1, top = 0')).rejects.toThrow('never falls');
   });
 
+  it('leaves a station something of its scan, whichever of the two changes', async () => {
+    const { id } = await makeSession();
+    const viewer = await makeViewer('scheduler');
+    const scan = makeScan();
+    const command = { verb: 'add-scan', edits: [{ kind: 'add-scan', scan }] };
+    expect((await takeAct(viewer, id, { kind: 'do', actId: newId(), command, seen: {} })).ok).toBe(true);
+    const of = `WHERE session_id = '${id}'`;
+    await expect(run(`UPDATE scan_stations SET late_seconds = ${scan.lengthSeconds} ${of}`)).rejects.toThrow(
+      'late + early',
+    );
+    await run(`UPDATE scan_stations SET late_seconds = ${scan.lengthSeconds - 1} ${of}`);
+    await expect(run(`UPDATE scans SET length_seconds = ${scan.lengthSeconds - 1} ${of}`)).rejects.toThrow(
+      'late + early',
+    );
+    await expect(run(`UPDATE scans SET length_seconds = 86401 ${of}`)).rejects.toThrow('24 h');
+  });
+
+  it('takes a scan that is shortened together with what its stations miss', async () => {
+    const { id } = await makeSession();
+    const viewer = await makeViewer('scheduler');
+    const scan = makeScan();
+    const late = scan.stations.map((member) => ({ ...member, lateSeconds: scan.lengthSeconds - 1 }));
+    const first = { verb: 'add-scan', edits: [{ kind: 'add-scan', scan: { ...scan, stations: late } }] };
+    const added = await takeAct(viewer, id, { kind: 'do', actId: newId(), command: first, seen: {} });
+    const shorter = { ...scan, lengthSeconds: 10 };
+    const second = { verb: 'edit-scan', edits: [{ kind: 'change-scan', scan: shorter }] };
+    const seen = added.ok ? added.subjects : {};
+    expect(await takeAct(viewer, id, { kind: 'do', actId: newId(), command: second, seen })).toMatchObject({
+      ok: true,
+    });
+  });
+
   it.each([
     ['a station’s code changes', "UPDATE stations SET code = 'Zz' WHERE code = 'Af'"],
     ['a code begins with a figure', "UPDATE stations SET code = '1f' WHERE code = 'Af'"],

@@ -41,14 +41,7 @@ async function putScans(tx: Tx, sessionId: string, changed: readonly Scan[]): Pr
     scan.leg,
     scan.comment,
   ]);
-  await tx.run(sql`
-    INSERT INTO ${scans} (session_id, id, source_id, mode_id, start_ms, length_seconds, group_id, leg, comment)
-    SELECT ${sessionId}, value ->> 0, value ->> 1, value ->> 2, value ->> 3, value ->> 4, value ->> 5, value ->> 6, value ->> 7
-    FROM json_each(${JSON.stringify(rows)}) WHERE true
-    ON CONFLICT (session_id, id) DO UPDATE SET
-      source_id = excluded.source_id, mode_id = excluded.mode_id, start_ms = excluded.start_ms,
-      length_seconds = excluded.length_seconds, group_id = excluded.group_id, leg = excluded.leg,
-      comment = excluded.comment`);
+  // members go before their scan is shortened, and come back with what is left of it
   await tx
     .delete(scanStations)
     .where(
@@ -57,6 +50,14 @@ async function putScans(tx: Tx, sessionId: string, changed: readonly Scan[]): Pr
         sql`${scanStations.scanId} IN ${oneOf(changed.map((scan) => scan.id))}`,
       ),
     );
+  await tx.run(sql`
+    INSERT INTO ${scans} (session_id, id, source_id, mode_id, start_ms, length_seconds, group_id, leg, comment)
+    SELECT ${sessionId}, value ->> 0, value ->> 1, value ->> 2, value ->> 3, value ->> 4, value ->> 5, value ->> 6, value ->> 7
+    FROM json_each(${JSON.stringify(rows)}) WHERE true
+    ON CONFLICT (session_id, id) DO UPDATE SET
+      source_id = excluded.source_id, mode_id = excluded.mode_id, start_ms = excluded.start_ms,
+      length_seconds = excluded.length_seconds, group_id = excluded.group_id, leg = excluded.leg,
+      comment = excluded.comment`);
   const members = changed.flatMap((scan) =>
     scan.stations.map((member) => [scan.id, member.station, member.lateSeconds, member.earlySeconds]),
   );
