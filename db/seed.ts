@@ -2,6 +2,7 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import { eq, sql } from 'drizzle-orm';
 import { SIDEREAL_DAY_SECONDS } from '../src/units/constants';
+import { idOf } from '../src/schedule/plan-ids';
 import { hashPassword } from '../src/viewer/password';
 import { db, transact, type Tx } from './client';
 import { ACCOUNTS, DEMO_PASSWORD } from './seed-data/accounts';
@@ -29,7 +30,6 @@ const MARK = 'demo';
 const HOUR_MS = 3_600_000;
 const STALE_MS = 24 * HOUR_MS;
 const LEAD_MS = 48 * HOUR_MS;
-const ID_LETTERS = '0123456789abcdefghjkmnpqrstvwxyz';
 
 /** Fills the demo once; later moves its dates on, as long as no one has changed its plan. */
 export async function seedDemo(nowMs: number): Promise<'filled' | 'moved' | 'kept'> {
@@ -62,11 +62,9 @@ export function demoStartMs(nowMs: number): number {
   return startMs(days) >= nowMs + LEAD_MS ? startMs(days) : startMs(days + 1);
 }
 
-/** 16 base-32 characters, the same for the same name on every machine. */
-export function seedId(kind: string, name: string): string {
-  const digest = createHash('sha256').update(`${kind}:${name}`).digest();
-  return Array.from(digest.subarray(0, 16), (byte) => ID_LETTERS.charAt(byte & 31)).join('');
-}
+/** The same for the same name on every machine. */
+export const seedId = (kind: string, name: string): string =>
+  idOf(createHash('sha256').update(`${kind}:${name}`).digest());
 
 const sourceId = (name: string) => seedId('source', name);
 const modeId = (band: string) => seedId('mode', band);

@@ -1,9 +1,10 @@
 import 'server-only';
 import { z } from 'zod';
 import { VERBS, type Command } from '../../schedule/commands';
+import { ID_PATTERN } from '../../schedule/plan-ids';
 import { invalid } from '../errors';
 
-const id = z.string().regex(/^[0-9A-Za-z]{16}$/, 'must be 16 letters and digits');
+const id = z.string().regex(ID_PATTERN, 'must be 16 base-32 letters');
 
 const scan = z.strictObject({
   id,

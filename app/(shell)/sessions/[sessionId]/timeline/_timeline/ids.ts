@@ -1,7 +1,4 @@
-const ALPHABET = '0123456789abcdefghjkmnpqrstvwxyz';
+import { ID_BYTES, idOf } from '@/src/schedule/plan-ids';
 
-/** 16 base-32 characters; `randomUUID` is missing on plain http off localhost. */
-export function newId(): string {
-  const bytes = crypto.getRandomValues(new Uint8Array(16));
-  return Array.from(bytes, (byte) => ALPHABET[byte & 31]).join('');
-}
+/** `randomUUID` is missing on plain http off localhost. */
+export const newId = (): string => idOf(crypto.getRandomValues(new Uint8Array(ID_BYTES)));
