@@ -81,6 +81,13 @@ function isTaking(member: ScanStation, held: Placement, plan: Plan, context: Pla
   return leg !== null && leg.outFromMs === null;
 }
 
+/** A start that no longer moves when its slew is worked out from it; as it is where there is no slew. */
+function settled(firstMs: number, better: (startMs: number) => number | null): number {
+  let startMs = firstMs;
+  for (let round = 0; round < ROUNDS; round += 1) startMs = better(startMs) ?? startMs;
+  return startMs;
+}
+
 function slewEnd(
   members: readonly ScanStation[],
   held: Placement,
@@ -93,13 +100,12 @@ function slewEnd(
   for (const member of members) {
     const { previous } = neighboursOf(paths.get(member.station) ?? [], held.ignoreScanId, held.startMs);
     if (!previous) continue;
-    let startMs = previous.stopMs + leastMs;
-    for (let round = 0; round < ROUNDS; round += 1) {
-      const leg = legOf(placedScan(plan, { ...held, startMs }), member, context, previous);
-      if (!leg || leg.slewSeconds === null) break;
+    const startMs = settled(previous.stopMs + leastMs, (fromMs) => {
+      const leg = legOf(placedScan(plan, { ...held, startMs: fromMs }), member, context, previous);
+      if (!leg || leg.slewSeconds === null) return null;
       const readyMs = previous.stopMs + leg.slewSeconds * 1000 + leastMs - member.lateSeconds * 1000;
-      startMs = Math.ceil(readyMs / TEN_SECONDS) * TEN_SECONDS;
-    }
+      return Math.ceil(readyMs / TEN_SECONDS) * TEN_SECONDS;
+    });
     if (!slowest || startMs > slowest.startMs)
       slowest = { kind: 'slew-end', startMs, station: member.station };
   }
@@ -120,14 +126,13 @@ function nextStart(
     const scan = next && plan.scans.find(({ id }) => id === next.scanId);
     const nextMember = scan?.stations.find(({ station }) => station === member.station);
     if (!next || !scan || !nextMember) continue;
-    let startMs = next.startMs - leastMs - held.lengthSeconds * 1000;
-    for (let round = 0; round < ROUNDS; round += 1) {
-      const leg = legOf(placedScan(plan, { ...held, startMs }), member, context, null);
+    const startMs = settled(next.startMs - leastMs - held.lengthSeconds * 1000, (fromMs) => {
+      const leg = legOf(placedScan(plan, { ...held, startMs: fromMs }), member, context, null);
       const after = leg && legOf(scan, nextMember, context, leg);
-      if (!after || after.slewSeconds === null) break;
+      if (!after || after.slewSeconds === null) return null;
       const leaveMs = next.startMs - after.slewSeconds * 1000 - leastMs + member.earlySeconds * 1000;
-      startMs = Math.floor((leaveMs - held.lengthSeconds * 1000) / TEN_SECONDS) * TEN_SECONDS;
-    }
+      return Math.floor((leaveMs - held.lengthSeconds * 1000) / TEN_SECONDS) * TEN_SECONDS;
+    });
     if (!earliest || startMs < earliest.startMs) {
       earliest = { kind: 'next-start', startMs, station: member.station };
     }
