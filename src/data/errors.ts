@@ -1,4 +1,5 @@
 import 'server-only';
+import { whoCanGrant, type Verb } from '../access/policy';
 import { logUnexpected } from '../log';
 
 export type FailureCode =
@@ -25,6 +26,12 @@ export class Refusal<F extends Failure = Failure> extends Error {
 
 export const notFound = (message: string) => new Refusal({ ok: false, code: 'not_found', message });
 export const forbidden = (message: string) => new Refusal({ ok: false, code: 'forbidden', message });
+/** Refused by the policy: which right it takes, and who can give it. */
+export function forbiddenFor(verb: Verb): Refusal {
+  const { heading, message } = whoCanGrant(verb);
+  return forbidden(`${heading}. ${message}`);
+}
+
 export const invalid = (message: string, fields?: Record<string, string[]>) =>
   new Refusal({ ok: false, code: 'invalid', message, ...(fields && { fields }) });
 

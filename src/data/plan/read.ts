@@ -1,9 +1,9 @@
 import 'server-only';
 import { z } from 'zod';
 import { db } from '../../../db/client';
-import { can, whoCanGrant, type Viewer } from '../../access/policy';
+import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
-import { answer, forbidden, invalid, type Failure } from '../errors';
+import { answer, forbiddenFor, invalid, type Failure } from '../errors';
 import { derivedState } from '../session/dto';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import { readModes, readSources, readStations } from './context';
@@ -79,10 +79,7 @@ export const readJournal = (viewer: Viewer, key: string, after: unknown): Promis
 
 async function fetchReadable(viewer: Viewer, key: string): Promise<SessionRow> {
   const session = await fetchSession(db(), viewer, key);
-  if (!can(viewer, 'plan.read-draft', subjectOf(session))) {
-    const { heading, message } = whoCanGrant('plan.read-draft');
-    throw forbidden(`${heading}. ${message}`);
-  }
+  if (!can(viewer, 'plan.read-draft', subjectOf(session))) throw forbiddenFor('plan.read-draft');
   return session;
 }
 

@@ -5,12 +5,12 @@ import { journal } from '../../../db/schema/journal';
 import { modes } from '../../../db/schema/modes';
 import { sessionSources } from '../../../db/schema/session-sources';
 import { subjects } from '../../../db/schema/subjects';
-import { actingRole, whoCanGrant, type Viewer } from '../../access/policy';
+import { actingRole, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
 import { applyCommand, CommandRefused, subjectsOf, type Command } from '../../schedule/commands';
 import { changedSince } from '../../schedule/journal';
 import type { Plan, SubjectId } from '../../schedule/plan';
-import { answer, forbidden, invalid, Refusal } from '../errors';
+import { answer, forbiddenFor, invalid, Refusal } from '../errors';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { ActFailure, Revs, Taken } from './dto';
 import { parseAct, type ActInput } from './input';
@@ -39,10 +39,7 @@ export const takeAct = (viewer: Viewer, key: string, body: unknown): Promise<Tak
     return transact(async (tx) => {
       const session = await fetchSession(tx, viewer, key);
       const role = actingRole(viewer, 'plan.edit', subjectOf(session));
-      if (role === null) {
-        const { heading, message } = whoCanGrant('plan.edit');
-        throw forbidden(`${heading}. ${message}`);
-      }
+      if (role === null) throw forbiddenFor('plan.edit');
       const acting = { tx, session, viewer, role };
       const known = await findAct(tx, session.id, act.actId);
       if (known) return resent(acting, known);

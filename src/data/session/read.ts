@@ -4,16 +4,16 @@ import { db } from '../../../db/client';
 import { scans } from '../../../db/schema/scans';
 import { sessionStations } from '../../../db/schema/session-stations';
 import { sessions } from '../../../db/schema/sessions';
-import { can, whoCanGrant, type Viewer } from '../../access/policy';
+import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
-import { answer, forbidden, type Failure } from '../errors';
+import { answer, forbiddenFor, type Failure } from '../errors';
 import { derivedState, type SessionHead, type SessionListItem } from './dto';
 import { fetchSession, readableBy, subjectOf } from './scope';
 
 /** The sessions the viewer may know of, newest start first. */
 export const listSessions = (viewer: Viewer): Promise<{ ok: true; sessions: SessionListItem[] } | Failure> =>
   answer(async () => {
-    if (!can(viewer, 'session.list')) throw forbidden(whoCanGrant('session.list').message);
+    if (!can(viewer, 'session.list')) throw forbiddenFor('session.list');
     const rows = await db()
       .select({
         id: sessions.id,

@@ -1,8 +1,8 @@
 import 'server-only';
 import { db } from '../../../db/client';
-import { can, whoCanGrant, type Viewer } from '../../access/policy';
+import { can, type Viewer } from '../../access/policy';
 import { skyTable, type SkyTable } from '../../schedule/sky-table';
-import { answer, forbidden, type Failure } from '../errors';
+import { answer, forbiddenFor, type Failure } from '../errors';
 import { readSources, readStations } from '../plan/context';
 import { fetchSession, subjectOf } from '../session/scope';
 
@@ -10,10 +10,7 @@ import { fetchSession, subjectOf } from '../session/scope';
 export const readSky = (viewer: Viewer, key: string): Promise<{ ok: true; table: SkyTable } | Failure> =>
   answer(async () => {
     const session = await fetchSession(db(), viewer, key);
-    if (!can(viewer, 'plan.read-draft', subjectOf(session))) {
-      const { heading, message } = whoCanGrant('plan.read-draft');
-      throw forbidden(`${heading}. ${message}`);
-    }
+    if (!can(viewer, 'plan.read-draft', subjectOf(session))) throw forbiddenFor('plan.read-draft');
     const { id, startMs, lengthSeconds, minElevationDeg, stations } = session;
     const span = { start: new Date(startMs), end: new Date(startMs + lengthSeconds * 1000) };
     const sources = await readSources(db(), id);

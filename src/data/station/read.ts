@@ -2,8 +2,8 @@ import 'server-only';
 import { asc, inArray } from 'drizzle-orm';
 import { db } from '../../../db/client';
 import { stations } from '../../../db/schema/stations';
-import { can, whoCanGrant, type Viewer } from '../../access/policy';
-import { answer, forbidden, type Failure } from '../errors';
+import { can, type Viewer } from '../../access/policy';
+import { answer, forbiddenFor, type Failure } from '../errors';
 
 export type StationListItem = { code: string; name: string; site: { longitudeDeg: number } };
 
@@ -13,10 +13,7 @@ export const listStations = (
   codes: readonly string[],
 ): Promise<{ ok: true; stations: StationListItem[] } | Failure> =>
   answer(async () => {
-    if (!can(viewer, 'catalogue.read')) {
-      const { heading, message } = whoCanGrant('catalogue.read');
-      throw forbidden(`${heading}. ${message}`);
-    }
+    if (!can(viewer, 'catalogue.read')) throw forbiddenFor('catalogue.read');
     const rows = await db()
       .select({ code: stations.code, name: stations.name, longitudeDeg: stations.longitudeDeg })
       .from(stations)
