@@ -12,6 +12,7 @@ import { SOURCES } from './seed-data/sources';
 import { SEFDS, STATIONS } from './seed-data/stations';
 import { grants } from './schema/grants';
 import { journal } from './schema/journal';
+import { modeChannels } from './schema/mode-channels';
 import { modes } from './schema/modes';
 import { scanStations } from './schema/scan-stations';
 import { scans } from './schema/scans';
@@ -89,7 +90,16 @@ function moveDates(nowMs: number): Promise<'moved' | 'kept'> {
 }
 
 async function fillCatalogues(tx: Tx): Promise<void> {
-  await tx.insert(modes).values(MODES.map((mode) => ({ ...mode, id: modeId(mode.band) })));
+  await tx
+    .insert(modes)
+    .values(MODES.map(({ channels: _, ...mode }) => ({ ...mode, id: modeId(mode.band) })));
+  await tx
+    .insert(modeChannels)
+    .values(
+      MODES.flatMap(({ band, channels }) =>
+        channels.map((channel, index) => ({ ...channel, modeId: modeId(band), number: index + 1 })),
+      ),
+    );
   await tx.insert(stations).values([...STATIONS]);
   await tx
     .insert(stationBands)

@@ -1,24 +1,26 @@
 import { sql } from 'drizzle-orm';
 import { check, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core';
 
+/** Frequencies, polarisations and bits are those of its channels. */
 export const modes = sqliteTable(
   'modes',
   {
     id: text('id').primaryKey(),
     name: text('name').notNull().unique(),
     band: text('band').notNull(),
-    skyHz: real('sky_hz').notNull(),
-    channelBandwidthHz: real('channel_bandwidth_hz').notNull(),
-    channelsPerPolarisation: integer('channels_per_polarisation').notNull(),
-    polarisations: integer('polarisations').notNull(),
-    bits: integer('bits').notNull(),
+    /** of the atmosphere; null takes no loss */
     coherenceSeconds: real('coherence_seconds'),
+    /** between injected calibration tones; null is none */
+    toneSpacingHz: real('tone_spacing_hz'),
+    /** of the correlator: time of one integration, spectral channels in one channel */
+    integrationSeconds: real('integration_seconds').notNull().default(2),
+    spectralChannels: integer('spectral_channels').notNull().default(64),
+    retiredAtMs: integer('retired_at_ms'),
   },
   (t) => [
-    check('modes_sky', sql`${t.skyHz} > 0`),
-    check('modes_channels', sql`${t.channelBandwidthHz} > 0 AND ${t.channelsPerPolarisation} > 0`),
-    check('modes_polarisations', sql`${t.polarisations} IN (1, 2)`),
-    check('modes_bits', sql`${t.bits} IN (1, 2)`),
+    check('modes_name', sql`length(trim(${t.name})) > 0`),
     check('modes_coherence', sql`${t.coherenceSeconds} > 0`),
+    check('modes_tones', sql`${t.toneSpacingHz} > 0`),
+    check('modes_correlator', sql`${t.integrationSeconds} > 0 AND ${t.spectralChannels} >= 1`),
   ],
 );

@@ -11,9 +11,19 @@ export const stationBands = sqliteTable(
     band: text('band').notNull(),
     /** at the zenith, per polarisation */
     sefdJy: real('sefd_jy').notNull(),
+    feeds: text('feeds', { enum: ['circular', 'linear'] })
+      .notNull()
+      .default('circular'),
+    /** opacity at the zenith, nepers; null takes the zenith SEFD at every elevation */
+    zenithOpacity: real('zenith_opacity'),
+    /** relative gain: [[elevationDeg, gain], …] by elevation */
+    gainCurve: text('gain_curve').notNull().default('[]'),
   },
   (t) => [
     primaryKey({ columns: [t.stationCode, t.band] }),
     check('station_bands_sefd', sql`${t.sefdJy} > 0`),
+    check('station_bands_feeds', sql`${t.feeds} IN ('circular', 'linear')`),
+    check('station_bands_opacity', sql`${t.zenithOpacity} >= 0`),
+    check('station_bands_gain', sql`json_valid(${t.gainCurve})`),
   ],
 );

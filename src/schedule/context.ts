@@ -38,6 +38,10 @@ export type PlanMode = {
   bits: 1 | 2;
   /** atmosphere's coherence time; null = no loss is taken, and the screen says so */
   coherenceSeconds: number | null;
+  /** of the correlator */
+  integrationSeconds: number;
+  /** in one channel */
+  spectralChannels: number;
 };
 
 export type PlanSettings = {

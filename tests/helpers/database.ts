@@ -19,14 +19,14 @@ export const MODE_ID = seedId('mode', '22 GHz');
 export const sourceId = (name: string) => seedId('source', name);
 
 /** A real file of its own for the test file that calls it, migrated, with the demo in it. */
-export function openDatabase({ isSeeded = true } = {}): void {
+export function openDatabase({ isMigrated = true, isSeeded = true } = {}): void {
   const folder = mkdtempSync(path.join(tmpdir(), 'antiphon-test-'));
   process.env.DATABASE_URL = `file:${path.join(folder, 'test.db')}`;
   process.env.ANTIPHON_NOW = NOW;
   process.env.LOG_LEVEL = 'silent';
   beforeAll(async () => {
-    await migrateDatabase();
-    if (isSeeded) await seedDemo(Date.parse(NOW));
+    if (isMigrated) await migrateDatabase();
+    if (isMigrated && isSeeded) await seedDemo(Date.parse(NOW));
   });
   afterAll(() => {
     database().client.close();

@@ -63,6 +63,8 @@ export const MODE: PlanMode = {
   polarisations: 2,
   bits: 2,
   coherenceSeconds: null,
+  integrationSeconds: 2,
+  spectralChannels: 64,
 };
 
 export function makeContext(changes: Partial<PlanContext> = {}): PlanContext {

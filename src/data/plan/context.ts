@@ -1,6 +1,7 @@
 import 'server-only';
 import { asc, eq, inArray } from 'drizzle-orm';
-import type { Database } from '../../../db/client';
+import type { Database, Tx } from '../../../db/client';
+import { modeChannels } from '../../../db/schema/mode-channels';
 import { modes } from '../../../db/schema/modes';
 import { sessionSources } from '../../../db/schema/session-sources';
 import { sourceBands } from '../../../db/schema/source-bands';
@@ -9,12 +10,16 @@ import { stationBands } from '../../../db/schema/station-bands';
 import { stations } from '../../../db/schema/stations';
 import type { GaussianComponent } from '../../array/structure';
 import type { PlanMode } from '../../schedule/context';
+import { summaryOf } from '../../schedule/mode-channels';
 import type { HorizonPoint } from '../../sky/types';
 import type { TimelineSource, TimelineStation } from './dto';
 
 const RAD_PER_MAS = Math.PI / 648_000_000;
 
-export async function readStations(from: Database, codes: readonly string[]): Promise<TimelineStation[]> {
+export async function readStations(
+  from: Database | Tx,
+  codes: readonly string[],
+): Promise<TimelineStation[]> {
   const rows = await from
     .select()
     .from(stations)
@@ -56,7 +61,7 @@ export async function readStations(from: Database, codes: readonly string[]): Pr
   }));
 }
 
-export async function readSources(from: Database, sessionId: string): Promise<TimelineSource[]> {
+export async function readSources(from: Database | Tx, sessionId: string): Promise<TimelineSource[]> {
   const rows = await from
     .select({
       id: sources.id,
@@ -86,12 +91,24 @@ export async function readSources(from: Database, sessionId: string): Promise<Ti
   }));
 }
 
-export async function readModes(from: Database): Promise<PlanMode[]> {
+export async function readModes(from: Database | Tx): Promise<PlanMode[]> {
   const rows = await from.select().from(modes).orderBy(asc(modes.name));
-  return rows.map((row) => ({
-    ...row,
-    polarisations: row.polarisations === 1 ? 1 : 2,
-    bits: row.bits === 1 ? 1 : 2,
+  const channels = await from
+    .select()
+    .from(modeChannels)
+    .orderBy(asc(modeChannels.modeId), asc(modeChannels.number));
+  return rows.map(({ id, name, band, coherenceSeconds, integrationSeconds, spectralChannels }) => ({
+    id,
+    name,
+    band,
+    coherenceSeconds,
+    integrationSeconds,
+    spectralChannels,
+    ...summaryOf(
+      channels
+        .filter(({ modeId }) => modeId === id)
+        .map((channel) => ({ ...channel, bits: channel.bits === 1 ? 1 : 2 })),
+    ),
   }));
 }
 
