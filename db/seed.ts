@@ -1,38 +1,41 @@
 import 'server-only';
-import { createHash } from 'node:crypto';
-import { eq, sql } from 'drizzle-orm';
-import { SIDEREAL_DAY_SECONDS } from '../src/units/constants';
-import { idOf } from '../src/schedule/plan-ids';
+import { eq, gt, inArray, notInArray, or, sql } from 'drizzle-orm';
 import { hashPassword } from '../src/viewer/password';
 import { db, transact, type Tx } from './client';
-import { ACCOUNTS, DEMO_PASSWORD } from './seed-data/accounts';
-import { BAND_22, BAND_8, MODES } from './seed-data/modes';
-import { SCANS, SESSION } from './seed-data/session';
-import { SOURCES } from './seed-data/sources';
-import { SEFDS, STATIONS } from './seed-data/stations';
+import { clockEvents } from './schema/clock-events';
+import { clockReadings } from './schema/clock-readings';
 import { grants } from './schema/grants';
 import { journal } from './schema/journal';
 import { modeChannels } from './schema/mode-channels';
 import { modes } from './schema/modes';
-import { scanStations } from './schema/scan-stations';
+import { offers } from './schema/offers';
+import { scanOutcomes } from './schema/scan-outcomes';
 import { scans } from './schema/scans';
 import { seedMarks } from './schema/seed-marks';
-import { sessionSources } from './schema/session-sources';
-import { sessionStations } from './schema/session-stations';
+import { sessionComments } from './schema/session-comments';
 import { sessions } from './schema/sessions';
+import { slotReplies } from './schema/slot-replies';
+import { slots } from './schema/slots';
 import { sourceBands } from './schema/source-bands';
 import { sources } from './schema/sources';
 import { stationBands } from './schema/station-bands';
 import { stations } from './schema/stations';
-import { subjects } from './schema/subjects';
 import { users } from './schema/users';
+import { ACCOUNTS, DEMO_PASSWORD } from './seed-data/accounts';
+import { BAND_22, BAND_8, MODES } from './seed-data/modes';
+import { SESSIONS } from './seed-data/session';
+import { SOURCES } from './seed-data/sources';
+import { SEFDS, STATIONS } from './seed-data/stations';
+import { fillClocks, fillCounters } from './seed-clocks';
+import { seedId, userId } from './seed-ids';
+import { demoStartMs, fillSessions, modeId, sessionId, sessionStartMs, sourceId } from './seed-sessions';
 
 const MARK = 'demo';
-const HOUR_MS = 3_600_000;
-const STALE_MS = 24 * HOUR_MS;
-const LEAD_MS = 48 * HOUR_MS;
+const STALE_MS = 24 * 3_600_000;
+const SESSION_IDS = SESSIONS.map(({ code }) => sessionId(code));
+const USER_IDS = ACCOUNTS.map(({ email }) => userId(email));
 
-/** Fills the demo once; later moves its dates on, as long as no one has changed its plan. */
+/** Fills the demo once; later moves its dates on, as long as no one has changed or added anything. */
 export async function seedDemo(nowMs: number): Promise<'filled' | 'moved' | 'kept'> {
   const [mark] = await db().select().from(seedMarks).where(eq(seedMarks.name, MARK));
   if (mark) return Math.abs(nowMs - mark.seededAtMs) > STALE_MS ? moveDates(nowMs) : 'kept';
@@ -48,45 +51,68 @@ export async function seedDemo(nowMs: number): Promise<'filled' | 'moved' | 'kep
       .returning();
     if (!marked) return 'kept';
     await fillCatalogues(tx);
-    await fillSession(tx, startMs);
+    await fillCounters(tx, nowMs);
+    await fillSessions(tx, startMs);
     await fillAccounts(tx, accounts);
+    await fillDated(tx, nowMs);
     return 'filled';
   });
 }
 
-/** The first start at least 48 h ahead that is whole sidereal days from the base, to 10 s. */
-export function demoStartMs(nowMs: number): number {
-  const baseMs = Date.parse(SESSION.baseStart);
-  const dayMs = SIDEREAL_DAY_SECONDS * 1000;
-  const startMs = (days: number) => baseMs + Math.round((days * dayMs) / 10_000) * 10_000;
-  const days = Math.ceil((nowMs + LEAD_MS - baseMs) / dayMs);
-  return startMs(days) >= nowMs + LEAD_MS ? startMs(days) : startMs(days + 1);
+/** All that happened: what the clocks showed, what the stations said. */
+async function fillDated(tx: Tx, nowMs: number): Promise<void> {
+  await fillClocks(tx, nowMs);
 }
-
-/** The same for the same name on every machine. */
-export const seedId = (kind: string, name: string): string =>
-  idOf(createHash('sha256').update(`${kind}:${name}`).digest());
-
-const sourceId = (name: string) => seedId('source', name);
-const modeId = (band: string) => seedId('mode', band);
-const sessionId = seedId('session', SESSION.code);
 
 function moveDates(nowMs: number): Promise<'moved' | 'kept'> {
   return transact(async (tx) => {
     const [mark] = await tx.select().from(seedMarks).where(eq(seedMarks.name, MARK));
-    const [session] = await tx.select().from(sessions).where(eq(sessions.id, sessionId));
-    const touched = await tx.$count(journal, eq(journal.sessionId, sessionId));
-    if (!mark || !session || touched > 0 || session.startMs !== mark.startMs) return 'kept';
+    if (!mark || (await isTouched(tx, mark))) return 'kept';
     const startMs = demoStartMs(nowMs);
-    const shiftMs = startMs - mark.startMs;
-    await tx.update(sessions).set({ startMs }).where(eq(sessions.id, sessionId));
-    await tx
-      .update(scans)
-      .set({ startMs: sql`${scans.startMs} + ${shiftMs}` })
-      .where(eq(scans.sessionId, sessionId));
+    for (const session of SESSIONS) {
+      const id = sessionId(session.code);
+      const shiftMs = sessionStartMs(session, startMs) - sessionStartMs(session, mark.startMs);
+      await tx
+        .update(sessions)
+        .set({ startMs: sessionStartMs(session, startMs) })
+        .where(eq(sessions.id, id));
+      await tx
+        .update(scans)
+        .set({ startMs: sql`${scans.startMs} + ${shiftMs}` })
+        .where(eq(scans.sessionId, id));
+    }
+    await emptyDated(tx);
+    await fillDated(tx, nowMs);
     await tx.update(seedMarks).set({ startMs, seededAtMs: nowMs }).where(eq(seedMarks.name, MARK));
     return 'moved';
   });
+}
+
+/** Whether people have worked on it: then its dates are theirs. */
+async function isTouched(tx: Tx, mark: typeof seedMarks.$inferSelect): Promise<boolean> {
+  const since = mark.seededAtMs;
+  const counts = await Promise.all([
+    tx.$count(journal, inArray(journal.sessionId, SESSION_IDS)),
+    tx.$count(sessions, or(gt(sessions.rev, 0), notInArray(sessions.id, SESSION_IDS))),
+    tx.$count(sessionComments),
+    tx.$count(clockReadings, or(gt(clockReadings.enteredAtMs, since), gt(clockReadings.setAsideAtMs, since))),
+    tx.$count(clockEvents, gt(clockEvents.enteredAtMs, since)),
+    tx.$count(offers, gt(offers.madeAtMs, since)),
+    tx.$count(slotReplies, gt(slotReplies.atMs, since)),
+    tx.$count(scanOutcomes, gt(scanOutcomes.atMs, since)),
+  ]);
+  return counts.some((count) => count > 0);
+}
+
+async function emptyDated(tx: Tx): Promise<void> {
+  const ours = await tx.select({ id: offers.id }).from(offers).where(inArray(offers.sessionId, SESSION_IDS));
+  const offerIds = ours.map(({ id }) => id);
+  await tx.delete(scanOutcomes).where(inArray(scanOutcomes.sessionId, SESSION_IDS));
+  await tx.delete(slotReplies).where(inArray(slotReplies.sessionId, SESSION_IDS));
+  await tx.delete(slots).where(inArray(slots.offerId, offerIds));
+  await tx.delete(offers).where(inArray(offers.id, offerIds));
+  await tx.delete(clockReadings).where(inArray(clockReadings.enteredBy, USER_IDS));
+  await tx.delete(clockEvents).where(inArray(clockEvents.userId, USER_IDS));
 }
 
 async function fillCatalogues(tx: Tx): Promise<void> {
@@ -122,56 +148,9 @@ async function fillCatalogues(tx: Tx): Promise<void> {
   );
 }
 
-async function fillSession(tx: Tx, startMs: number): Promise<void> {
-  const { code, title, lengthSeconds, minElevationDeg, leastSpareSeconds } = SESSION;
-  const { snrDoubtful, snrFair, snrStrong } = SESSION;
-  await tx.insert(sessions).values({
-    id: sessionId,
-    code,
-    title,
-    state: 'draft',
-    startMs,
-    lengthSeconds,
-    modeId: modeId(BAND_22),
-    minElevationDeg,
-    leastSpareSeconds,
-    snrDoubtful,
-    snrFair,
-    snrStrong,
-  });
-  await tx
-    .insert(sessionStations)
-    .values(STATIONS.map((station) => ({ sessionId, stationCode: station.code })));
-  await tx
-    .insert(sessionSources)
-    .values(
-      SOURCES.map(([name, , , , , , wantedScans]) => ({ sessionId, sourceId: sourceId(name), wantedScans })),
-    );
-  const plan = SCANS.map(([afterMinutes, minutes, source, codes], index) => ({
-    id: seedId('scan', `${code} ${index + 1}`),
-    sourceId: sourceId(source),
-    modeId: modeId(index === 0 ? BAND_8 : BAND_22),
-    startMs: startMs + afterMinutes * 60_000,
-    lengthSeconds: minutes * 60,
-    codes: codes.split(' '),
-  }));
-  await tx.insert(scans).values(plan.map(({ codes: _, ...scan }) => ({ sessionId, ...scan })));
-  await tx
-    .insert(scanStations)
-    .values(
-      plan.flatMap(({ id: scanId, codes }) =>
-        codes.map((stationCode) => ({ sessionId, scanId, stationCode, lateSeconds: 0, earlySeconds: 0 })),
-      ),
-    );
-  await tx
-    .insert(subjects)
-    .values([{ id: 'span' }, ...plan].map(({ id }) => ({ sessionId, id, rev: 0, top: 0 })));
-}
-
 type HashedAccount = (typeof ACCOUNTS)[number] & { passwordHash: string };
 
 async function fillAccounts(tx: Tx, accounts: readonly HashedAccount[]): Promise<void> {
-  const userId = (email: string) => seedId('user', email);
   await tx.insert(users).values(
     accounts.map(({ email, passwordHash }) => ({
       id: userId(email),
@@ -181,12 +160,14 @@ async function fillAccounts(tx: Tx, accounts: readonly HashedAccount[]): Promise
     })),
   );
   await tx.insert(grants).values(
-    accounts.map(({ email, role, stationCode, sessionCode }) => ({
-      id: seedId('grant', `${email} ${role}`),
-      userId: userId(email),
-      role,
-      stationCode: stationCode ?? null,
-      sessionId: sessionCode === undefined ? null : seedId('session', sessionCode),
-    })),
+    accounts.flatMap(({ email, role, stationCode, sessionCodes = [null] }) =>
+      sessionCodes.map((code) => ({
+        id: seedId('grant', `${email} ${role} ${code ?? ''}`),
+        userId: userId(email),
+        role,
+        stationCode: stationCode ?? null,
+        sessionId: code === null ? null : sessionId(code),
+      })),
+    ),
   );
 }

@@ -7,12 +7,18 @@ export const ACCOUNTS: readonly {
   email: string;
   role: Role;
   stationCode?: string;
-  sessionCode?: string;
+  sessionCodes?: readonly string[];
+  /** not offered on the sign-in page, so that it stays short */
+  isUnlisted?: boolean;
 }[] = [
   { email: 'admin@antiphon.example', role: 'admin' },
   { email: 'scheduler@antiphon.example', role: 'scheduler' },
   { email: 'operator@arrowfell.example', role: 'operator', stationCode: 'Af' },
   { email: 'operator@brightmoor.example', role: 'operator', stationCode: 'Bm' },
+  { email: 'operator@egretmesa.example', role: 'operator', stationCode: 'Em', isUnlisted: true },
+  { email: 'operator@drumpoint.example', role: 'operator', stationCode: 'Dp', isUnlisted: true },
+  { email: 'operator@fallowness.example', role: 'operator', stationCode: 'Fn', isUnlisted: true },
+  { email: 'operator@cinderflat.example', role: 'operator', stationCode: 'Cf', isUnlisted: true },
   { email: 'correlator@antiphon.example', role: 'correlator' },
-  { email: 'investigator@antiphon.example', role: 'investigator', sessionCode: 'ARC-031' },
+  { email: 'investigator@antiphon.example', role: 'investigator', sessionCodes: ['ARC-031', 'ARC-029'] },
 ];

@@ -1,14 +1,59 @@
-/** Invented. Its dates are shifted by whole sidereal days, so that the sky over the stations stays the same. */
-export const SESSION = {
-  code: 'ARC-031',
-  title: 'North arc, 22 GHz',
-  baseStart: '2027-02-12T20:00:00Z',
+import type { sessions } from '../schema/sessions';
+
+type State = (typeof sessions.$inferSelect)['state'];
+
+/** Invented. The draft's start; the dates of all are shifted by whole sidereal days, so that the sky stays the same. */
+export const BASE_START = '2027-02-12T20:00:00Z';
+
+/** Invented: one draft ahead of now, one published and under way, one observed. */
+export const SESSIONS: readonly {
+  code: string;
+  title: string;
+  state: State;
+  daysBefore: number;
+  purpose: string;
+}[] = [
+  {
+    code: 'ARC-031',
+    title: 'North arc, 22 GHz',
+    state: 'draft',
+    daysBefore: 0,
+    purpose: 'Third epoch of the north arc, with one nodding pair.',
+  },
+  {
+    code: 'ARC-030',
+    title: 'North arc, 22 GHz, second epoch',
+    state: 'published',
+    daysBefore: 3,
+    purpose: 'Second epoch of the north arc.',
+  },
+  {
+    code: 'ARC-029',
+    title: 'North arc, 22 GHz, first epoch',
+    state: 'published',
+    daysBefore: 10,
+    purpose: 'First epoch of the north arc.',
+  },
+];
+
+/** The same for all of them. */
+export const SETTINGS = {
   lengthSeconds: 86_400,
   minElevationDeg: 5,
   leastSpareSeconds: 10,
   snrDoubtful: 7,
   snrFair: 10,
   snrStrong: 20,
+} as const;
+
+/** The nodding group that stands in the place of this scan. */
+export const NODDING = {
+  scan: 11,
+  calibrator: 'J0811+0146',
+  calibratorOnSeconds: 20,
+  targetOnSeconds: 36,
+  turnSeconds: 40,
+  cycles: 8,
 } as const;
 
 /** Minutes after the session's start, length in minutes, source, stations. The first is at 8.4 GHz. */

@@ -1,5 +1,7 @@
 import { expect, it } from 'vitest';
-import { demoStartMs, seedDemo, seedId } from '@/db/seed';
+import { seedDemo } from '@/db/seed';
+import { seedId } from '@/db/seed-ids';
+import { demoStartMs } from '@/db/seed-sessions';
 import { readTimeline } from '@/src/data/plan/read';
 import { checkPlan } from '@/src/schedule/checks';
 import type { PlanContext } from '@/src/schedule/context';
@@ -38,7 +40,7 @@ it.each([0, 9, 100, 187])(
     if (days > 0) expect(await seedDemo(now)).toBe('moved');
     const { plan, problems } = await demoProblems();
     expect(plan.span.startMs).toBe(demoStartMs(now));
-    expect(plan.scans).toHaveLength(73);
+    expect(plan.scans).toHaveLength(89);
     expect(problems.map(({ key, severity }) => [key, severity])).toEqual([
       [`slew:${scan(16)}:Af`, 'fix'],
       [`limit:${scan(15)}:Cf`, 'note'],

@@ -9,7 +9,8 @@ import { sessionSources } from '@/db/schema/session-sources';
 import { sessionStations } from '@/db/schema/session-stations';
 import { sessions } from '@/db/schema/sessions';
 import { users } from '@/db/schema/users';
-import { seedDemo, seedId } from '@/db/seed';
+import { seedDemo } from '@/db/seed';
+import { seedId } from '@/db/seed-ids';
 import type { Grant, Role, Viewer } from '@/src/access/policy';
 import type { Scan } from '@/src/schedule/plan';
 

@@ -1,10 +1,10 @@
 import type { Metadata, Route } from 'next';
 import { redirect } from 'next/navigation';
-import { demoStartMs } from '@/db/seed';
 import { ACCOUNTS, DEMO_PASSWORD } from '@/db/seed-data/accounts';
-import { SCANS, SESSION } from '@/db/seed-data/session';
+import { SCANS, SETTINGS } from '@/db/seed-data/session';
 import { SOURCES } from '@/db/seed-data/sources';
 import { STATIONS } from '@/db/seed-data/stations';
+import { demoStartMs } from '@/db/seed-sessions';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { roleLabel } from '@/src/access/policy';
 import { env, nowMs } from '@/src/env';
@@ -37,7 +37,7 @@ export default async function SignInPage({ searchParams }: { searchParams: Searc
 }
 
 function demoAccounts(): DemoAccounts {
-  const accounts = ACCOUNTS.map(({ email, role, stationCode }) => ({
+  const accounts = ACCOUNTS.filter(({ isUnlisted }) => !isUnlisted).map(({ email, role, stationCode }) => ({
     email,
     label: roleLabel({ role, stationCode: stationCode ?? null }),
   }));
@@ -54,7 +54,7 @@ function demoScene(now: number): Scene | null {
   const placed = STATIONS.map(({ code, latitudeDeg, longitudeDeg, heightM, minElevationDeg }) => ({
     code,
     site: { latitudeDeg, longitudeDeg, heightM },
-    minElevationDeg: Math.max(minElevationDeg, SESSION.minElevationDeg),
+    minElevationDeg: Math.max(minElevationDeg, SETTINGS.minElevationDeg),
   }));
   const scans = SCANS.filter(([, , observed]) => observed === name).map(
     ([afterMinutes, minutes, , codes]) => ({

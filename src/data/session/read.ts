@@ -23,7 +23,7 @@ export const listSessions = (viewer: Viewer): Promise<{ ok: true; sessions: Sess
         startMs: sessions.startMs,
         lengthSeconds: sessions.lengthSeconds,
         stations: sql<string>`(SELECT json_group_array(${sessionStations.stationCode} ORDER BY ${sessionStations.stationCode}) FROM ${sessionStations} WHERE ${sessionStations}.session_id = ${sessions}.id)`,
-        scanCount: sql<number>`(SELECT count(*) FROM ${scans} WHERE ${scans}.session_id = ${sessions}.id)`,
+        scanCount: sql<number>`(SELECT count(CASE WHEN group_id IS NULL THEN 1 END) + count(DISTINCT group_id) FROM ${scans} WHERE ${scans}.session_id = ${sessions}.id)`,
       })
       .from(sessions)
       .where(readableBy(viewer))
