@@ -1,9 +1,10 @@
 import type { OutlookCell } from '@/src/outlook/fringe-outlook';
 import { isExpected } from '@/src/outlook/fringe-outlook';
-import { scanStopMs, type Plan, type Scan, type ScanId } from '@/src/schedule/plan';
+import { blocksOf, type Block } from '@/src/schedule/blocks';
+import type { Plan, ScanId } from '@/src/schedule/plan';
 import { crisp, xOf, type Frame } from './scale';
 import { fittingLabels } from './fitting';
-import { inView } from './scans';
+import { isBlockInView } from './scans';
 
 const FULL_HEIGHT = 26;
 
@@ -21,14 +22,16 @@ export function FringeStrip({
 }) {
   const base = frame.fringeBase;
   const pairs = (frame.staveCount * (frame.staveCount - 1)) / 2;
-  const scans = plan.scans.filter((scan) => inView(frame, scan));
-  const boxOf = (scan: Scan) => {
-    const x1 = Math.max(frame.left, crisp(xOf(frame, scan.startMs)));
-    const wanted = Math.max(frame.view.hours > 12 ? 3 : 10, xOf(frame, scanStopMs(scan)) - x1);
+  const blocks = blocksOf(plan).filter((block) => isBlockInView(frame, block));
+  const boxOf = (block: Block) => {
+    const x1 = Math.max(frame.left, crisp(xOf(frame, block.startMs)));
+    const wanted = Math.max(frame.view.hours > 12 ? 3 : 10, xOf(frame, block.stopMs) - x1);
     const width = Math.max(1, Math.min(wanted, frame.right - x1));
     return { x1, width, middle: x1 + width / 2 };
   };
-  const fitting = fittingLabels(scans.map((scan) => ({ id: scan.id, middle: boxOf(scan).middle, half: 7 })));
+  const fitting = fittingLabels(
+    blocks.map((block) => ({ id: block.id, middle: boxOf(block).middle, half: 7 })),
+  );
   return (
     <g>
       <line x1={0} x2={frame.right} y1={base + 0.5} y2={base + 0.5} stroke="var(--ink)" />
@@ -41,12 +44,12 @@ export function FringeStrip({
       <text x={10} y={base - 5} fontSize={11} className="fill-ink2" style={{ fontStretch: '76%' }}>
         outline: possible
       </text>
-      {scans.map((scan) => {
-        const { on, good, doubtful } = countCells(outlook.get(scan.id) ?? []);
+      {blocks.map((block) => {
+        const { on, good, doubtful } = worstLeg(block, outlook);
         const unit = pairs === 0 ? 0 : FULL_HEIGHT / pairs;
-        const { x1, width, middle } = boxOf(scan);
+        const { x1, width, middle } = boxOf(block);
         return (
-          <g key={scan.id}>
+          <g key={block.id}>
             <rect
               x={x1}
               y={base - on * unit}
@@ -65,7 +68,7 @@ export function FringeStrip({
                 fill="url(#doubtful-hatch)"
               />
             )}
-            {fitting.has(scan.id) && (
+            {fitting.has(block.id) && (
               <text
                 x={middle}
                 y={base - on * unit - 4}
@@ -74,7 +77,7 @@ export function FringeStrip({
                 textAnchor="middle"
                 style={{
                   paintOrder: 'stroke',
-                  stroke: scan.id === chosenId ? 'var(--wash)' : 'var(--sheet)',
+                  stroke: block.legs.some(({ id }) => id === chosenId) ? 'var(--wash)' : 'var(--sheet)',
                   strokeWidth: 3,
                 }}
               >
@@ -86,6 +89,13 @@ export function FringeStrip({
       })}
     </g>
   );
+}
+
+/** Of a nodding group its worst calibrator leg. */
+function worstLeg(block: Block, outlook: ReadonlyMap<ScanId, readonly OutlookCell[]>) {
+  const legs = block.legs.filter(({ leg }) => leg !== 'target');
+  const counts = (legs.length > 0 ? legs : block.legs).map(({ id }) => countCells(outlook.get(id) ?? []));
+  return counts.reduce((worst, count) => (count.good < worst.good ? count : worst));
 }
 
 export function HatchPatterns() {

@@ -1,5 +1,6 @@
 'use client';
 
+import { blocksOf } from '@/src/schedule/blocks';
 import { useDerived } from './derived';
 import { clampView, HEAD, HOUR, MARGIN, ticks, viewEndMs, type View } from './scale';
 import { useTimeline, useTimelineStore } from './store';
@@ -16,6 +17,7 @@ export function Overview({ width }: { width: number }) {
   const drawWidth = width - HEAD - MARGIN;
   const spanMs = lengthSeconds * 1000;
   const x = (ms: number) => HEAD + ((ms - startMs) / spanMs) * drawWidth;
+  const count = blocksOf(plan).length;
   const hours = lengthSeconds / 3600;
   const every = hours > 12 ? 2 : 1;
   const centre = (clientX: number, box: DOMRect, grab: number) => {
@@ -80,7 +82,7 @@ export function Overview({ width }: { width: number }) {
         Whole {Number(hours.toFixed(1))} h
       </text>
       <text x={10} y={34} fontSize={11} className="fill-ink2">
-        {plan.scans.length} {plan.scans.length === 1 ? 'scan' : 'scans'}
+        {count} {count === 1 ? 'scan' : 'scans'}
       </text>
     </svg>
   );

@@ -1,5 +1,6 @@
 import type { PathLeg } from '@/src/schedule/paths';
-import { scanStopMs, type Plan, type Scan } from '@/src/schedule/plan';
+import { blocksOf, type Block } from '@/src/schedule/blocks';
+import { scanStopMs, stationOnMs, type Plan, type Scan } from '@/src/schedule/plan';
 import { tableElevationDeg, type SkyTable } from '@/src/schedule/sky-table';
 import type { PlanStation } from '@/src/schedule/context';
 import { crisp, staveTop, ticks, viewEndMs, xOf, yOf, type Frame } from './scale';
@@ -8,6 +9,9 @@ type Legs = ReadonlyMap<string, readonly PathLeg[]>;
 
 export const inView = (frame: Frame, scan: Pick<Scan, 'startMs' | 'lengthSeconds'>) =>
   scanStopMs(scan) > frame.view.startMs && scan.startMs < viewEndMs(frame.view);
+
+export const isBlockInView = (frame: Frame, block: Pick<Block, 'startMs' | 'stopMs'>) =>
+  block.stopMs > frame.view.startMs && block.startMs < viewEndMs(frame.view);
 
 /** Tints, start and stop lines, and the bracket that ties a scan's stations together. */
 export function Brackets({
@@ -21,17 +25,14 @@ export function Brackets({
   stations: readonly PlanStation[];
   fadedScanId: string | null;
 }) {
-  const scans = plan.scans.filter((scan) => inView(frame, scan));
+  const blocks = blocksOf(plan).filter((block) => isBlockInView(frame, block));
+  const isFaded = (block: Block) => block.legs.some(({ id }) => id === fadedScanId);
   const solid = bracketPaths(
     frame,
-    scans.filter(({ id }) => id !== fadedScanId),
+    blocks.filter((block) => !isFaded(block)),
     stations,
   );
-  const faded = bracketPaths(
-    frame,
-    scans.filter(({ id }) => id === fadedScanId),
-    stations,
-  );
+  const faded = bracketPaths(frame, blocks.filter(isFaded), stations);
   return (
     <>
       <BracketPaths {...solid} />
@@ -58,13 +59,13 @@ function BracketPaths({ tint, out, between, start, stop }: Paths) {
   );
 }
 
-function bracketPaths(frame: Frame, scans: readonly Scan[], stations: readonly PlanStation[]): Paths {
+function bracketPaths(frame: Frame, blocks: readonly Block[], stations: readonly PlanStation[]): Paths {
   const paths: Paths = { tint: '', out: '', between: '', start: '', stop: '' };
-  for (const scan of scans) {
-    const bracketX = crisp(xOf(frame, scan.startMs));
+  for (const block of blocks) {
+    const bracketX = crisp(xOf(frame, block.startMs));
     const top = frame.headings + 36;
-    const members = new Map(scan.stations.map((member) => [member.station, member]));
-    const rows = stations.flatMap(({ code }, index) => (members.has(code) ? [index] : []));
+    const members = new Map(stations.map(({ code }) => [code, stationSpan(block, code)]));
+    const rows = stations.flatMap(({ code }, index) => (members.get(code) ? [index] : []));
     const last = rows.at(-1);
     if (bracketX >= frame.left && bracketX <= frame.right) {
       paths.out += `M${bracketX} ${top}V${frame.stavesEnd}`;
@@ -76,8 +77,8 @@ function bracketPaths(frame: Frame, scans: readonly Scan[], stations: readonly P
     stations.forEach(({ code }, index) => {
       const member = members.get(code);
       if (!member) return;
-      const x1 = Math.max(frame.left, crisp(xOf(frame, scan.startMs + member.lateSeconds * 1000)));
-      const x2 = Math.min(frame.right, crisp(xOf(frame, scanStopMs(scan) - member.earlySeconds * 1000)));
+      const x1 = Math.max(frame.left, crisp(xOf(frame, member.startMs)));
+      const x2 = Math.min(frame.right, crisp(xOf(frame, member.stopMs)));
       if (x2 <= x1) return;
       const y = staveTop(frame, index);
       const box = `V${y + frame.staveHeight}`;
@@ -87,6 +88,17 @@ function bracketPaths(frame: Frame, scans: readonly Scan[], stations: readonly P
     });
   }
   return paths;
+}
+
+/** From when to when a station takes part; a group from its first leg to its last. */
+function stationSpan(block: Block, code: string): { startMs: number; stopMs: number } | null {
+  const spans = block.legs.flatMap((scan) => {
+    const member = scan.stations.find(({ station }) => station === code);
+    return member ? [stationOnMs(scan, member)] : [];
+  });
+  const first = spans[0];
+  if (!first) return null;
+  return { startMs: first.startMs, stopMs: Math.max(...spans.map(({ stopMs }) => stopMs)) };
 }
 
 /** A note follows the source's elevation from start to stop; late ones are hollow and vermilion. */
@@ -110,12 +122,13 @@ export function Notes({
   lateKeys: ReadonlySet<string>;
   fadedScanId: string | null;
 }) {
-  const sourceOf = new Map(plan.scans.map((scan) => [scan.id, scan.sourceId]));
-  const paths = { ink: '', focus: '', late: '', lateInner: '', faded: '' };
+  const scanOf = new Map(plan.scans.map((scan) => [scan.id, scan]));
+  const paths = { ink: '', focus: '', late: '', lateInner: '', faded: '', leg: '', hollow: '' };
   stations.forEach(({ code }, index) => {
     for (const leg of legs.get(code) ?? []) {
       if (leg.stopMs <= frame.view.startMs || leg.startMs >= viewEndMs(frame.view)) continue;
-      const sourceId = sourceOf.get(leg.scanId);
+      const scan = scanOf.get(leg.scanId);
+      const sourceId = scan?.sourceId ?? '';
       const kind =
         leg.scanId === fadedScanId
           ? 'faded'
@@ -124,8 +137,13 @@ export function Notes({
             : sourceId === focusId
               ? 'focus'
               : 'ink';
-      paths[kind] += notePath(frame, table, sourceId ?? '', leg, index, 0);
-      if (kind === 'late') paths.lateInner += notePath(frame, table, sourceId ?? '', leg, index, 2);
+      if (scan?.leg && kind === 'ink') {
+        const path = `M${xOf(frame, leg.startMs).toFixed(1)} ${yOf(frame, index, leg.startAzEl.elevationDeg).toFixed(1)}L${xOf(frame, leg.stopMs).toFixed(1)} ${yOf(frame, index, leg.stopAzEl.elevationDeg).toFixed(1)}`;
+        paths[scan.leg === 'target' ? 'leg' : 'hollow'] += path;
+        continue;
+      }
+      paths[kind] += notePath(frame, table, sourceId, leg, index, 0);
+      if (kind === 'late') paths.lateInner += notePath(frame, table, sourceId, leg, index, 2);
     }
   });
   const width = frame.view.hours > 12 ? 5 : 7;
@@ -133,6 +151,9 @@ export function Notes({
     <g fill="none">
       <path d={paths.faded} stroke="var(--note)" strokeWidth={width} opacity={0.35} />
       <path d={paths.ink} stroke="var(--note)" strokeWidth={width} />
+      <path d={paths.leg} stroke="var(--note)" strokeWidth={width} />
+      <path d={paths.hollow} stroke="var(--note)" strokeWidth={width} />
+      <path d={paths.hollow} stroke="var(--sheet)" strokeWidth={width - 2} />
       <path d={paths.focus} stroke="var(--teal)" strokeWidth={width} />
       <path d={paths.late} stroke="var(--verm)" strokeWidth={width + 1} />
       <path d={paths.lateInner} stroke="var(--sheet)" strokeWidth={width - 2.5} />

@@ -3,6 +3,7 @@
 import { useDraggable } from '@dnd-kit/core';
 import { useState } from 'react';
 import type { TimelineSource } from '@/src/data/plan/dto';
+import { blocksOf } from '@/src/schedule/blocks';
 import type { SkyTable } from '@/src/schedule/sky-table';
 import { stationsUp } from '@/src/schedule/sky-table';
 import { useKeyPlacing } from './key-placing';
@@ -68,7 +69,8 @@ function SourceRow({ source, table }: { source: TimelineSource; table: SkyTable 
     (state) => state.placing?.what === 'new' && state.placing.sourceId === source.id,
   );
   const scans = useTimeline(
-    (state) => state.plan.scans.filter(({ sourceId }) => sourceId === source.id).length,
+    (state) =>
+      blocksOf(state.plan).filter(({ legs }) => legs.some(({ sourceId }) => sourceId === source.id)).length,
   );
   const { startNew } = useKeyPlacing();
   const { setNodeRef, listeners } = useDraggable({ id: source.id, disabled: !canEdit || !table });
