@@ -1,8 +1,7 @@
-import { readFileSync } from 'node:fs';
-import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { fitClock, predictClock, segmentAt, type ClockReading, type ClockSegment } from '@/src/clock/fit';
 import { valueOf } from '@/src/clock/least-squares';
+import regression from '../reference/regression.json';
 
 const DAY = 86_400;
 const DAY_MS = DAY * 1000;
@@ -39,9 +38,7 @@ type NistCase = {
 };
 
 // numpy 1.24.2 and scipy 1.10.1 on synthetic clocks; NIST StRD Norris (certified values, public domain)
-const { cases } = JSON.parse(
-  readFileSync(path.join(import.meta.dirname, '../reference/regression.json'), 'utf8'),
-) as { cases: (ClockCase | NistCase)[] };
+const cases = regression.cases as unknown as (ClockCase | NistCase)[];
 const clocks = cases.filter((one): one is ClockCase => one.kind === 'clock');
 const nist = cases.filter((one): one is NistCase => one.kind === 'nist');
 
