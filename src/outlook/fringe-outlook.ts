@@ -1,6 +1,7 @@
 import { baselinesOf } from '../array/baseline';
-import type { PlanContext, PlanSettings } from '../schedule/context';
+import type { PlanContext, PlanMode, PlanSettings } from '../schedule/context';
 import type { Plan, Scan, ScanId, StationCode } from '../schedule/plan';
+import type { ClockPlace, PlaceInWindow } from './clock-place';
 import { signalOf, type Lack, type Signal } from './signal';
 import { scanEnd, togetherOn, type ScanEnd } from './together';
 
@@ -26,18 +27,21 @@ export type OutlookCell = Signal & {
   overlapSeconds: number;
 };
 
-/** Where the predicted clocks of a baseline put its fringe in the correlator's search window. */
-export type ClockPlace = 'inside' | 'edge' | 'outside' | 'unknown';
-
 /** A plan's context, and a judge of clocks where there is a clock log. */
 export type OutlookContext = PlanContext & {
-  judgeClock?: (first: StationCode, second: StationCode, atMs: number) => ClockPlace;
+  judgeClock?: (
+    first: StationCode,
+    second: StationCode,
+    atMs: number,
+    mode: PlanMode,
+  ) => Pick<PlaceInWindow, 'place' | 'amplitude' | 'missing'>;
 };
 
 /**
  * Which baselines should show fringes, scan by scan.
  *
- * @param context  without judgeClock the clock is not judged, as if every fringe fell inside the window
+ * @param context  without judgeClock the clock is not judged, as if every fringe fell inside the window; with it the
+ *                 SNR is that which is left where the fringe stands in the window
  * @returns for each scan in the plan's order all baselines of the plan's stations, west to east by first, then second
  *
  * Left out: opacity and gain curves (zenith SEFDs, f = 1), feeds that do not match, the rule of nodding groups (each
@@ -113,11 +117,20 @@ function cellOf(scan: Scan, first: ScanEnd, second: ScanEnd, context: OutlookCon
     return cellFrom(scan, first, second, judged, 0, NO_NUMBERS);
   }
   const { numbers, lack } = signalOf(first, second, context.sources[scan.sourceId], mode, together);
-  const clock = context.judgeClock?.(first.code, second.code, together.midMs) ?? 'inside';
-  const clocks = `clocks of ${first.code}–${second.code}`;
-  const judged = judge(numbers.snr, lack, clock, clocks, context.settings.snrLimits);
-  return cellFrom(scan, first, second, judged, together.seconds, numbers);
+  const clock = context.judgeClock?.(first.code, second.code, together.midMs, mode) ?? UNJUDGED;
+  const snr = numbers.snr === null ? null : numbers.snr * clock.amplitude;
+  const judged = judge(snr, lack, clock.place, clock.missing, context.settings.snrLimits);
+  return cellFrom(
+    scan,
+    first,
+    second,
+    judged,
+    together.seconds,
+    snr === numbers.snr ? numbers : { ...numbers, snr },
+  );
 }
+
+const UNJUDGED = { place: 'inside', amplitude: 1, missing: null } as const;
 
 type Judged = Pick<OutlookCell, 'verdict' | 'reason' | 'missing'>;
 
@@ -152,7 +165,7 @@ function judge(
   snr: number | null,
   lack: Lack | null,
   clock: ClockPlace,
-  clocks: string,
+  missing: string | null,
   limits: PlanSettings['snrLimits'],
 ): Judged {
   const verdict = (word: Verdict, reason: Reason | null = null) => ({ verdict: word, reason, missing: null });
@@ -161,7 +174,7 @@ function judge(
   if (snr === null) {
     return { verdict: 'unknown', reason: lack?.reason ?? null, missing: lack?.missing ?? null };
   }
-  if (clock === 'unknown') return { verdict: 'unknown', reason: 'clock', missing: clocks };
+  if (clock === 'unknown') return { verdict: 'unknown', reason: 'clock', missing };
   if (snr < limits.fair) return verdict('doubtful');
   if (clock === 'edge') return verdict('doubtful', 'clock');
   return verdict(snr >= limits.strong ? 'strong' : 'fair');

@@ -6,9 +6,9 @@ import {
   scanOutlook,
   snrText,
   sumExpected,
-  type ClockPlace,
   type OutlookContext,
 } from '@/src/outlook/fringe-outlook';
+import type { ClockPlace } from '@/src/outlook/clock-place';
 import { azEl } from '@/src/sky/position';
 import { visibilityWindows } from '@/src/sky/windows';
 import { makeContext, SOURCES, STATIONS, withStation } from '../schedule/context-maker';
@@ -94,6 +94,10 @@ describe('a verdict by SNR', () => {
     expect([judged(1, 2, snr), judged(1, 2, above)]).toEqual(['strong', 'fair']);
   });
 
+  const judgeAt =
+    (place: ClockPlace, amplitude = 1) =>
+    () => ({ place, amplitude, missing: 'no clock reading of Bm' });
+
   it.each<[ClockPlace, number, string, string | null]>([
     ['inside', 25, 'strong', null],
     ['edge', 25, 'doubtful', 'clock'],
@@ -103,12 +107,24 @@ describe('a verdict by SNR', () => {
     ['unknown', 25, 'unknown', 'clock'],
     ['unknown', 5, 'none', 'snr'],
   ])('with a clock %s and SNR %d is %s', (place, snr, verdict, reason) => {
-    const context = { ...withSnr(snr), judgeClock: () => place };
+    const context = { ...withSnr(snr), judgeClock: judgeAt(place) };
     expect(cellOf(planOf(), 'Af–Bm', context)).toMatchObject({ verdict, reason });
   });
 
+  it('loses SNR where the fringe stands beyond half the window', () => {
+    const context = { ...withSnr(25), judgeClock: judgeAt('inside', 0.7) };
+    const cell = cellOf(planOf(), 'Af–Bm', context);
+    expect(cell.verdict).toBe('fair');
+    expect(cell.snr).toBeCloseTo(17.5, 6);
+  });
+
+  it('names the clock that is not known', () => {
+    const context = { ...withSnr(25), judgeClock: judgeAt('unknown') };
+    expect(cellOf(planOf(), 'Af–Bm', context).missing).toBe('no clock reading of Bm');
+  });
+
   it('is none with a clock outside even where an input is missing', () => {
-    const context = { ...withSource(null), judgeClock: (): ClockPlace => 'outside' };
+    const context = { ...withSource(null), judgeClock: judgeAt('outside') };
     expect(cellOf(planOf(), 'Af–Bm', context)).toMatchObject({ verdict: 'none', reason: 'clock', snr: null });
   });
 });
