@@ -1,6 +1,6 @@
 import { predictClock, type ClockFit } from '../clock/fit';
 import { delayWindowSeconds, rateWindow, windowAmplitude } from '../clock/search-window';
-import type { PlanMode } from '../schedule/context';
+import type { PlanMode, PlanSettings } from '../schedule/context';
 import type { StationCode } from '../schedule/plan';
 
 /** Where the predicted clocks of a baseline put its fringe in the correlator's search window. */
@@ -15,14 +15,7 @@ export type StationClock = {
   instrument: { seconds: number; sigmaSeconds: number } | null;
 };
 
-export type ClockRules = {
-  /** age of the newest reading from which it is a note */
-  noteAfterHours: number;
-  /** age from which nothing is said of the clock */
-  unknownAfterDays: number;
-  /** taken for an instrument delay that is not known */
-  instrumentSigmaSeconds: number;
-};
+export type ClockRules = PlanSettings['clockRules'];
 
 /** Where a baseline's fringe falls in the correlator's search window, second minus first. */
 export type PlaceInWindow = {

@@ -51,6 +51,14 @@ export type PlanSettings = {
   leastSpareSeconds: number;
   /** lower limits of the verdict words; below doubtful is none */
   snrLimits: { doubtful: number; fair: number; strong: number };
+  clockRules: {
+    /** age of the newest reading from which it is a note */
+    noteAfterHours: number;
+    /** age from which nothing is said of the clock */
+    unknownAfterDays: number;
+    /** taken for an instrument delay that is not known */
+    instrumentSigmaSeconds: number;
+  };
 };
 
 export type PlanContext = {

@@ -79,6 +79,7 @@ export function makeContext(changes: Partial<PlanContext> = {}): PlanContext {
       minElevationDeg: 0,
       leastSpareSeconds: 10,
       snrLimits: { doubtful: 7, fair: 10, strong: 20 },
+      clockRules: { noteAfterHours: 24, unknownAfterDays: 7, instrumentSigmaSeconds: 5e-7 },
     },
     ...changes,
   };

@@ -10,6 +10,7 @@ import { readModes, readSources, readStations } from './context';
 import type { JournalPage, Timeline } from './dto';
 import { readEntries, readSteps } from './journal';
 import { readPlanRows } from './rows';
+import { settingsOf } from './settings';
 
 const PAGE = 500;
 
@@ -39,11 +40,7 @@ export const readTimeline = (
       stations: await readStations(db(), stations),
       sources: await readSources(db(), id),
       modes: await readModes(db()),
-      settings: {
-        minElevationDeg: session.minElevationDeg,
-        leastSpareSeconds: session.leastSpareSeconds,
-        snrLimits: { doubtful: session.snrDoubtful, fair: session.snrFair, strong: session.snrStrong },
-      },
+      settings: settingsOf(session),
       revs,
       seq,
       steps: await readSteps(db(), { sessionId: id, userId: viewer.userId }),
