@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process';
 import { existsSync } from 'node:fs';
 import { connect, createServer } from 'node:net';
+import { startMailFake } from './mail-fake.mjs';
 import { isDemo, nextBin, stop } from './settings.mjs';
 
 const mode = process.argv[2] === 'dev' ? 'dev' : 'start';
@@ -18,6 +19,8 @@ if (isDemo() && !['127.0.0.1', 'localhost', '::1'].includes(host)) {
 if (mode === 'start' && !existsSync('.next/BUILD_ID'))
   stop('There is no build yet: run `npm start`, which makes one.');
 await requireFreePort();
+if (isDemo() && !process.env.RESEND_API_KEY && !process.env.MAIL_URL)
+  process.env.MAIL_URL = await startMailFake();
 
 const args = ['--import', './scripts/with-parent.mjs', nextBin, mode, '-H', host, '-p', String(port)];
 const server = spawn(process.execPath, args, { stdio: 'inherit' });

@@ -15,6 +15,10 @@ const schema = z.object({
   ANTIPHON_NOW: z.iso.datetime({ error: 'must be an instant such as 2027-02-10T14:32:00Z' }).optional(),
   COOKIE_SECURE: flag.default(false),
   TRUST_PROXY: flag.default(false),
+  APP_URL: z.url({ error: 'must be an address such as https://plan.example' }).optional(),
+  RESEND_API_KEY: z.string().optional(),
+  MAIL_URL: z.url({ error: 'must be an address such as http://127.0.0.1:4797' }).optional(),
+  MAIL_FROM: z.string().min(3).default('Antiphon <notices@antiphon.example>'),
   LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'fatal', 'silent']).default('info'),
 });
 
@@ -29,6 +33,13 @@ export type Env = {
   isCookieSecure: boolean;
   trustsProxy: boolean;
   logLevel: string;
+  /** where people reach the application; without a slash at the end */
+  appUrl: string;
+  /** the provider's key; null while the local fake stands for it */
+  mailKey: string | null;
+  /** where the local fake listens; null is none */
+  mailUrl: string | null;
+  mailFrom: string;
 };
 
 export class EnvError extends Error {
@@ -66,6 +77,10 @@ export function readEnv(source: Readonly<Record<string, string | undefined>>): E
     isCookieSecure: values.COOKIE_SECURE,
     trustsProxy: values.TRUST_PROXY,
     logLevel: values.LOG_LEVEL,
+    appUrl: (values.APP_URL ?? `http://localhost:${values.PORT}`).replace(/\/$/, ''),
+    mailKey: values.RESEND_API_KEY ?? null,
+    mailUrl: values.MAIL_URL ?? null,
+    mailFrom: values.MAIL_FROM,
   };
 }
 

@@ -18,11 +18,6 @@ export function longTimeText(ms: number): string {
   return `${utcParts(ms).year} day ${dayText(ms)}, ${time.endsWith(':00') ? time.slice(0, 5) : time} UT`;
 }
 
-/** "2027-02-13 (044) 18:30:00 UT": forms, files, tooltips. */
-export function fullTimeText(ms: number): string {
-  return `${new Date(ms).toISOString().slice(0, 10)} (${dayText(ms)}) ${clockText(ms)} UT`;
-}
-
 /** "4:49": minutes and seconds in a column whose head says min:s. */
 export function columnLengthText(seconds: number): string {
   const whole = Math.round(Math.abs(seconds));

@@ -1,3 +1,5 @@
+import { dayOfYear } from '../units/time';
+
 /**
  * Time of day as screens and sentences write it.
  *
@@ -41,4 +43,15 @@ export function listText(words: readonly string[]): string {
   const last = words.at(-1);
   if (last === undefined) return 'none';
   return words.length === 1 ? last : `${words.slice(0, -1).join(', ')} and ${last}`;
+}
+
+/**
+ * A time in full, as forms, files, mail and tooltips write it.
+ *
+ * @returns "2027-02-13 (044) 18:30:00 UT"
+ * @throws RangeError if ms is not a date (programmer error)
+ */
+export function fullTimeText(ms: number): string {
+  const day = String(dayOfYear(ms)).padStart(3, '0');
+  return `${new Date(ms).toISOString().slice(0, 10)} (${day}) ${clockText(ms)} UT`;
 }

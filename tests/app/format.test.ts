@@ -4,13 +4,13 @@ import {
   beginsText,
   columnLengthText,
   dayText,
-  fullTimeText,
   longTimeText,
   minuteText,
   numberText,
   signedText,
   spanText,
 } from '@/app/_ui/format';
+import { fullTimeText } from '@/src/schedule/words';
 
 const at = (text: string) => Date.parse(text);
 

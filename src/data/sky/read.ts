@@ -1,21 +1,82 @@
 import 'server-only';
 import { db } from '../../../db/client';
 import { can, type Viewer } from '../../access/policy';
+import { nowMs } from '../../env';
+import type { PlanMode, PlanSource } from '../../schedule/context';
 import { skyTable, type SkyTable } from '../../schedule/sky-table';
+import { gmstHours, moonSeparationDeg, sunSeparationDeg } from '../../sky/position';
+import type { Interval } from '../../units/time';
 import { answer, forbiddenFor, type Failure } from '../errors';
-import { readSources, readStations } from '../plan/context';
-import { fetchSession, subjectOf } from '../session/scope';
+import { readModes, readSources, readStations } from '../plan/context';
+import { derivedState } from '../session/dto';
+import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
+import type { SkySheet, SkySource } from './dto';
 
 /** Elevations, windows and common windows of a session's sources over its span. */
 export const readSky = (viewer: Viewer, key: string): Promise<{ ok: true; table: SkyTable } | Failure> =>
   answer(async () => {
-    const session = await fetchSession(db(), viewer, key);
-    if (!can(viewer, 'plan.read-draft', subjectOf(session))) throw forbiddenFor('plan.read-draft');
-    const { id, startMs, lengthSeconds, minElevationDeg, stations } = session;
-    const span = { start: new Date(startMs), end: new Date(startMs + lengthSeconds * 1000) };
-    const sources = await readSources(db(), id);
+    const session = await fetchReadable(viewer, key);
+    return { ok: true, table: (await skyOf(session)).table };
+  });
+
+/** All that the Sky page of a session shows. */
+export const readSkySheet = (viewer: Viewer, key: string): Promise<{ ok: true; sheet: SkySheet } | Failure> =>
+  answer(async () => {
+    const session = await fetchReadable(viewer, key);
+    const { stations, sources, span, table } = await skyOf(session);
+    const mode = (await readModes(db())).find(({ id }) => id === session.modeId);
+    const middle = new Date((span.start.getTime() + span.end.getTime()) / 2);
+    const { id, code, title, startMs, lengthSeconds, minElevationDeg } = session;
+    const now = nowMs();
     return {
       ok: true,
-      table: skyTable(await readStations(db(), stations), sources, { minElevationDeg }, span),
+      sheet: {
+        session: {
+          id,
+          code,
+          title,
+          state: derivedState(session, now),
+          startMs,
+          lengthSeconds,
+          stations: session.stations,
+        },
+        band: mode?.band ?? null,
+        minElevationDeg,
+        gmstStartHours: gmstHours(span.start),
+        stations: stations.map(({ code: station, name, site }) => ({ code: station, name, site })),
+        sources: sources.map((source) => skySource(source, mode, middle)),
+        table,
+        nowMs: now,
+      },
     };
   });
+
+async function fetchReadable(viewer: Viewer, key: string): Promise<SessionRow> {
+  const session = await fetchSession(db(), viewer, key);
+  if (!can(viewer, 'plan.read-draft', subjectOf(session))) throw forbiddenFor('plan.read-draft');
+  return session;
+}
+
+async function skyOf({ id, startMs, lengthSeconds, minElevationDeg, stations: codes }: SessionRow) {
+  const span: Interval = { start: new Date(startMs), end: new Date(startMs + lengthSeconds * 1000) };
+  const sources = await readSources(db(), id);
+  const stations = await readStations(db(), codes);
+  return { span, sources, stations, table: skyTable(stations, sources, { minElevationDeg }, span) };
+}
+
+function skySource(
+  { id, name, role, position, components }: PlanSource,
+  mode: PlanMode | undefined,
+  middle: Date,
+): SkySource {
+  const model = mode && components[mode.band];
+  return {
+    id,
+    name,
+    role,
+    position,
+    fluxJy: model ? model.reduce((sum, { fluxJy }) => sum + fluxJy, 0) : null,
+    sunDeg: sunSeparationDeg(position, middle),
+    moonDeg: moonSeparationDeg(position, middle),
+  };
+}

@@ -1,7 +1,8 @@
 import type { Route } from 'next';
 import Link from 'next/link';
 import { Chip } from '@/app/_ui/chip';
-import { dayText, fullTimeText, minuteText, spanText } from '@/app/_ui/format';
+import { dayText, minuteText, spanText } from '@/app/_ui/format';
+import { fullTimeText } from '@/src/schedule/words';
 import { StationCode } from '@/app/_ui/station-code';
 import type { SessionListItem } from '@/src/data/session/dto';
 import { utcParts } from '@/src/units/time';

@@ -1,0 +1,53 @@
+import 'server-only';
+import { z } from 'zod';
+import { can, type Viewer } from '../../access/policy';
+import { env } from '../../env';
+import { answer, forbiddenFor, notFound, type Failure } from '../errors';
+
+export type LocalMessage = {
+  id: string;
+  to: string[];
+  from: string;
+  subject: string;
+  text: string;
+  html: string;
+};
+
+export type Mailbox =
+  | { ok: true; isUp: true; messages: LocalMessage[] }
+  /** the fake does not answer */
+  | { ok: true; isUp: false };
+
+const outbox = z.object({
+  messages: z.array(
+    z.object({
+      id: z.string(),
+      to: z.array(z.string()),
+      from: z.string(),
+      subject: z.string(),
+      text: z.string(),
+      html: z.string(),
+    }),
+  ),
+});
+
+/** What the local fake of the mail service took, newest first; there is no such thing where mail is real. */
+export const readMailbox = (viewer: Viewer): Promise<Mailbox | Failure> =>
+  answer(async () => {
+    if (!can(viewer, 'mail.read')) throw forbiddenFor('mail.read');
+    const { isDemo, mailKey, mailUrl } = env();
+    if (!isDemo || mailKey !== null) throw notFound('There is no local mailbox: mail goes to its service.');
+    const text = mailUrl === null ? null : await fetchOutbox(mailUrl);
+    if (text === null) return { ok: true, isUp: false };
+    return { ok: true, isUp: true, messages: outbox.parse(JSON.parse(text)).messages };
+  });
+
+async function fetchOutbox(mailUrl: string): Promise<string | null> {
+  try {
+    const response = await fetch(`${mailUrl}/outbox`, { cache: 'no-store' });
+    return await response.text();
+  } catch (error) {
+    if (error instanceof TypeError) return null;
+    throw error;
+  }
+}

@@ -1,0 +1,48 @@
+import type { Answer, Hours } from '../../schedule/slots';
+import type { SessionHead } from '../session/dto';
+
+export type SlotDto = {
+  stationCode: string;
+  stationName: string;
+  timeZone: string;
+  startMs: number;
+  endMs: number;
+  answer: Answer;
+  /** the hours it gave */
+  hours: Hours[];
+  /** the hours of its slot that it cannot */
+  without: Hours[];
+  reason: string;
+  answeredAtMs: number | null;
+  role: string | null;
+  isOnBehalf: boolean;
+  /** its scans in the offer: start, stop, number, source */
+  scans: { startMs: number; stopMs: number; number: string; source: string }[];
+  /** whether the viewer may answer, and how */
+  canReply: boolean;
+  isOwn: boolean;
+};
+
+export type SlotBoard = {
+  session: SessionHead;
+  /** null before the first offer */
+  offer: {
+    id: string;
+    number: number;
+    kind: 'offer' | 'publish';
+    madeAtMs: number;
+    answerByMs: number | null;
+    note: string;
+    checksum: string;
+    /** whether the draft has moved on since */
+    isBehind: boolean;
+  } | null;
+  span: { startMs: number; endMs: number };
+  slots: SlotDto[];
+  /** stations of the session without a scan in the offer */
+  unasked: string[];
+  canOffer: boolean;
+  /** null where the viewer may not see the draft */
+  draft: { scans: number } | null;
+  nowMs: number;
+};

@@ -1,0 +1,92 @@
+import 'server-only';
+import { eq, max } from 'drizzle-orm';
+import { db, type Database } from '../../../db/client';
+import { journal } from '../../../db/schema/journal';
+import { scans } from '../../../db/schema/scans';
+import { can, type Viewer } from '../../access/policy';
+import { nowMs } from '../../env';
+import { unpackPlan } from '../../schedule/plan-rows';
+import { stationOnMs, type Plan } from '../../schedule/plan';
+import { scanNumbers } from '../../schedule/scan-numbers';
+import { answer, forbiddenFor, type Failure } from '../errors';
+import { newestSnapshot, type Snapshot } from '../offer/read';
+import { derivedState } from '../session/dto';
+import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
+import { answersOf, type StationAnswer } from './answers';
+import type { SlotBoard, SlotDto } from './dto';
+
+/** The slots of a session as they were offered last, with what each station said. */
+export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; board: SlotBoard } | Failure> =>
+  answer(async () => {
+    const session = await fetchSession(db(), viewer, key);
+    if (!can(viewer, 'slot.read', subjectOf(session))) throw forbiddenFor('slot.read');
+    const snapshot = await newestSnapshot(db(), session.id);
+    const answers = await answersOf(db(), [session.id]);
+    const now = nowMs();
+    const isOpen = session.state !== 'closed' && session.state !== 'cancelled';
+    const { id, code, title, startMs, lengthSeconds, stations } = session;
+    const plan = snapshot && unpackPlan(snapshot.plan);
+    return {
+      ok: true,
+      board: {
+        session: { id, code, title, state: derivedState(session, now), startMs, lengthSeconds, stations },
+        offer: snapshot && (await offerOf(db(), session, snapshot)),
+        span: { startMs, endMs: startMs + lengthSeconds * 1000 },
+        slots:
+          snapshot && plan ? answers.map((one) => slotOf(viewer, session, snapshot, plan, one, isOpen)) : [],
+        unasked: snapshot
+          ? stations.filter((station) => !answers.some((one) => one.station === station))
+          : [],
+        canOffer: isOpen && can(viewer, 'offer.write', subjectOf(session)),
+        draft: can(viewer, 'plan.read-draft', subjectOf(session))
+          ? { scans: await db().$count(scans, eq(scans.sessionId, id)) }
+          : null,
+        nowMs: now,
+      },
+    };
+  });
+
+async function offerOf(from: Database, session: SessionRow, snapshot: Snapshot): Promise<SlotBoard['offer']> {
+  const { offerId, number, kind, madeAtMs, answerByMs, note, checksum, seq } = snapshot;
+  const [newest] = await from
+    .select({ seq: max(journal.seq) })
+    .from(journal)
+    .where(eq(journal.sessionId, session.id));
+  const isBehind = (newest?.seq ?? 0) > seq;
+  return { id: offerId, number, kind, madeAtMs, answerByMs, note, checksum, isBehind };
+}
+
+function slotOf(
+  viewer: Viewer,
+  session: SessionRow,
+  snapshot: Snapshot,
+  plan: Plan,
+  one: StationAnswer,
+  isOpen: boolean,
+): SlotDto {
+  const station = snapshot.stations.find(({ code }) => code === one.station);
+  const subject = { sessionId: session.id, stationCodes: [one.station] };
+  const numbers = scanNumbers(plan);
+  return {
+    stationCode: one.station,
+    stationName: station?.name ?? one.station,
+    timeZone: station?.timeZone ?? 'UTC',
+    startMs: one.startMs,
+    endMs: one.endMs,
+    answer: one.answer,
+    hours: one.hours,
+    without: one.without,
+    reason: one.reason,
+    answeredAtMs: one.answeredAtMs,
+    role: one.role,
+    isOnBehalf: one.isOnBehalf,
+    scans: plan.scans.flatMap((scan) => {
+      const member = scan.stations.find(({ station: code }) => code === one.station);
+      if (!member) return [];
+      const source = snapshot.sources.find(({ id }) => id === scan.sourceId)?.name ?? '';
+      return [{ ...stationOnMs(scan, member), number: numbers.get(scan.id) ?? '', source }];
+    }),
+    canReply: isOpen && can(viewer, 'slot.reply', subject),
+    isOwn: viewer.grants.some(({ role, stationCode }) => role === 'operator' && stationCode === one.station),
+  };
+}
