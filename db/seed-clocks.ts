@@ -4,9 +4,9 @@ import type { Tx } from './client';
 import { clockEvents } from './schema/clock-events';
 import { clockReadings } from './schema/clock-readings';
 import { stations } from './schema/stations';
-import { ACCOUNTS } from './seed-data/accounts';
 import { CLOCK_CHANGE, CLOCK_DAYS, CLOCKS, HOURS_BETWEEN } from './seed-data/clocks';
-import { seedId, userId } from './seed-ids';
+import { seedId } from './seed-ids';
+import { operatorOf } from './seed-sessions';
 
 const HOUR_MS = 3_600_000;
 
@@ -86,13 +86,6 @@ function readingsOf(clock: (typeof CLOCKS)[number], nowMs: number, changeMs: num
     ]);
   }
   return rows;
-}
-
-/** Who keeps the clock log of a station. */
-function operatorOf(code: string): string {
-  const account = ACCOUNTS.find(({ role, stationCode }) => role === 'operator' && stationCode === code);
-  if (!account) throw new RangeError(`The demo has no operator of ${code}.`);
-  return userId(account.email);
 }
 
 const wholeSecond = (ms: number): number => Math.floor(ms / 1000) * 1000;

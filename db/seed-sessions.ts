@@ -8,11 +8,12 @@ import { sessionSources } from './schema/session-sources';
 import { sessionStations } from './schema/session-stations';
 import { sessions } from './schema/sessions';
 import { subjects } from './schema/subjects';
+import { ACCOUNTS } from './seed-data/accounts';
 import { BAND_22, BAND_8 } from './seed-data/modes';
 import { BASE_START, NODDING, SCANS, SESSIONS, SETTINGS } from './seed-data/session';
 import { SOURCES } from './seed-data/sources';
 import { STATIONS } from './seed-data/stations';
-import { seedId } from './seed-ids';
+import { seedId, userId } from './seed-ids';
 
 const HOUR_MS = 3_600_000;
 const LEAD_MS = 48 * HOUR_MS;
@@ -29,6 +30,15 @@ export const sessionStartMs = (session: (typeof SESSIONS)[number], draftStartMs:
 
 const startAfter = (days: number): number =>
   Date.parse(BASE_START) + Math.round((days * DAY_MS) / 10_000) * 10_000;
+
+export const SCHEDULER = 'scheduler@antiphon.example';
+
+/** Who speaks for a station. */
+export function operatorOf(code: string): string {
+  const account = ACCOUNTS.find(({ role, stationCode }) => role === 'operator' && stationCode === code);
+  if (!account) throw new RangeError(`The demo has no operator of ${code}.`);
+  return userId(account.email);
+}
 
 export const sourceId = (name: string) => seedId('source', name);
 export const modeId = (band: string) => seedId('mode', band);

@@ -26,6 +26,7 @@ import { BAND_22, BAND_8, MODES } from './seed-data/modes';
 import { SESSIONS } from './seed-data/session';
 import { SOURCES } from './seed-data/sources';
 import { SEFDS, STATIONS } from './seed-data/stations';
+import { fillAnswers } from './seed-answers';
 import { fillClocks, fillCounters } from './seed-clocks';
 import { seedId, userId } from './seed-ids';
 import { demoStartMs, fillSessions, modeId, sessionId, sessionStartMs, sourceId } from './seed-sessions';
@@ -62,6 +63,7 @@ export async function seedDemo(nowMs: number): Promise<'filled' | 'moved' | 'kep
 /** All that happened: what the clocks showed, what the stations said. */
 async function fillDated(tx: Tx, nowMs: number): Promise<void> {
   await fillClocks(tx, nowMs);
+  await fillAnswers(tx, nowMs);
 }
 
 function moveDates(nowMs: number): Promise<'moved' | 'kept'> {

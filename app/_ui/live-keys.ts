@@ -1,4 +1,5 @@
 /** Keys of what changes behind the viewer's back: each is the address it is read from. */
 export const liveKeys = {
+  stamp: (sessionId: string) => `/api/sessions/${sessionId}/stamp` as const,
   journal: (sessionId: string) => `/api/sessions/${sessionId}/journal` as const,
 };

@@ -34,6 +34,12 @@ export type OverlapValues = { otherScanId: ScanId; overlapSeconds: number };
 /** How long the scan lies before the session's start and after its end. */
 export type OutsideValues = { beforeSeconds: number; afterSeconds: number };
 
+/** Hours in which the station is not there, within the scan. */
+export type AwayValues = { why: string; fromMs: number; untilMs: number; isWhole: boolean };
+
+/** Age of the newest clock reading; null where there is none. */
+export type ClockValues = { ageHours: number | null };
+
 /** What is wrong, or near it; the sentence and its mends are made on demand. */
 export type Problem = Head &
   (
@@ -41,6 +47,8 @@ export type Problem = Head &
     | { kind: 'overlap'; values: OverlapValues }
     | { kind: 'slew'; values: SlewValues }
     | { kind: 'outside'; values: OutsideValues }
+    | { kind: 'away'; values: AwayValues }
+    | { kind: 'clock'; values: ClockValues }
   );
 
 /** So near above a limit is told. */
@@ -51,7 +59,8 @@ const NEAR_LIMIT_DEG = 5;
  *
  * @returns what must be fixed first, then by time, then by key
  *
- * Left out so far: clocks, the Sun, declined hours, data volume.
+ * A clock is told once for each station, at its first scan.
+ * Left out so far: the Sun, data volume.
  */
 export function checkPlan(plan: Plan, context: PlanContext): Problem[] {
   const problems: Problem[] = [];
@@ -60,7 +69,8 @@ export function checkPlan(plan: Plan, context: PlanContext): Problem[] {
     if (outside) problems.push(outside);
   }
   for (const legs of stationPaths(plan, context).values()) {
-    for (const leg of legs) problems.push(...legProblems(leg, context));
+    for (const leg of legs) problems.push(...legProblems(leg, context), ...awayProblem(leg, context));
+    problems.push(...clockProblem(legs[0], context));
   }
   return sortProblems(problems);
 }
@@ -135,6 +145,41 @@ function slewProblem(leg: PathLeg, { settings }: PlanContext): Problem | null {
     kind: 'slew',
     values: { fromScanId, slewSeconds, gapSeconds, spareSeconds, impossible },
   };
+}
+
+function awayProblem(leg: PathLeg, { away }: PlanContext): Problem[] {
+  const hit = (away[leg.station] ?? []).find(
+    ({ start, end }) => start.getTime() < leg.stopMs && end.getTime() > leg.startMs,
+  );
+  if (!hit) return [];
+  const [fromMs, untilMs] = [hit.start.getTime(), hit.end.getTime()];
+  const isWhole = fromMs <= leg.startMs && untilMs >= leg.stopMs;
+  return [
+    {
+      ...head('away', leg.scanId, leg.station, 'fix', Math.max(fromMs, leg.startMs)),
+      kind: 'away',
+      values: { why: hit.why, fromMs, untilMs, isWhole },
+    },
+  ];
+}
+
+function clockProblem(
+  first: PathLeg | undefined,
+  { clockReadAtMs, nowMs, settings }: PlanContext,
+): Problem[] {
+  const readAtMs = first && clockReadAtMs[first.station];
+  if (!first || readAtMs === undefined) return [];
+  const ageHours = readAtMs === null ? null : (Math.min(nowMs, first.startMs) - readAtMs) / 3_600_000;
+  if (ageHours !== null && ageHours <= settings.clockRules.noteAfterHours) return [];
+  const { station, scanId, startMs } = first;
+  return [
+    {
+      ...head('clock', scanId, station, 'note', startMs),
+      key: `clock:*:${station}`,
+      kind: 'clock',
+      values: { ageHours },
+    },
+  ];
 }
 
 function head(

@@ -66,8 +66,8 @@ export type PlanContext = {
   sources: Readonly<Record<string, PlanSource>>;
   modes: Readonly<Record<string, PlanMode>>;
   away: Readonly<Record<StationCode, readonly (Interval & { why: string })[]>>;
-  /** last reading of each station's clock; empty until a clock log exists */
-  clockReadAtMs: Readonly<Record<StationCode, number>>;
+  /** newest reading of each station's clock, null where it was never read; a station that is absent is not judged */
+  clockReadAtMs: Readonly<Record<StationCode, number | null>>;
   nowMs: number;
   settings: PlanSettings;
 };

@@ -70,5 +70,9 @@ function shortly(problem: Problem, scanId: ScanId, plan: Plan): string {
         return `${who} arrives ${lengthText(Math.ceil(-(spareSeconds ?? 0)))} late${goal}`;
       return `${who} has only ${Math.floor(spareSeconds ?? 0)} s spare${goal}`;
     }
+    case 'away':
+      return `${who} is away: ${problem.values.why}`;
+    case 'clock':
+      return `${who} has no recent clock reading`;
   }
 }

@@ -1,4 +1,4 @@
-import type { Problem } from './checks';
+import type { AwayValues, Problem } from './checks';
 import type { Command } from './commands';
 import type { PlanContext } from './context';
 import { moveScan } from './gestures/move-scan';
@@ -23,12 +23,13 @@ const ROUNDING_SHARE = 0.1;
  * note, because the edge of a window is near its limit.
  *
  * @param plan  the plan in which the problem was found
- * @returns at least one
+ * @returns at least one, but none for a clock: it is read at the station
  */
 export function problemMends(problem: Problem, plan: Plan, context: PlanContext): Mend[] {
   const scan = plan.scans.find(({ id }) => id === problem.scanId);
   if (!scan) return [];
   const numberOf = (id: string) => scanNumbers(plan).get(id) ?? id;
+  if (problem.kind === 'clock') return [];
   if (problem.kind === 'outside') return insideMends(scan, plan, numberOf(scan.id));
   const { station } = problem;
   const leg = station === null ? undefined : stationPaths(plan, context).get(station)?.find(isOf(scan));
@@ -47,6 +48,8 @@ export function problemMends(problem: Problem, plan: Plan, context: PlanContext)
     }
     case 'slew':
       return [...joinLater(scan, leg, plan, context), leaveOut];
+    case 'away':
+      return [...withoutAway(scan, leg, problem.values), leaveOut];
     case 'limit':
       return [...(problem.severity === 'fix' ? withinWindow(scan, leg, context) : []), leaveOut];
   }
@@ -99,6 +102,17 @@ function withinWindow(scan: Scan, leg: PathLeg, context: PlanContext): Mend[] {
   const longest = parts[0];
   const isAll = longest?.startMs === leg.startMs && longest.stopMs === leg.stopMs;
   return longest && !isAll ? [timesMend(scan, member, longest.startMs, longest.stopMs)] : [];
+}
+
+/** The station takes the longer part of the scan in which it is there. */
+function withoutAway(scan: Scan, leg: PathLeg, { fromMs, untilMs }: AwayValues): Mend[] {
+  const member = memberOf(scan, leg.station);
+  const parts = [
+    [leg.startMs, Math.floor(fromMs / TEN_SECONDS) * TEN_SECONDS],
+    [roundUp(untilMs, TEN_SECONDS), leg.stopMs],
+  ] as const;
+  const [startMs, stopMs] = parts[1][1] - parts[1][0] > parts[0][1] - parts[0][0] ? parts[1] : parts[0];
+  return member && stopMs > startMs ? [timesMend(scan, member, startMs, stopMs)] : [];
 }
 
 function timesMend(scan: Scan, member: ScanStation, startMs: number, stopMs: number): Mend {

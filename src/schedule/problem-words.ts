@@ -1,4 +1,4 @@
-import type { LimitValues, Problem, SlewValues } from './checks';
+import type { ClockValues, LimitValues, Problem, SlewValues } from './checks';
 import type { PlanContext } from './context';
 import type { Plan, ScanId } from './plan';
 import { scanNumbers } from './scan-numbers';
@@ -35,6 +35,17 @@ export function problemSentence(problem: Problem, plan: Plan, context: PlanConte
       const after = afterSeconds > 0 ? [`ends ${lengthText(afterSeconds)} after the session`] : [];
       return { who, what: `It ${[...before, ...after].join(' and ')}`, shortfall: null };
     }
+    case 'away': {
+      const { why, fromMs, untilMs, isWhole } = problem.values;
+      const hours = `from ${clockText(fromMs)} to ${clockText(untilMs)}`;
+      return {
+        who,
+        what: `The station is away ${hours}, ${why}`,
+        shortfall: isWhole ? 'all of it' : 'a part of it',
+      };
+    }
+    case 'clock':
+      return { who: `${problem.station ?? ''}.`, what: clockWords(problem.values), shortfall: null };
   }
 }
 
@@ -82,6 +93,12 @@ function slewWords(
     what: `${slew} and leaves ${spare} s spare, less than ${settings.leastSpareSeconds} s`,
     shortfall: null,
   };
+}
+
+function clockWords({ ageHours }: ClockValues): string {
+  if (ageHours === null) return 'Its clock was never read';
+  const age = ageHours < 48 ? `${Math.floor(ageHours)} h` : `${Math.floor(ageHours / 24)} days`;
+  return `The newest reading of its clock is ${age} old`;
 }
 
 function degrees(value: number): string {

@@ -262,6 +262,75 @@ describe('a scan outside the session', () => {
   });
 });
 
+describe('a station that is away', () => {
+  const awayFor = (from: number, until: number): PlanContext =>
+    makeContext({
+      away: {
+        Af: [{ start: new Date(T0 + from * 1000), end: new Date(T0 + until * 1000), why: 'declined: wind' }],
+      },
+    });
+  const plan = makePlan([makeScan('a', af)]);
+
+  it('for a part of a scan must be fixed, and is mended by the longer part that is left', () => {
+    const context = awayFor(-600, 120);
+    const problem = only(plan, 'away', context);
+    expect(problem).toMatchObject({ severity: 'fix', station: 'Af' });
+    expect(problemSentence(problem, plan, context)).toMatchObject({ shortfall: 'a part of it' });
+    const { label, left } = mended(plan, problem, context, 0);
+    expect(label).toBe('Af joins at 01:02:00, 2 min late');
+    expect(left).toBeUndefined();
+  });
+
+  it('for all of it can only be left out', () => {
+    const context = awayFor(-600, 1200);
+    const problem = only(plan, 'away', context);
+    expect(problemSentence(problem, plan, context)).toEqual({
+      who: 'Af, scan 1.',
+      what: 'The station is away from 00:50:00 to 01:20:00, declined: wind',
+      shortfall: 'all of it',
+    });
+    expect(problemMends(problem, plan, context).map(({ label }) => label)).toEqual(['Leave Af out']);
+  });
+
+  it('before or after it is no problem', () => {
+    expect(checkPlan(plan, awayFor(-600, 0)).filter(({ kind }) => kind === 'away')).toEqual([]);
+    expect(checkPlan(plan, awayFor(600, 900)).filter(({ kind }) => kind === 'away')).toEqual([]);
+  });
+});
+
+describe('a clock', () => {
+  const hour = 3_600_000;
+  const plan = makePlan([makeScan('a'), makeScan('b', { startMs: T0 + 2 * hour })]);
+  const readAgo = (hours: number | null) =>
+    makeContext({
+      nowMs: T0 - 10 * hour,
+      clockReadAtMs: { Bm: hours === null ? null : T0 - (10 + hours) * hour },
+    });
+
+  it('read more than the note age ago is told once, at the first scan, with nothing to mend', () => {
+    const context = readAgo(31);
+    const problem = only(plan, 'clock', context);
+    expect(problem).toMatchObject({ key: 'clock:*:Bm', severity: 'note', scanId: 'a' });
+    expect(problemSentence(problem, plan, context)).toEqual({
+      who: 'Bm.',
+      what: 'The newest reading of its clock is 31 h old',
+      shortfall: null,
+    });
+    expect(problemMends(problem, plan, context)).toEqual([]);
+  });
+
+  it('read days ago, or never, says so', () => {
+    const words = (context: PlanContext) => problemSentence(only(plan, 'clock', context), plan, context).what;
+    expect(words(readAgo(80))).toBe('The newest reading of its clock is 3 days old');
+    expect(words(readAgo(null))).toBe('Its clock was never read');
+  });
+
+  it('read within the note age, or not judged, is no problem', () => {
+    expect(checkPlan(plan, readAgo(24)).filter(({ kind }) => kind === 'clock')).toEqual([]);
+    expect(checkPlan(plan, makeContext()).filter(({ kind }) => kind === 'clock')).toEqual([]);
+  });
+});
+
 describe('the list of problems', () => {
   it('has what must be fixed first, then goes by time', () => {
     const plan = makePlan(

@@ -1,9 +1,14 @@
 import type { Command, Verb } from '../../schedule/commands';
 import type { PlanMode, PlanSettings, PlanSource, PlanStation } from '../../schedule/context';
-import type { NoddingGroup, PlanSpan, Scan, SubjectId } from '../../schedule/plan';
+import type { StationClock } from '../../outlook/clock-place';
+import type { NoddingGroup, PlanSpan, Scan, StationCode, SubjectId } from '../../schedule/plan';
 import type { PlanRows } from '../../schedule/plan-rows';
+import type { Answer } from '../../schedule/slots';
 import type { Failure } from '../errors';
 import type { SessionHead } from '../session/dto';
+
+/** Hours in which a station is not there, by its own word or by plan. */
+export type AwayDto = { startMs: number; endMs: number; why: string; isDeclined: boolean };
 
 export type Revs = Readonly<Record<SubjectId, number>>;
 
@@ -21,6 +26,10 @@ export type Timeline = {
   sources: TimelineSource[];
   modes: PlanMode[];
   settings: PlanSettings;
+  away: Readonly<Record<StationCode, readonly AwayDto[]>>;
+  clocks: Readonly<Record<StationCode, StationClock>>;
+  /** to the newest offer; a station without a slot is absent */
+  answers: Readonly<Record<StationCode, Answer>>;
   /** revision of every subject ever touched; an absent one is 0 */
   revs: Revs;
   /** newest journal row of the session that the plan holds */

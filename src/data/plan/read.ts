@@ -3,9 +3,12 @@ import { z } from 'zod';
 import { db } from '../../../db/client';
 import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
+import { clocksOf } from '../clock/read';
 import { answer, forbiddenFor, invalid, type Failure } from '../errors';
 import { derivedState } from '../session/dto';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
+import { answersOf } from '../slot/answers';
+import { awayOf } from './away';
 import { readModes, readSources, readStations } from './context';
 import type { JournalPage, Timeline } from './dto';
 import { readEntries, readSteps } from './journal';
@@ -25,6 +28,7 @@ export const readTimeline = (
     const { id, code, title, modeId, stations } = session;
     const { startMs, lengthSeconds } = plan;
     const now = nowMs();
+    const answers = await answersOf(db(), [id]);
     const timeline: Timeline = {
       session: {
         id,
@@ -41,6 +45,9 @@ export const readTimeline = (
       sources: await readSources(db(), id),
       modes: await readModes(db()),
       settings: settingsOf(session),
+      away: await awayOf(db(), { ...session, startMs, lengthSeconds }, answers),
+      clocks: await clocksOf(db(), stations, now),
+      answers: Object.fromEntries(answers.map(({ station, answer: word }) => [station, word])),
       revs,
       seq,
       steps: await readSteps(db(), { sessionId: id, userId: viewer.userId }),

@@ -1,16 +1,30 @@
 import type { Timeline } from '@/src/data/plan/dto';
-import type { PlanContext } from '@/src/schedule/context';
+import { clockJudge } from '@/src/outlook/clock-place';
+import type { OutlookContext } from '@/src/outlook/fringe-outlook';
 
 /** What the pure modules need to judge a plan, from what a page reads. */
-export function planContextOf(timeline: Timeline): PlanContext {
+export function planContextOf(timeline: Timeline): OutlookContext {
+  const { clocks, nowMs, settings } = timeline;
   return {
     stations: byKey(timeline.stations, 'code'),
     sources: byKey(timeline.sources, 'id'),
     modes: byKey(timeline.modes, 'id'),
-    away: {},
-    clockReadAtMs: {},
-    nowMs: timeline.nowMs,
-    settings: timeline.settings,
+    away: Object.fromEntries(
+      Object.entries(timeline.away).map(([code, hours]) => [
+        code,
+        hours.map(({ startMs, endMs, why, isDeclined }) => ({
+          start: new Date(startMs),
+          end: new Date(endMs),
+          why: isDeclined ? `declined: ${why}` : why,
+        })),
+      ]),
+    ),
+    clockReadAtMs: Object.fromEntries(
+      Object.entries(clocks).map(([code, { readAtMs }]) => [code, readAtMs] as const),
+    ),
+    nowMs,
+    settings,
+    judgeClock: clockJudge(clocks, nowMs, settings.clockRules),
   };
 }
 

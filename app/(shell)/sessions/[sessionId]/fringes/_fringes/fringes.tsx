@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
@@ -14,9 +14,9 @@ import { useChoice } from './use-choice';
 
 /** Which baselines will show fringes, scan by scan. */
 export function Fringes({ timeline }: { timeline: Timeline }) {
-  const [context] = useState(() => planContextOf(timeline));
-  const [plan] = useState(() => unpackPlan(timeline.plan));
-  const [stations] = useState(() => staveOrder(timeline.stations));
+  const context = useMemo(() => planContextOf(timeline), [timeline]);
+  const plan = useMemo(() => unpackPlan(timeline.plan), [timeline]);
+  const stations = useMemo(() => staveOrder(timeline.stations), [timeline]);
   const [all] = useState<Filter>(() => ({
     verdicts: new Set(VERDICTS.map(([verdict]) => verdict)),
     stations: new Set(stations.map(({ code }) => code)),

@@ -1,9 +1,8 @@
 import { createContext, useContext } from 'react';
 import { useStore } from 'zustand';
 import { createStore, type StoreApi } from 'zustand/vanilla';
-import { fringeOutlook, type OutlookCell } from '@/src/outlook/fringe-outlook';
+import { fringeOutlook, type OutlookCell, type OutlookContext } from '@/src/outlook/fringe-outlook';
 import { checkPlan, type Problem } from '@/src/schedule/checks';
-import type { PlanContext } from '@/src/schedule/context';
 import { stationPaths, type PathLeg } from '@/src/schedule/paths';
 import type { Plan, ScanId, StationCode } from '@/src/schedule/plan';
 import { scanNumbers } from '@/src/schedule/scan-numbers';
@@ -24,7 +23,7 @@ export type Derived = {
   lateKeys: ReadonlySet<string>;
 };
 
-export function derive(plan: Plan, context: PlanContext, known: ReadonlyMap<string, string>): Derived {
+export function derive(plan: Plan, context: OutlookContext, known: ReadonlyMap<string, string>): Derived {
   const problems = checkPlan(plan, context);
   const outlook = new Map<ScanId, OutlookCell[]>();
   for (const cell of fringeOutlook(plan, context)) {
@@ -62,9 +61,11 @@ export function createDerivedStore(timeline: TimelineStore): DerivedStore {
     outlook: new Map(),
     lateKeys: new Set(),
   }));
+  let worked: OutlookContext | null = null;
   const work = () => {
     const { plan, context } = timeline.getState();
-    if (store.getState().isReady && store.getState().plan === plan) return;
+    if (store.getState().isReady && store.getState().plan === plan && worked === context) return;
+    worked = context;
     store.setState(derive(plan, context, store.getState().letters));
   };
   const start = () => {

@@ -1,6 +1,7 @@
 'use client';
 
 import type { SkyTable } from '@/src/schedule/sky-table';
+import { Away } from './away';
 import { Axis } from './axis';
 import { useDerived } from './derived';
 import { FringeStrip, HatchPatterns } from './fringe-strip';
@@ -26,6 +27,8 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
   const fadedScanId = useTimeline((state) =>
     state.placing?.isCopy ? null : (state.placing?.scanId ?? null),
   );
+  const answers = useTimeline((state) => state.answers);
+  const away = useTimeline((state) => state.away);
   const derived = useStore(useDerivedStore());
   const { plan, numbers, legs, lateKeys, outlook } = derived;
   const chosen = plan.scans.find((scan) => scan.id === chosenId && inView(frame, scan));
@@ -41,7 +44,7 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
       <g clipPath="url(#bars-clip)">{chosen && <ChosenWash frame={frame} scan={chosen} />}</g>
       <TimeLines frame={frame} />
       {focusId !== null && <Ribbons frame={frame} table={table} sourceId={focusId} stations={stations} />}
-      <Staves frame={frame} stations={stations} />
+      <Staves frame={frame} stations={stations} answers={answers} />
       <Brackets frame={frame} plan={plan} stations={stations} fadedScanId={fadedScanId} />
       <g clipPath="url(#sheet-clip)">
         <Slews frame={frame} stations={stations} legs={legs} lateKeys={lateKeys} fadedScanId={fadedScanId} />
@@ -55,6 +58,7 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
           lateKeys={lateKeys}
           fadedScanId={fadedScanId}
         />
+        <Away frame={frame} stations={stations} away={away} />
       </g>
       <Headings
         frame={frame}
@@ -79,11 +83,12 @@ export function Sheet({ frame, table, loudKey }: { frame: Frame; table: SkyTable
 /** The sheet while elevations are on their way: ruled and labelled, without notes. */
 export function RuledSheet({ frame, children }: { frame: Frame; children?: React.ReactNode }) {
   const stations = useTimeline((state) => state.stations);
+  const answers = useTimeline((state) => state.answers);
   return (
     <div className="relative">
       <svg width={frame.width} height={frame.height} aria-hidden="true" className="block flex-none">
         <TimeLines frame={frame} />
-        <Staves frame={frame} stations={stations} />
+        <Staves frame={frame} stations={stations} answers={answers} />
         <Axis frame={frame} />
       </svg>
       {children}

@@ -1,5 +1,6 @@
 import type { Revs, Steps, Timeline } from '@/src/data/plan/dto';
-import type { PlanContext, PlanMode } from '@/src/schedule/context';
+import type { OutlookContext } from '@/src/outlook/fringe-outlook';
+import type { PlanMode } from '@/src/schedule/context';
 import type { Command } from '@/src/schedule/commands';
 import type { Plan, ScanId, ScanStation, StationCode, SubjectId } from '@/src/schedule/plan';
 import type { View } from './scale';
@@ -45,7 +46,9 @@ export type TimelineState = {
   session: Timeline['session'];
   stations: Timeline['stations'];
   sources: Timeline['sources'];
-  context: PlanContext;
+  context: OutlookContext;
+  answers: Timeline['answers'];
+  away: Timeline['away'];
   mode: PlanMode;
   canEdit: boolean;
 

@@ -1,4 +1,6 @@
+import type { Timeline } from '@/src/data/plan/dto';
 import type { PlanStation } from '@/src/schedule/context';
+import { AnswerMark } from './away';
 import { DAY, HEAD, crisp, staveTop, ticks, viewEndMs, xOf, yOf, type Frame } from './scale';
 
 /** Time lines over the sheet: thin, strong, midnight. */
@@ -24,7 +26,15 @@ export function TimeLines({ frame }: { frame: Frame }) {
 }
 
 /** Lines of 0°, 30°, 60°, 90° and the head of each stave. */
-export function Staves({ frame, stations }: { frame: Frame; stations: readonly PlanStation[] }) {
+export function Staves({
+  frame,
+  stations,
+  answers,
+}: {
+  frame: Frame;
+  stations: readonly PlanStation[];
+  answers: Timeline['answers'];
+}) {
   const tight = frame.staveHeight < 50;
   return (
     <g>
@@ -32,6 +42,7 @@ export function Staves({ frame, stations }: { frame: Frame; stations: readonly P
         const top = staveTop(frame, index);
         const base = top + frame.staveHeight;
         const longitude = station.site.longitudeDeg;
+        const answer = answers[station.code];
         return (
           <g key={station.code}>
             {[90, 60, 30].map((elevation) => (
@@ -48,6 +59,7 @@ export function Staves({ frame, stations }: { frame: Frame; stations: readonly P
             ))}
             <line x1={HEAD - 6} x2={frame.right} y1={crisp(base)} y2={crisp(base)} stroke="var(--ink)" />
             <line x1={HEAD - 0.5} x2={HEAD - 0.5} y1={top} y2={base} stroke="var(--ink)" />
+            {answer && <AnswerMark answer={answer} top={top} isTight={tight} />}
             <text className="s" x={10} y={top + 15} fontSize={tight ? 16 : 19} fontWeight={600}>
               {station.code}
             </text>

@@ -19,7 +19,7 @@ export function createTimelineStore(timeline: Timeline, chosenScanId: string | n
     session: timeline.session,
     stations: staveOrder(timeline.stations),
     sources: timeline.sources,
-    context: planContextOf(timeline),
+    ...stationsWord(timeline),
     mode,
     canEdit: timeline.canEdit,
     confirmed: plan,
@@ -39,6 +39,13 @@ export function createTimelineStore(timeline: Timeline, chosenScanId: string | n
     placing: null,
   }));
 }
+
+/** What the stations say and their clocks show: it changes without the journal. */
+export const stationsWord = (timeline: Timeline) => ({
+  context: planContextOf(timeline),
+  answers: timeline.answers,
+  away: timeline.away,
+});
 
 const StoreContext = createContext<TimelineStore | null>(null);
 export const TimelineProvider = StoreContext.Provider;

@@ -9,7 +9,7 @@ import { DragProvider } from './drag-provider';
 import { KeyPlacingProvider } from './key-placing';
 import { Middle } from './middle';
 import { createSender, type Sender } from './sender';
-import { createTimelineStore, TimelineProvider, useTimeline, useTimelineStore } from './store';
+import { createTimelineStore, stationsWord, TimelineProvider, useTimeline, useTimelineStore } from './store';
 import { ToolBar } from './tool-bar';
 import { Tray } from './tray';
 import { useSky } from './use-sky';
@@ -25,6 +25,7 @@ export function Timeline({ timeline, chosenScanId }: Props) {
     undo: () => sender.step('undo'),
     redo: () => sender.step('redo'),
   }));
+  useEffect(() => store.setState(stationsWord(timeline)), [store, timeline]);
   useEffect(() => {
     void sender.catchUp();
     const onReturn = () => {
@@ -64,6 +65,7 @@ export function Timeline({ timeline, chosenScanId }: Props) {
 }
 
 const Live = lazy(() => import('./live'));
+const RefreshOn = lazy(() => import('../../_plan/refresh-on'));
 
 const LIVE_AFTER_MS = 2000;
 
@@ -79,6 +81,7 @@ function LiveWhenReady({ sender }: { sender: Sender }) {
   return (
     <Suspense>
       <Live sessionId={sessionId} sender={sender} />
+      <RefreshOn sessionId={sessionId} withPlan={false} />
     </Suspense>
   );
 }
