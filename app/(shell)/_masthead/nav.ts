@@ -14,6 +14,7 @@ type Page = { label: string; verb: Verb } & (
 const PAGES: readonly Page[] = [
   { kind: 'network', label: 'Sessions', verb: 'session.list', path: '/sessions' },
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
+  { kind: 'session', label: 'Sky', verb: 'plan.read-draft', segment: 'sky' },
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },
 ];
 

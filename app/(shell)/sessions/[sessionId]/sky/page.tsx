@@ -1,0 +1,26 @@
+import type { Metadata } from 'next';
+import { forbidden, notFound } from 'next/navigation';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { readSkySheet } from '@/src/data/sky/read';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { SessionFrame } from '../_head/session-frame';
+import { Sky } from './_sky/sky';
+
+export const metadata: Metadata = { title: 'Sky' };
+
+export default async function SkyPage({ params }: { params: Promise<{ sessionId: string }> }) {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const { sessionId } = await params;
+  const answer = await readSkySheet(viewer, sessionId);
+  if (!answer.ok) {
+    if (answer.code === 'forbidden') forbidden();
+    notFound();
+  }
+  const { sheet } = answer;
+  return (
+    <SessionFrame viewer={viewer} session={sheet.session} nowMs={sheet.nowMs}>
+      <Sky sheet={sheet} />
+    </SessionFrame>
+  );
+}
