@@ -67,7 +67,7 @@ export const CLOCKS: readonly {
     rate: -3.1e-12,
     newestHours: 4,
     scatterSeconds: 18e-9,
-    instrument: [-0.44e-6, 6e-8],
+    instrument: [-0.44e-6, 2e-7],
     counter: ['gps', 'formatter'],
     cables: [15e-9, 96e-9],
     wrong: [

@@ -44,6 +44,7 @@ export const SETTINGS = {
   snrDoubtful: 7,
   snrFair: 10,
   snrStrong: 20,
+  instrumentSigmaSeconds: 3e-7,
 } as const;
 
 /** The nodding group that stands in the place of this scan. */

@@ -20,6 +20,8 @@ export type ClockRules = PlanSettings['clockRules'];
 /** Where a baseline's fringe falls in the correlator's search window, second minus first. */
 export type PlaceInWindow = {
   place: ClockPlace;
+  /** effective clock of second minus that of first */
+  expectedSeconds: number | null;
   /** effective minus modelled clock of second, less the same of first */
   meanSeconds: number | null;
   sigmaSeconds: number | null;
@@ -67,7 +69,13 @@ export function placeInWindow(
   const widened = ends.flatMap((end) => (end.isWidened ? [end.code] : []));
   const [from, to] = ends;
   if (missing.length > 0 || !from || !to) {
-    const unknown = { place: 'unknown', meanSeconds: null, sigmaSeconds: null, meanRate: null } as const;
+    const unknown = {
+      place: 'unknown',
+      expectedSeconds: null,
+      meanSeconds: null,
+      sigmaSeconds: null,
+      meanRate: null,
+    } as const;
     return { ...unknown, windowSeconds, windowRate, amplitude: 1, missing: missing.join(', '), widened };
   }
   const meanSeconds = to.seconds - from.seconds;
@@ -76,6 +84,7 @@ export function placeInWindow(
   const shares = [Math.abs(meanSeconds) / windowSeconds, Math.abs(meanRate) / windowRate] as const;
   return {
     place: placeOf(shares, (Math.abs(meanSeconds) + 3 * sigmaSeconds) / windowSeconds),
+    expectedSeconds: to.effectiveSeconds - from.effectiveSeconds,
     meanSeconds,
     sigmaSeconds,
     meanRate,
@@ -101,6 +110,7 @@ export function readingAgeMs(readAtMs: number | null, at: { atMs: number; nowMs:
 
 type End = {
   code: StationCode;
+  effectiveSeconds: number;
   seconds: number;
   rate: number;
   sigmaSeconds: number;
@@ -114,7 +124,7 @@ function endOf(
   rules: ClockRules,
   modelled: ModelledClock,
 ): End {
-  const nothing = { code, seconds: 0, rate: 0, sigmaSeconds: 0, isWidened: false };
+  const nothing = { code, effectiveSeconds: 0, seconds: 0, rate: 0, sigmaSeconds: 0, isWidened: false };
   const ageMs = readingAgeMs(clock?.readAtMs ?? null, at);
   if (!clock?.fit || clock.fit.segments.length === 0 || ageMs === null)
     return { ...nothing, missing: `no clock reading of ${code}` };
@@ -125,9 +135,11 @@ function endOf(
   const predicted = predictClock(clock.fit, new Date(at.atMs));
   const model = modelled(code, at.atMs);
   const instrument = clock.instrument ?? { seconds: 0, sigmaSeconds: rules.instrumentSigmaSeconds };
+  const effectiveSeconds = predicted.offsetSeconds + instrument.seconds;
   return {
     code,
-    seconds: model === null ? 0 : predicted.offsetSeconds + instrument.seconds - model.seconds,
+    effectiveSeconds,
+    seconds: model === null ? 0 : effectiveSeconds - model.seconds,
     rate: model === null ? 0 : predicted.rate - model.rate,
     sigmaSeconds: Math.hypot(predicted.sigmaSeconds, instrument.sigmaSeconds),
     isWidened: clock.instrument === null,

@@ -24,6 +24,7 @@ export function verdictWords(
   const figure = snr === null ? '' : `: SNR ${snrText(snr)}`;
   const shown = snr === null ? 0 : Number(snrText(snr));
   const limit = limits.doubtful.toFixed(1);
+  if (cell.reason === 'clock') return CLOCK[verdict === 'none' ? 'none' : 'doubtful'];
   if (verdict === 'none') {
     const detail =
       snr === null ? '' : `Short of the limit of ${limit} by ${(limits.doubtful - shown).toFixed(1)}.`;
@@ -36,6 +37,11 @@ export function verdictWords(
     detail: `Over the limit of ${limit}, short of fair (${limits.fair}) by ${short}.`,
   };
 }
+
+const CLOCK = {
+  none: { head: 'None expected: the clock', detail: 'The fringe falls outside the search window.' },
+  doubtful: { head: 'Doubtful: the clock', detail: 'The fringe may fall outside the search window.' },
+} as const;
 
 const NOT_ON: Readonly<Record<string, string>> = {
   low: 'The source is not above the limits of both all the time they share.',
@@ -52,9 +58,18 @@ const NOT_ON: Readonly<Record<string, string>> = {
  */
 export function whySentences(cell: OutlookCell, scan: Scan, context: PlanContext): string[] {
   if (cell.verdict === 'not-on') return notOnSentences(cell, scan, context);
+  if (cell.reason === 'clock') return clockSentences(cell);
   if (cell.verdict === 'unknown') return [`The ${cell.missing ?? 'input'} is not entered in the catalogue.`];
   const sentences = [...sourceSentence(cell, scan, context), ...bitsSentence(cell, scan, context)];
   return [...sentences, ...timeSentence(cell, scan, context)].slice(0, 2);
+}
+
+function clockSentences({ verdict, missing, snr }: OutlookCell): string[] {
+  if (verdict === 'unknown') return [`There is ${missing ?? 'no clock reading'}.`];
+  const signal = snr === null ? [] : [`The signal itself would do: SNR ${snrText(snr)}.`];
+  return verdict === 'none'
+    ? ['The clocks put it beyond the window that the correlator searches.', ...signal]
+    : ['The two clocks are not known well enough for the window that the correlator searches.', ...signal];
 }
 
 function sourceSentence(cell: OutlookCell, scan: Scan, context: PlanContext): string[] {

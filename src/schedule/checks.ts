@@ -34,8 +34,13 @@ export type OverlapValues = { otherScanId: ScanId; overlapSeconds: number };
 /** How long the scan lies before the session's start and after its end. */
 export type OutsideValues = { beforeSeconds: number; afterSeconds: number };
 
-/** Hours in which the station is not there, within the scan. */
-export type AwayValues = { why: string; fromMs: number; untilMs: number; isWhole: boolean };
+/** Hours in which the station is not there, and its scans that lie in them, whole or in part, by start. */
+export type AwayValues = {
+  why: string;
+  fromMs: number;
+  untilMs: number;
+  hits: readonly { scanId: ScanId; isWhole: boolean }[];
+};
 
 /** Age of the newest clock reading; null where there is none. */
 export type ClockValues = { ageHours: number | null };
@@ -59,7 +64,7 @@ const NEAR_LIMIT_DEG = 5;
  *
  * @returns what must be fixed first, then by time, then by key
  *
- * A clock is told once for each station, at its first scan.
+ * Hours away are told once for each stretch, a clock once for each station, at the first scan.
  * Left out so far: the Sun, data volume.
  */
 export function checkPlan(plan: Plan, context: PlanContext): Problem[] {
@@ -69,8 +74,8 @@ export function checkPlan(plan: Plan, context: PlanContext): Problem[] {
     if (outside) problems.push(outside);
   }
   for (const legs of stationPaths(plan, context).values()) {
-    for (const leg of legs) problems.push(...legProblems(leg, context), ...awayProblem(leg, context));
-    problems.push(...clockProblem(legs[0], context));
+    for (const leg of legs) problems.push(...legProblems(leg, context));
+    problems.push(...awayProblems(legs, context), ...clockProblem(legs[0], context));
   }
   return sortProblems(problems);
 }
@@ -147,20 +152,27 @@ function slewProblem(leg: PathLeg, { settings }: PlanContext): Problem | null {
   };
 }
 
-function awayProblem(leg: PathLeg, { away }: PlanContext): Problem[] {
-  const hit = (away[leg.station] ?? []).find(
-    ({ start, end }) => start.getTime() < leg.stopMs && end.getTime() > leg.startMs,
-  );
-  if (!hit) return [];
-  const [fromMs, untilMs] = [hit.start.getTime(), hit.end.getTime()];
-  const isWhole = fromMs <= leg.startMs && untilMs >= leg.stopMs;
-  return [
-    {
-      ...head('away', leg.scanId, leg.station, 'fix', Math.max(fromMs, leg.startMs)),
-      kind: 'away',
-      values: { why: hit.why, fromMs, untilMs, isWhole },
-    },
-  ];
+/** One for each stretch of hours that a station is away and has scans in. */
+function awayProblems(legs: readonly PathLeg[], { away }: PlanContext): Problem[] {
+  const station = legs[0]?.station;
+  if (station === undefined) return [];
+  return (away[station] ?? []).flatMap(({ start, end, why }) => {
+    const [fromMs, untilMs] = [start.getTime(), end.getTime()];
+    const inside = legs.filter(({ startMs, stopMs }) => fromMs < stopMs && untilMs > startMs);
+    const [first] = inside;
+    if (!first) return [];
+    const hits = inside.map(({ scanId, startMs, stopMs }) => ({
+      scanId,
+      isWhole: fromMs <= startMs && untilMs >= stopMs,
+    }));
+    return [
+      {
+        ...head('away', first.scanId, station, 'fix', Math.max(fromMs, first.startMs)),
+        kind: 'away' as const,
+        values: { why, fromMs, untilMs, hits },
+      },
+    ];
+  });
 }
 
 function clockProblem(

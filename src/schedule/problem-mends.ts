@@ -49,7 +49,9 @@ export function problemMends(problem: Problem, plan: Plan, context: PlanContext)
     case 'slew':
       return [...joinLater(scan, leg, plan, context), leaveOut];
     case 'away':
-      return [...withoutAway(scan, leg, problem.values), leaveOut];
+      return problem.values.hits.length > 1
+        ? [leaveOutOfAll(station, problem.values, plan)]
+        : [...withoutAway(scan, leg, problem.values), leaveOut];
     case 'limit':
       return [...(problem.severity === 'fix' ? withinWindow(scan, leg, context) : []), leaveOut];
   }
@@ -113,6 +115,15 @@ function withoutAway(scan: Scan, leg: PathLeg, { fromMs, untilMs }: AwayValues):
   ] as const;
   const [startMs, stopMs] = parts[1][1] - parts[1][0] > parts[0][1] - parts[0][0] ? parts[1] : parts[0];
   return member && stopMs > startMs ? [timesMend(scan, member, startMs, stopMs)] : [];
+}
+
+/** The station is left out of every scan that lies in its hours away, whole or in part. */
+function leaveOutOfAll(station: StationCode, { hits }: AwayValues, plan: Plan): Mend {
+  const edits = hits.flatMap(({ scanId }) => toggleStation(plan, scanId, station).edits);
+  return {
+    label: `Leave ${station} out of ${hits.length} scans`,
+    command: { verb: 'take-station-out', edits },
+  };
 }
 
 function timesMend(scan: Scan, member: ScanStation, startMs: number, stopMs: number): Mend {

@@ -36,13 +36,12 @@ export function problemSentence(problem: Problem, plan: Plan, context: PlanConte
       return { who, what: `It ${[...before, ...after].join(' and ')}`, shortfall: null };
     }
     case 'away': {
-      const { why, fromMs, untilMs, isWhole } = problem.values;
+      const { why, fromMs, untilMs, hits } = problem.values;
       const hours = `from ${clockText(fromMs)} to ${clockText(untilMs)}`;
-      return {
-        who,
-        what: `The station is away ${hours}, ${why}`,
-        shortfall: isWhole ? 'all of it' : 'a part of it',
-      };
+      const [only] = hits;
+      const hit = hits.length > 1 ? `${hits.length} scans` : only?.isWhole ? 'all of it' : 'a part of it';
+      const from = hits.length > 1 ? `${problem.station ?? ''}, from ${scan}.` : who;
+      return { who: from, what: `The station is away ${hours}, ${why}`, shortfall: hit };
     }
     case 'clock':
       return { who: `${problem.station ?? ''}.`, what: clockWords(problem.values), shortfall: null };

@@ -3,6 +3,7 @@ import type { OutlookCell } from '@/src/outlook/fringe-outlook';
 import { verdictWords, whySentences } from '@/src/outlook/why';
 import type { Scan } from '@/src/schedule/plan';
 import { makeContext, MODE, withStation } from '../schedule/context-maker';
+import { cellOf, planOf, withSource } from './hand';
 
 const limits = { doubtful: 7, fair: 10, strong: 20 };
 
@@ -85,5 +86,23 @@ describe('why a baseline has its verdict', () => {
     expect(whySentences({ ...low, first: 'Af' }, half, makeContext())).toEqual([
       'The source is below the limits of Af and Bm during the scan.',
     ]);
+  });
+
+  it.each([
+    ['doubtful', 'edge', 'Doubtful: the clock', 'not known well enough'],
+    ['none', 'outside', 'None expected: the clock', 'beyond the window'],
+    ['unknown', 'unknown', 'No data', 'There is no clock reading of Bm.'],
+  ] as const)('names the clock where it limits: %s', (verdict, place, head, words) => {
+    const context = {
+      ...withSource({ fluxJy: 5 }),
+      judgeClock: () => ({ place, amplitude: 1, missing: 'no clock reading of Bm' }),
+    };
+    const plan = planOf();
+    const cell = cellOf(plan, 'Af–Bm', context);
+    expect(cell.verdict).toBe(verdict);
+    expect(verdictWords(cell, context.settings.snrLimits).head).toBe(head);
+    const [scan] = plan.scans;
+    if (!scan) throw new Error('no scan');
+    expect(whySentences(cell, scan, context).join(' ')).toContain(words);
   });
 });

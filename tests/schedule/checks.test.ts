@@ -292,6 +292,19 @@ describe('a station that is away', () => {
     expect(problemMends(problem, plan, context).map(({ label }) => label)).toEqual(['Leave Af out']);
   });
 
+  it('for several scans is one problem, and is mended in one step', () => {
+    const two = makePlan([makeScan('a', af), makeScan('b', { ...af, startMs: T0 + 900_000 })]);
+    const context = awayFor(300, 1200);
+    const problem = only(two, 'away', context);
+    expect(problemSentence(problem, two, context)).toMatchObject({
+      who: 'Af, from scan 1.',
+      shortfall: '2 scans',
+    });
+    const { label, plan: after } = mended(two, problem, context, 0);
+    expect(label).toBe('Leave Af out of 2 scans');
+    expect(after.scans.map(({ stations }) => stations)).toEqual([[], []]);
+  });
+
   it('before or after it is no problem', () => {
     expect(checkPlan(plan, awayFor(-600, 0)).filter(({ kind }) => kind === 'away')).toEqual([]);
     expect(checkPlan(plan, awayFor(600, 900)).filter(({ kind }) => kind === 'away')).toEqual([]);

@@ -2,8 +2,11 @@ import type { Timeline } from '@/src/data/plan/dto';
 import { clockJudge } from '@/src/outlook/clock-place';
 import type { OutlookContext } from '@/src/outlook/fringe-outlook';
 
+/** With the clocks' judge as it is: its numbers too. */
+export type PageContext = Omit<OutlookContext, 'judgeClock'> & { judgeClock: ReturnType<typeof clockJudge> };
+
 /** What the pure modules need to judge a plan, from what a page reads. */
-export function planContextOf(timeline: Timeline): OutlookContext {
+export function planContextOf(timeline: Timeline): PageContext {
   const { clocks, nowMs, settings } = timeline;
   return {
     stations: byKey(timeline.stations, 'code'),

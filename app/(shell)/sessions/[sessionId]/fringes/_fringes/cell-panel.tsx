@@ -6,7 +6,8 @@ import { FringeMark } from '@/app/_ui/fringe-mark';
 import { dayText, numberText } from '@/app/_ui/format';
 import { isExpected, snrText, type OutlookCell } from '@/src/outlook/fringe-outlook';
 import { verdictWords, whySentences } from '@/src/outlook/why';
-import type { PlanContext } from '@/src/schedule/context';
+import type { PageContext } from '../../_plan/plan-context';
+import { ClockPlace } from './clock-place';
 import { scanStopMs, type PlanSpan } from '@/src/schedule/plan';
 import { clockText, lengthText } from '@/src/schedule/words';
 import { ElevationChart } from './elevation-chart';
@@ -15,7 +16,7 @@ import { keyOf, type Row } from './model';
 type Props = {
   cell: OutlookCell | null;
   row: Row | null;
-  context: PlanContext;
+  context: PageContext;
   span: PlanSpan;
   sessionCode: string;
   onNext: () => void;
@@ -63,7 +64,7 @@ function Chosen({
 }: {
   cell: OutlookCell;
   row: Row;
-  context: PlanContext;
+  context: PageContext;
   span: PlanSpan;
 }) {
   const { scan, number } = row;
@@ -120,12 +121,7 @@ function Chosen({
           </div>
         </section>
       )}
-      <section>
-        <h2 className="mb-0.5 font-ui text-body font-strong">Clock</h2>
-        <p className="help">
-          {cell.first} and {cell.second} have no clock readings here, so the clock is not judged.
-        </p>
-      </section>
+      {cell.verdict !== 'not-on' && <ClockPlace cell={cell} scan={scan} context={context} />}
     </>
   );
 }
@@ -137,7 +133,7 @@ function tone(cell: OutlookCell): string {
   return 'border-edge bg-sheet';
 }
 
-function SignalChain({ cell, row, context }: { cell: OutlookCell; row: Row; context: PlanContext }) {
+function SignalChain({ cell, row, context }: { cell: OutlookCell; row: Row; context: PageContext }) {
   const mode = context.modes[row.scan.modeId];
   const components = mode && context.sources[row.scan.sourceId]?.components[mode.band];
   if (!mode || cell.verdict === 'not-on') return null;

@@ -5,6 +5,7 @@ import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
 import { planContextOf } from '../../_plan/plan-context';
+import RefreshOn from '../../_plan/refresh-on';
 import { CellPanel } from './cell-panel';
 import { ExportButton } from './export-button';
 import { FilterPanel } from './filter-panel';
@@ -39,6 +40,7 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
 
   return (
     <>
+      <RefreshOn sessionId={timeline.session.id} withPlan />
       <div className="min-h-bar flex flex-wrap items-center gap-x-3.5 border-b border-rule text-table">
         <div className="flex h-bar w-tray items-center justify-between px-3.5">
           <h2 className="text-lead">Filter</h2>

@@ -253,6 +253,8 @@ function CellContent({ cell, isOnWash }: { cell: OutlookCell; isOnWash: boolean 
         <span className="text-[10px] text-ink2" style={{ fontStretch: '70%' }}>
           no data
         </span>
+      ) : cell.reason === 'clock' ? (
+        <b style={{ fontStretch: '82%' }}>clk</b>
       ) : (
         <span style={{ fontStretch: (cell.snr ?? 0) >= 1000 ? '66%' : '82%' }}>
           {cell.snr === null ? '' : snrText(cell.snr)}
@@ -279,7 +281,8 @@ function FootCell({ rows, pairKey, isChosen }: { rows: readonly Row[]; pairKey: 
 function spoken(cell: OutlookCell): string {
   if (cell.verdict === 'not-on') return `not on source, ${notOnWord(cell)}`;
   if (cell.verdict === 'unknown') return `no data, ${cell.missing ?? ''}`;
-  return `${cell.verdict}${cell.snr === null ? '' : `, SNR ${snrText(cell.snr)}`}`;
+  const snr = cell.snr === null ? '' : `, SNR ${snrText(cell.snr)}`;
+  return `${cell.verdict}${cell.reason === 'clock' ? ', the clock limits' : ''}${snr}`;
 }
 
 const cellId = (scanId: string, pairKey: string) => `cell-${scanId}-${pairKey}`;

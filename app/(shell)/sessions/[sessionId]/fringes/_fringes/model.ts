@@ -1,6 +1,11 @@
 import { baselineLengthM, baselinesOf } from '@/src/array/baseline';
-import { fringeOutlook, isExpected, type OutlookCell, type Verdict } from '@/src/outlook/fringe-outlook';
-import type { PlanContext } from '@/src/schedule/context';
+import {
+  fringeOutlook,
+  isExpected,
+  type OutlookCell,
+  type OutlookContext,
+  type Verdict,
+} from '@/src/outlook/fringe-outlook';
 import type { Plan, Scan, ScanId, StationCode } from '@/src/schedule/plan';
 import { scanNumbers } from '@/src/schedule/scan-numbers';
 import { geodeticToItrf } from '@/src/sky/site';
@@ -32,7 +37,7 @@ export type Filter = {
 };
 
 /** Every scan and baseline of the plan, judged. */
-export function outlookOf(plan: Plan, context: PlanContext): Outlook {
+export function outlookOf(plan: Plan, context: OutlookContext): Outlook {
   const numbers = scanNumbers(plan);
   const cells = new Map<ScanId, OutlookCell[]>();
   const counts: Record<Verdict, number> = {
