@@ -13,6 +13,7 @@ type Page = { label: string; verb: Verb } & (
 /** In the order of the masthead: a page that exists is one line here. */
 const PAGES: readonly Page[] = [
   { kind: 'network', label: 'Sessions', verb: 'session.list', path: '/sessions' },
+  { kind: 'network', label: 'Stations', verb: 'catalogue.read', path: '/stations' as Route },
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
   { kind: 'session', label: 'Sky', verb: 'plan.read-draft', segment: 'sky' },
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },

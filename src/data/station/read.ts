@@ -1,9 +1,19 @@
 import 'server-only';
-import { asc, inArray } from 'drizzle-orm';
+import { and, asc, eq, gt, inArray, ne } from 'drizzle-orm';
 import { db } from '../../../db/client';
+import { sessionStations } from '../../../db/schema/session-stations';
+import { sessions } from '../../../db/schema/sessions';
+import { stationBands } from '../../../db/schema/station-bands';
+import { stationUnavailability } from '../../../db/schema/station-unavailability';
 import { stations } from '../../../db/schema/stations';
 import { can, type Viewer } from '../../access/policy';
+import { nowMs } from '../../env';
+import { OWN_BLOCKS, STATION_BLOCKS, type StationBlockName } from '../../exchange/catalogue/station';
+import { geodeticToItrf } from '../../sky/site';
 import { answer, forbiddenFor, type Failure } from '../errors';
+import { readableBy } from '../session/scope';
+import type { StationDto, StationRow } from './dto';
+import { blocksOf, fetchStation } from './rows';
 
 export type StationListItem = { code: string; name: string; site: { longitudeDeg: number } };
 
@@ -24,3 +34,89 @@ export const listStations = (
       stations: rows.map(({ code, name, longitudeDeg }) => ({ code, name, site: { longitudeDeg } })),
     };
   });
+
+/** The whole catalogue, the retired ones too. */
+export const listStationRows = (
+  viewer: Viewer,
+): Promise<{ ok: true; stations: StationRow[]; canAdd: boolean } | Failure> =>
+  answer(async () => {
+    if (!can(viewer, 'catalogue.read')) throw forbiddenFor('catalogue.read');
+    const now = nowMs();
+    const rows = await db().select().from(stations).orderBy(asc(stations.code));
+    const bands = await db().select().from(stationBands);
+    const away = await db()
+      .select()
+      .from(stationUnavailability)
+      .where(gt(stationUnavailability.endMs, now))
+      .orderBy(asc(stationUnavailability.startMs));
+    const ahead = await sessionsAhead(viewer, now);
+    return {
+      ok: true,
+      canAdd: can(viewer, 'station.write'),
+      stations: rows.map((row) => {
+        const next = away.find(({ stationCode }) => stationCode === row.code);
+        return {
+          code: row.code,
+          name: row.name,
+          timeZone: row.timeZone,
+          mountKind: row.mountKind,
+          site: { latitudeDeg: row.latitudeDeg, longitudeDeg: row.longitudeDeg, heightM: row.heightM },
+          dishM: row.dishM,
+          sefdJy: Object.fromEntries(
+            bands.filter((band) => band.stationCode === row.code).map((band) => [band.band, band.sefdJy]),
+          ),
+          recorderFreeBytes: row.recorderFreeBytes,
+          nextAway: next ? { startMs: next.startMs, endMs: next.endMs, why: next.why } : null,
+          sessionsAhead: ahead.filter(({ stationCode }) => stationCode === row.code).length,
+          retiredAtMs: row.retiredAtMs,
+        };
+      }),
+    };
+  });
+
+/** One station with all its blocks, and which of them the viewer may change. */
+export const readStation = (
+  viewer: Viewer,
+  code: string,
+): Promise<{ ok: true; station: StationDto } | Failure> =>
+  answer(async () => {
+    if (!can(viewer, 'catalogue.read')) throw forbiddenFor('catalogue.read');
+    const row = await fetchStation(db(), code);
+    const site = { latitudeDeg: row.latitudeDeg, longitudeDeg: row.longitudeDeg, heightM: row.heightM };
+    const isXyz = row.itrfX !== null && row.itrfY !== null && row.itrfZ !== null;
+    const ahead = await sessionsAhead(viewer, nowMs());
+    return {
+      ok: true,
+      station: {
+        code: row.code,
+        site,
+        itrf: isXyz ? { x: row.itrfX ?? 0, y: row.itrfY ?? 0, z: row.itrfZ ?? 0 } : geodeticToItrf(site),
+        recorderFreeAtMs: row.recorderFreeAtMs,
+        retiredAtMs: row.retiredAtMs,
+        blocks: await blocksOf(db(), row),
+        canEdit: editableBlocks(viewer, row.code),
+        canRetire: can(viewer, 'station.write'),
+        sessionsAhead: ahead
+          .filter(({ stationCode }) => stationCode === row.code)
+          .map(({ code: sessionCode, title, startMs }) => ({ code: sessionCode, title, startMs })),
+      },
+    };
+  });
+
+function editableBlocks(viewer: Viewer, stationCode: string): StationBlockName[] {
+  if (can(viewer, 'station.write')) return Object.keys(STATION_BLOCKS) as StationBlockName[];
+  return can(viewer, 'station.write-own', { stationCode }) ? [...OWN_BLOCKS] : [];
+}
+
+const sessionsAhead = (viewer: Viewer, now: number) =>
+  db()
+    .select({
+      stationCode: sessionStations.stationCode,
+      code: sessions.code,
+      title: sessions.title,
+      startMs: sessions.startMs,
+    })
+    .from(sessionStations)
+    .innerJoin(sessions, eq(sessions.id, sessionStations.sessionId))
+    .where(and(gt(sessions.startMs, now), ne(sessions.state, 'cancelled'), readableBy(viewer)))
+    .orderBy(asc(sessions.startMs));

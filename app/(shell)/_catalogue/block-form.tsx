@@ -1,0 +1,101 @@
+'use client';
+
+import { useEffect, useRef, useState, useTransition, type FormEvent, type KeyboardEvent } from 'react';
+import { showToast } from '@/app/_ui/toast';
+import type { BlockAct } from '@/src/data/blocks';
+import type { Failure } from '@/src/data/errors';
+import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
+import { BlockFields } from './block-fields';
+import { focusWrong, wrongOf } from './wrong';
+
+export type Keep = (act: BlockAct) => Promise<{ ok: true } | Failure>;
+
+type Props = {
+  name: string;
+  block: AnyBlock;
+  /** as it is stored */
+  stored: Typed;
+  keep: Keep;
+  onLeave: () => void;
+};
+
+/** One block of an object in edit: the same parser here and on the server says what is wrong. */
+export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
+  const [was] = useState(stored);
+  const [typed, setTyped] = useState(stored);
+  const [wrong, setWrong] = useState<readonly Wrong[]>([]);
+  const [refusal, setRefusal] = useState<string | null>(null);
+  const [isPending, startTransition] = useTransition();
+  const form = useRef<HTMLFormElement>(null);
+  const read = readBlock(block, typed);
+  const note = read.ok ? block.note?.(read.value) : null;
+
+  useEffect(() => {
+    form.current?.querySelector<HTMLElement>('input, select, textarea, button')?.focus();
+  }, []);
+  useEffect(() => {
+    if (wrong.length > 0) focusWrong(form.current);
+  }, [wrong]);
+
+  const submit = (event: FormEvent) => {
+    event.preventDefault();
+    if (isPending) return;
+    setRefusal(null);
+    if (!read.ok) return setWrong(read.wrong);
+    setWrong([]);
+    startTransition(async () => {
+      const answer = await keep({ block: name, typed, was });
+      if (answer.ok) {
+        showToast({ message: `“${block.title}” is kept.` });
+        return onLeave();
+      }
+      if (answer.fields) setWrong(wrongOf(answer.fields));
+      else setRefusal(answer.message);
+    });
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.key === 'Escape') onLeave();
+  };
+
+  return (
+    <form
+      ref={form}
+      className="block-edit block"
+      aria-label={block.title}
+      noValidate
+      onSubmit={submit}
+      onKeyDown={onKeyDown}
+    >
+      <header className="block-head">
+        <h2>{block.title}</h2>
+        <kbd className="kbd">Esc</kbd>
+      </header>
+      {refusal !== null && (
+        <div role="alert" className="error-box mb-2">
+          {refusal}
+        </div>
+      )}
+      <BlockFields
+        block={block}
+        typed={typed}
+        wrong={wrong}
+        onType={(field, value) => {
+          setTyped({ ...typed, [field]: value });
+          setWrong(wrong.filter((one) => one.field !== field && !one.field.startsWith(`${field}.`)));
+        }}
+      />
+      {note != null && <p className="help mt-2">{note}</p>}
+      <div className="block-acts">
+        <button type="submit" className="btn btn-primary" aria-disabled={isPending}>
+          {isPending ? 'Keeping' : block.keep}
+        </button>
+        <button type="button" className="btn" onClick={onLeave}>
+          Leave as it was
+        </button>
+      </div>
+      <p className="sr-only" role="status">
+        {wrong.length > 0 && wrong.map(({ message }) => message).join(' ')}
+      </p>
+    </form>
+  );
+}

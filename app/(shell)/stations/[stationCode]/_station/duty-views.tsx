@@ -1,0 +1,94 @@
+import { formatInTimeZone } from 'date-fns-tz';
+import { angleText, dayText, minuteText } from '@/app/_ui/format';
+import type { Absence } from '@/src/exchange/catalogue/station';
+import type { Corner } from '@/src/exchange/catalogue/station-site';
+import { MaskDrawing } from './mask-drawing';
+
+export function HorizonView({ corners, lowestDeg }: { corners: readonly Corner[]; lowestDeg: number }) {
+  const lower = `The lowest elevation of ${angleText(lowestDeg, 1)} applies where the mask is lower.`;
+  if (corners.length === 0) return <p className="help">No mask: the horizon is free. {lower}</p>;
+  return (
+    <>
+      <div className="mask">
+        <MaskDrawing corners={corners} />
+        <div className="block-scroll mask-table">
+          <table className="tt">
+            <thead>
+              <tr>
+                <th scope="col" className="num">
+                  Az °
+                </th>
+                <th scope="col" className="num">
+                  El °
+                </th>
+              </tr>
+            </thead>
+            <tbody>
+              {corners.map(({ azimuthDeg, elevationDeg }, index) => (
+                <tr key={index}>
+                  <td className="num">{azimuthDeg}</td>
+                  <td className="num">{elevationDeg.toFixed(1)}</td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
+      </div>
+      <p className="help mt-1">
+        {corners.length} corners, straight lines between them, closed at 360°. {lower}
+      </p>
+    </>
+  );
+}
+
+type AwayProps = { away: readonly Absence[]; timeZone: string; nowMs: number };
+
+export function AwayView({ away, timeZone, nowMs }: AwayProps) {
+  const ahead = away.filter(({ endMs }) => endMs > nowMs);
+  const past = away.length - ahead.length;
+  const past0 = past === 0 ? '' : ` ${past} ${past === 1 ? 'time is' : 'times are'} past.`;
+  if (ahead.length === 0) {
+    return <p className="help">No time ahead is planned in which it cannot observe.{past0}</p>;
+  }
+  return (
+    <>
+      <div className="block-scroll">
+        <table className="tt">
+          <thead>
+            <tr>
+              <th scope="col">From, UT</th>
+              <th scope="col">To, UT</th>
+              <th scope="col">Why</th>
+            </tr>
+          </thead>
+          <tbody>
+            {ahead.map(({ startMs, endMs, why }) => (
+              <tr key={`${startMs} ${endMs} ${why}`}>
+                {[startMs, endMs].map((ms) => (
+                  <td key={ms} className="whitespace-nowrap">
+                    {new Date(ms).toISOString().slice(0, 10)} ({dayText(ms)}) {minuteText(ms)}
+                    <span className="block text-small text-ink2">
+                      {formatInTimeZone(ms, timeZone, 'yyyy-MM-dd HH:mm')}
+                    </span>
+                  </td>
+                ))}
+                <td>{why}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </div>
+      <p className="help mt-1">
+        The second line is local time, {timeZone}.{past0}
+      </p>
+    </>
+  );
+}
+
+export function ContactsView({ contacts }: { contacts: string }) {
+  return contacts === '' ? (
+    <p className="help">No contacts are given.</p>
+  ) : (
+    <p className="whitespace-pre-line break-words">{contacts}</p>
+  );
+}
