@@ -17,6 +17,7 @@ const PAGES: readonly Page[] = [
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
   { kind: 'session', label: 'Sky', verb: 'plan.read-draft', segment: 'sky' },
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },
+  { kind: 'session', label: 'Coverage', verb: 'plan.read-draft', segment: 'coverage' },
 ];
 
 /** The pages of a place that one of the viewer's roles has a part in. */

@@ -8,7 +8,8 @@ import { gmstHours, moonSeparationDeg, sunSeparationDeg } from '../../sky/positi
 import type { Interval } from '../../units/time';
 import { answer, forbiddenFor, type Failure } from '../errors';
 import { readModes, readSources, readStations } from '../plan/context';
-import { derivedState } from '../session/dto';
+import { fluxOf } from '../plan/flux';
+import { headOf } from '../session/head';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { SkySheet, SkySource } from './dto';
 
@@ -26,24 +27,15 @@ export const readSkySheet = (viewer: Viewer, key: string): Promise<{ ok: true; s
     const { stations, sources, span, table } = await skyOf(session);
     const mode = (await readModes(db())).find(({ id }) => id === session.modeId);
     const middle = new Date((span.start.getTime() + span.end.getTime()) / 2);
-    const { id, code, title, startMs, lengthSeconds, minElevationDeg } = session;
     const now = nowMs();
     return {
       ok: true,
       sheet: {
-        session: {
-          id,
-          code,
-          title,
-          state: derivedState(session, now),
-          startMs,
-          lengthSeconds,
-          stations: session.stations,
-        },
+        session: headOf(session, now),
         band: mode?.band ?? null,
-        minElevationDeg,
+        minElevationDeg: session.minElevationDeg,
         gmstStartHours: gmstHours(span.start),
-        stations: stations.map(({ code: station, name, site }) => ({ code: station, name, site })),
+        stations: stations.map(({ code, name, site }) => ({ code, name, site })),
         sources: sources.map((source) => skySource(source, mode, middle)),
         table,
         nowMs: now,
@@ -64,18 +56,14 @@ async function skyOf({ id, startMs, lengthSeconds, minElevationDeg, stations: co
   return { span, sources, stations, table: skyTable(stations, sources, { minElevationDeg }, span) };
 }
 
-function skySource(
-  { id, name, role, position, components }: PlanSource,
-  mode: PlanMode | undefined,
-  middle: Date,
-): SkySource {
-  const model = mode && components[mode.band];
+function skySource(source: PlanSource, mode: PlanMode | undefined, middle: Date): SkySource {
+  const { id, name, role, position } = source;
   return {
     id,
     name,
     role,
     position,
-    fluxJy: model ? model.reduce((sum, { fluxJy }) => sum + fluxJy, 0) : null,
+    fluxJy: fluxOf(source, mode?.band),
     sunDeg: sunSeparationDeg(position, middle),
     moonDeg: moonSeparationDeg(position, middle),
   };

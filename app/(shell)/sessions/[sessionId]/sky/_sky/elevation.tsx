@@ -96,6 +96,8 @@ export function Elevation({ sheet, source, codes, scale, atMs }: Props) {
 }
 
 function Frame({ scale, minElevationDeg }: { scale: Scale; minElevationDeg: number }) {
+  // on a phone the drawing begins at the edge of the screen
+  const isNarrow = scale.width < 500;
   return (
     <>
       {hourTicks(scale).map(({ x, ms, isMidnight }) => (
@@ -119,7 +121,13 @@ function Frame({ scale, minElevationDeg }: { scale: Scale; minElevationDeg: numb
             stroke={deg === 0 ? 'var(--ink)' : 'var(--rule)'}
             strokeWidth={deg === 0 ? 1 : 0.75}
           />
-          <text x={-6} y={yOf(deg) + 4} fontSize={10.5} textAnchor="end" className="fill-ink2">
+          <text
+            x={isNarrow ? 3 : -6}
+            y={isNarrow ? Math.max(11, yOf(deg) - 3) : yOf(deg) + 4}
+            fontSize={10.5}
+            textAnchor={isNarrow ? 'start' : 'end'}
+            className="fill-ink2"
+          >
             {deg}°
           </text>
         </g>

@@ -5,6 +5,7 @@ import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { saveFile } from '@/app/_ui/save-file';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { SkySheet } from '@/src/data/sky/dto';
+import RefreshOn from '../../_plan/refresh-on';
 import { Axis } from './axis';
 import { windowsCsv } from './csv';
 import { Elevation } from './elevation';
@@ -19,9 +20,10 @@ const STEP_MS = 600_000;
 
 /** When each station sees each source, and when they see it together. */
 export function Sky({ sheet: read }: { sheet: SkySheet }) {
-  const [sheet] = useState(() => ({ ...read, stations: staveOrder(read.stations) }));
+  const sheet = { ...read, stations: staveOrder(read.stations) };
   const { session, sources, stations } = sheet;
-  const [codes, setCodes] = useState(() => stations.map(({ code }) => code));
+  const [leftOut, setLeftOut] = useState<readonly string[]>([]);
+  const codes = stations.map(({ code }) => code).filter((code) => !leftOut.includes(code));
   const [mark, setMark] = useState<Mark>(() =>
     stations.length > 2 ? { kind: 'least', least: Math.ceil((stations.length * 2) / 3) } : { kind: 'all' },
   );
@@ -41,7 +43,7 @@ export function Sky({ sheet: read }: { sheet: SkySheet }) {
     width,
   };
   const chooseCodes = (next: string[]) => {
-    setCodes(next);
+    setLeftOut(stations.map(({ code }) => code).filter((code) => !next.includes(code)));
     if (mark.kind === 'least' && mark.least >= next.length)
       setMark(next.length > 2 ? { kind: 'least', least: next.length - 1 } : { kind: 'all' });
   };
@@ -63,6 +65,7 @@ export function Sky({ sheet: read }: { sheet: SkySheet }) {
 
   return (
     <>
+      <RefreshOn sessionId={session.id} withPlan={false} />
       <div className="min-h-bar flex flex-wrap items-center border-b border-rule text-table">
         <ToolBar
           stations={stations}
