@@ -31,11 +31,16 @@ export function CoverageView({ sheet }: { sheet: CoverageSheet }) {
       {shown ? (
         <Shown sheet={sheet} shown={shown} />
       ) : (
-        <EmptySheet heading="No scans yet" codes={staveOrder(sheet.stations).map(({ code }) => code)}>
-          <p>
-            The uv plane is drawn from the scans of a source.{' '}
-            <Link href={`/sessions/${session.code}/timeline`}>Lay them out on the timeline</Link> first.
-          </p>
+        <EmptySheet
+          heading="No scans yet"
+          codes={staveOrder(sheet.stations).map(({ code }) => code)}
+          actions={
+            <Link className="btn btn-primary" href={`/sessions/${session.code}/timeline`}>
+              Open the timeline
+            </Link>
+          }
+        >
+          <p>The uv plane is drawn from the scans of a source. They are laid out on the timeline.</p>
         </EmptySheet>
       )}
     </>

@@ -1,6 +1,7 @@
 import { angleText } from '@/app/_ui/format';
 import type { SkySheet, SkySource } from '@/src/data/sky/dto';
 import type { StationCode } from '@/src/schedule/plan';
+import { declinationText, rightAscensionText } from '@/src/units/sexagesimal';
 import { sourceWords } from '../../_plan/source-words';
 import { highestOf, markText, togetherIn, windowsOf, type Mark } from './model';
 import { hoursText, togetherSentence } from './words';
@@ -21,6 +22,9 @@ export function SourcePanel({ sheet, source, codes, mark }: Props) {
         <p className="text-ink2">
           {sourceWords(source)}
           {source.fluxJy !== null && band !== null && ` at ${band}`}
+        </p>
+        <p className="help">
+          {rightAscensionText(source.position.raDeg)} {declinationText(source.position.decDeg)}, ICRS
         </p>
       </div>
       <section>
