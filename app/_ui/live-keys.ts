@@ -1,5 +1,6 @@
 /** Keys of what changes behind the viewer's back: each is the address it is read from. */
 export const liveKeys = {
+  desk: (stationCode: string) => `/api/stations/${stationCode}/desk` as const,
   stamp: (sessionId: string) => `/api/sessions/${sessionId}/stamp` as const,
   journal: (sessionId: string) => `/api/sessions/${sessionId}/journal` as const,
 };

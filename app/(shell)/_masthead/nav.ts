@@ -1,17 +1,20 @@
 import type { Route } from 'next';
-import { POLICY, type Verb, type Viewer } from '@/src/access/policy';
+import { canSome, type Verb, type Viewer } from '@/src/access/policy';
 
-/** Where a page stands: beside the sessions, or inside one. */
-export type Place = { kind: 'network' } | { kind: 'session'; sessionId: string };
+/** Where a page stands: beside the sessions, inside one, or at a station. */
+export type Place =
+  { kind: 'network' } | { kind: 'session'; sessionId: string } | { kind: 'station'; stationCode: string };
 
 export type NavItem = { label: string; href: Route };
 
 type Page = { label: string; verb: Verb } & (
-  { kind: 'network'; path: Route } | { kind: 'session'; segment: string }
+  { kind: 'network'; path: Route } | { kind: 'session' | 'station'; segment: string }
 );
 
 /** In the order of the masthead: a page that exists is one line here. */
 const PAGES: readonly Page[] = [
+  { kind: 'station', label: 'Desk', verb: 'desk.read', segment: 'desk' },
+  { kind: 'station', label: 'Clock log', verb: 'clock.read', segment: 'clock' },
   { kind: 'network', label: 'Sessions', verb: 'session.list', path: '/sessions' },
   { kind: 'network', label: 'Stations', verb: 'catalogue.read', path: '/stations' as Route },
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
@@ -20,20 +23,27 @@ const PAGES: readonly Page[] = [
   { kind: 'session', label: 'Coverage', verb: 'plan.read-draft', segment: 'coverage' },
 ];
 
-/** The pages of a place that one of the viewer's roles has a part in. */
+/**
+ * The pages of a place that one of the viewer's roles has a part in. An operator's own desk and clock log come first
+ * beside the sessions; at a station the way back to the sessions comes last.
+ */
 export function navFor(viewer: Viewer, place: Place): NavItem[] {
-  return PAGES.filter((page) => page.kind === place.kind && hasPart(viewer, page.verb)).map((page) => ({
+  const items = pagesOf(viewer, place);
+  if (place.kind === 'session') return items;
+  if (place.kind === 'station') return [...items, ...pagesOf(viewer, { kind: 'network' }).slice(0, 1)];
+  const own = viewer.grants.find(({ role }) => role === 'operator')?.stationCode;
+  return own ? [...pagesOf(viewer, { kind: 'station', stationCode: own }), ...items] : items;
+}
+
+const pagesOf = (viewer: Viewer, place: Place): NavItem[] =>
+  PAGES.filter((page) => page.kind === place.kind && canSome(viewer, page.verb)).map((page) => ({
     label: page.label,
     href: hrefOf(page, place),
   }));
-}
 
 function hrefOf(page: Page, place: Place): Route {
   if (page.kind === 'network') return page.path;
+  if (place.kind === 'station') return `/stations/${place.stationCode}/${page.segment}` as Route;
   const sessionId = place.kind === 'session' ? place.sessionId : '';
   return `/sessions/${encodeURIComponent(sessionId)}/${page.segment}` as Route;
-}
-
-function hasPart(viewer: Viewer, verb: Verb): boolean {
-  return viewer.grants.some((grant) => POLICY[verb][grant.role] !== undefined);
 }

@@ -49,5 +49,7 @@ export type DeskDto = {
   clock: { readAtMs: number; offsetSeconds: number } | null;
   canSay: boolean;
   canRead: boolean;
+  /** GMST at nowMs */
+  gmstHours: number;
   nowMs: number;
 };

@@ -11,6 +11,7 @@ import type { PlanContext } from '../../schedule/context';
 import { stationPaths, type PathLeg } from '../../schedule/paths';
 import { unpackPlan } from '../../schedule/plan-rows';
 import { scanNumbers } from '../../schedule/scan-numbers';
+import { gmstHours } from '../../sky/position';
 import { fitOf } from '../clock/read';
 import { answer, forbiddenFor, notFound, type Failure } from '../errors';
 import { newestSnapshot, type Snapshot } from '../offer/read';
@@ -54,6 +55,7 @@ export const readDesk = (viewer: Viewer, code: string): Promise<{ ok: true; desk
         clock: newest ? { readAtMs: newest.atMs, offsetSeconds: newest.offsetSeconds } : null,
         canSay: can(viewer, 'outcome.write', subject),
         canRead: can(viewer, 'clock.write', { stationCode: station.code }),
+        gmstHours: gmstHours(new Date(now)),
         nowMs: now,
       },
     };

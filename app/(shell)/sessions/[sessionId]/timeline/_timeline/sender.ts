@@ -2,7 +2,7 @@ import type { ActFailure, JournalPage, Revs, Taken } from '@/src/data/plan/dto';
 import type { Failure } from '@/src/data/errors';
 import { applyCommand, CommandRefused, subjectsOf, type Command } from '@/src/schedule/commands';
 import type { Plan, SubjectId } from '@/src/schedule/plan';
-import { newId } from './ids';
+import { newId } from '@/app/_ui/new-id';
 import { createOwnRevs } from './own-revs';
 import type { PendingAct, TimelineState } from './state';
 import type { TimelineStore } from './store';

@@ -6,7 +6,7 @@ import { toggleStation } from '@/src/schedule/gestures/toggle-station';
 import type { PlanContext } from '@/src/schedule/context';
 import type { ScanId } from '@/src/schedule/plan';
 import { useActs } from './acts';
-import { newId } from './ids';
+import { newId } from '@/app/_ui/new-id';
 import { judge } from './placement';
 import type { Doing } from './sender';
 import type { Placing, TimelineState } from './state';
