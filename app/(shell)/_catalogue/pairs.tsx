@@ -4,8 +4,8 @@ import type { ReactNode } from 'react';
 export function Pairs({ pairs }: { pairs: readonly (readonly [name: string, value: ReactNode])[] }) {
   return (
     <dl className="kv">
-      {pairs.map(([name, value]) => (
-        <div key={name}>
+      {pairs.map(([name, value], index) => (
+        <div key={index}>
           <dt>{name}</dt>
           <dd>{value}</dd>
         </div>

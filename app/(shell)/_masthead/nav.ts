@@ -17,6 +17,8 @@ const PAGES: readonly Page[] = [
   { kind: 'station', label: 'Clock log', verb: 'clock.read', segment: 'clock' },
   { kind: 'network', label: 'Sessions', verb: 'session.list', path: '/sessions' },
   { kind: 'network', label: 'Stations', verb: 'catalogue.read', path: '/stations' as Route },
+  { kind: 'network', label: 'Sources', verb: 'catalogue.read', path: '/sources' as Route },
+  { kind: 'network', label: 'Modes', verb: 'catalogue.read', path: '/modes' as Route },
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
   { kind: 'session', label: 'Sky', verb: 'plan.read-draft', segment: 'sky' },
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },

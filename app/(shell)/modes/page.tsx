@@ -1,0 +1,24 @@
+import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { listModes } from '@/src/data/mode/read';
+import { nowMs } from '@/src/env';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { PageFrame } from '../_masthead/page-frame';
+import { ModeList } from './_list/mode-list';
+
+export const metadata: Metadata = { title: 'Modes' };
+
+type SearchParams = Promise<Record<string, string | string[] | undefined>>;
+
+export default async function ModesPage({ searchParams }: { searchParams: SearchParams }) {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const answer = await listModes(viewer);
+  if (!answer.ok) forbidden();
+  return (
+    <PageFrame viewer={viewer} nowMs={nowMs()} place={{ kind: 'network' }}>
+      <ModeList modes={answer.modes} canAdd={answer.canAdd} query={await searchParams} />
+    </PageFrame>
+  );
+}
