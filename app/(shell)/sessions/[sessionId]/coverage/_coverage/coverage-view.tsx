@@ -9,7 +9,8 @@ import { longTimeText, numberText } from '@/app/_ui/format';
 import { saveFile } from '@/app/_ui/save-file';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { CoverageSheet, CoverageVersion, Observed } from '@/src/data/coverage/dto';
-import RefreshOn from '../../_plan/refresh-on';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { uvCsv } from './csv';
 import { svgText } from './figure-file';
 import { baselineRowsOf, MEGA, type Ends } from './model';
@@ -22,7 +23,7 @@ export function CoverageView({ sheet }: { sheet: CoverageSheet }) {
   const { session, shown, refused } = sheet;
   return (
     <>
-      <RefreshOn sessionId={session.id} withPlan />
+      <RefreshOn address={liveKeys.stamp(session.id)} />
       {refused !== null && (
         <p role="status" className="error-box">
           {refused}

@@ -1,11 +1,12 @@
 'use client';
 
 import { useEffect, useMemo, useState } from 'react';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
 import { planContextOf } from '../../_plan/plan-context';
-import RefreshOn from '../../_plan/refresh-on';
 import { CellPanel } from './cell-panel';
 import { ExportButton } from './export-button';
 import { FilterPanel } from './filter-panel';
@@ -40,7 +41,7 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
 
   return (
     <>
-      <RefreshOn sessionId={timeline.session.id} withPlan />
+      <RefreshOn address={liveKeys.stamp(timeline.session.id)} />
       <div className="min-h-bar flex flex-wrap items-center gap-x-3.5 border-b border-rule text-table">
         <div className="flex h-bar w-tray items-center justify-between px-3.5">
           <h2 className="text-lead">Filter</h2>

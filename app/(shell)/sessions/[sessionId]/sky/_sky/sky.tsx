@@ -5,7 +5,8 @@ import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { saveFile } from '@/app/_ui/save-file';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { SkySheet } from '@/src/data/sky/dto';
-import RefreshOn from '../../_plan/refresh-on';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { Axis } from './axis';
 import { windowsCsv } from './csv';
 import { Elevation } from './elevation';
@@ -65,7 +66,7 @@ export function Sky({ sheet: read }: { sheet: SkySheet }) {
 
   return (
     <>
-      <RefreshOn sessionId={session.id} withPlan={false} />
+      <RefreshOn address={liveKeys.stationsStamp(session.id)} />
       <div className="min-h-bar flex flex-wrap items-center border-b border-rule text-table">
         <ToolBar
           stations={stations}

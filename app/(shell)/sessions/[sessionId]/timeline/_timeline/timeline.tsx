@@ -1,6 +1,7 @@
 'use client';
 
 import { lazy, Suspense, useEffect, useState } from 'react';
+import { liveKeys } from '@/app/_ui/live-keys';
 import type { Timeline as TimelineDto } from '@/src/data/plan/dto';
 import { Inspector } from '../_inspector/inspector';
 import { ActsProvider } from './acts';
@@ -65,7 +66,7 @@ export function Timeline({ timeline, chosenScanId }: Props) {
 }
 
 const Live = lazy(() => import('./live'));
-const RefreshOn = lazy(() => import('../../_plan/refresh-on'));
+const RefreshOn = lazy(() => import('@/app/_ui/refresh-on'));
 
 const LIVE_AFTER_MS = 2000;
 
@@ -81,7 +82,7 @@ function LiveWhenReady({ sender }: { sender: Sender }) {
   return (
     <Suspense>
       <Live sessionId={sessionId} sender={sender} />
-      <RefreshOn sessionId={sessionId} withPlan={false} />
+      <RefreshOn address={liveKeys.stationsStamp(sessionId)} />
     </Suspense>
   );
 }

@@ -43,7 +43,7 @@ export function ScanList({ run, now, saying, canSay, onChoose }: Props) {
               <th scope="col" className="num">
                 El
               </th>
-              <th scope="col" className="pl-[12px]">
+              <th scope="col" className="gap">
                 Went
               </th>
             </tr>
@@ -66,7 +66,7 @@ export function ScanList({ run, now, saying, canSay, onChoose }: Props) {
                 <td>{scan.source}</td>
                 <td className="num">{angleText(scan.startAzDeg)}</td>
                 <td className="num">{angleText(scan.startElDeg)}</td>
-                <td className="desk-word">
+                <td className="gap whitespace-nowrap">
                   <Went scan={scan} now={now} saying={saying} canSay={canSay} onChoose={onChoose} />
                 </td>
               </tr>

@@ -1,0 +1,111 @@
+'use client';
+
+import { useId, useRef, useState } from 'react';
+import { Dialog } from '@/app/_ui/dialog';
+import { Field } from '@/app/_ui/field';
+import { newId } from '@/app/_ui/new-id';
+import { serverNowMs } from '@/app/_ui/server-clock';
+import { showToast } from '@/app/_ui/toast';
+import type { ChangeDto, StationClockDto } from '@/src/data/clock/dto';
+import { readTimeEntry } from '@/src/units/entry';
+import { change } from '../actions';
+import { CHANGE_WORDS } from './change-words';
+
+const KINDS = Object.keys(CHANGE_WORDS) as ChangeDto['kind'][];
+
+/** What was changed at the station, and when: the fit starts anew there. */
+export function ChangeForm({
+  clock,
+  isOpen,
+  onClose,
+}: {
+  clock: StationClockDto;
+  isOpen: boolean;
+  onClose: () => void;
+}) {
+  const { code } = clock.station;
+  const kindId = useId();
+  const [kind, setKind] = useState<ChangeDto['kind']>('resync');
+  const [time, setTime] = useState('');
+  const [note, setNote] = useState('');
+  const [fields, setFields] = useState<Record<string, string>>({});
+  const [trouble, setTrouble] = useState<string | null>(null);
+  const id = useRef<string | null>(null);
+
+  const send = async () => {
+    const at = readTimeEntry(time, serverNowMs());
+    setTrouble(null);
+    if (!at.ok) return setFields({ atMs: at.message });
+    id.current ??= newId();
+    const answer = await change(code, { id: id.current, kind, atMs: at.value, note });
+    if (answer.ok) {
+      id.current = null;
+      setTime('');
+      setNote('');
+      setFields({});
+      showToast({ message: `Stored: ${CHANGE_WORDS[kind]} at ${code}. The fit starts anew there.` });
+      return onClose();
+    }
+    const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
+    if (back.length === 0) setTrouble(answer.message);
+    setFields(Object.fromEntries(back) as Record<string, string>);
+  };
+
+  return (
+    <Dialog
+      isOpen={isOpen}
+      title={`Change at ${clock.station.name}`}
+      onClose={onClose}
+      actions={
+        <>
+          <button type="button" className="btn" onClick={onClose}>
+            Leave
+          </button>
+          <button type="button" className="btn btn-primary" onClick={() => void send()}>
+            Store the change
+          </button>
+        </>
+      }
+    >
+      <div className="flex flex-col gap-2.5">
+        <p className="help">Readings before and after it are fitted apart.</p>
+        <div>
+          <label className="label" htmlFor={kindId}>
+            What was changed
+          </label>
+          <select
+            id={kindId}
+            className="field"
+            value={kind}
+            onChange={(event) => setKind(KINDS.find((one) => one === event.target.value) ?? 'other')}
+          >
+            {KINDS.map((one) => (
+              <option key={one} value={one}>
+                {CHANGE_WORDS[one]}
+              </option>
+            ))}
+          </select>
+        </div>
+        <Field
+          label="When, UT"
+          placeholder="036 10:05"
+          value={time}
+          error={fields.atMs}
+          onChange={(event) => setTime(event.target.value)}
+        />
+        <Field
+          label="In a few words"
+          value={note}
+          maxLength={500}
+          error={fields.note}
+          onChange={(event) => setNote(event.target.value)}
+        />
+        {trouble !== null && (
+          <p role="alert" className="error-box">
+            {trouble}
+          </p>
+        )}
+      </div>
+    </Dialog>
+  );
+}

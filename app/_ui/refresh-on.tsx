@@ -1,0 +1,25 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useEffect, useRef } from 'react';
+import useSWR from 'swr';
+
+const EVERY_MS = 3000;
+
+/** Reads the page anew when others changed what it shows: the address answers another stamp then. */
+export default function RefreshOn({ address }: { address: string }) {
+  const router = useRouter();
+  const seen = useRef<string | null>(null);
+  const { data: stamp } = useSWR(address, readStamp, { refreshInterval: EVERY_MS, dedupingInterval: 500 });
+  useEffect(() => {
+    if (stamp === undefined || stamp === null) return;
+    if (seen.current !== null && seen.current !== stamp) router.refresh();
+    seen.current = stamp;
+  }, [stamp, router]);
+  return null;
+}
+
+async function readStamp(address: string): Promise<string | null> {
+  const response = await fetch(address, { cache: 'no-store' });
+  return response.ok ? ((await response.json()) as { stamp: string }).stamp : null;
+}
