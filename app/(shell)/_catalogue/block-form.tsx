@@ -6,7 +6,7 @@ import type { BlockAct } from '@/src/data/blocks';
 import type { Failure } from '@/src/data/errors';
 import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
 import { BlockFields } from './block-fields';
-import { focusWrong, wrongOf } from './wrong';
+import { focusWrong, wrongOf, wrongText } from './wrong';
 
 export type Keep = (act: BlockAct) => Promise<{ ok: true } | Failure>;
 
@@ -94,7 +94,7 @@ export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
         </button>
       </div>
       <p className="sr-only" role="status">
-        {wrong.length > 0 && wrong.map(({ message }) => message).join(' ')}
+        {wrong.length > 0 && wrongText(wrong.length)}
       </p>
     </form>
   );

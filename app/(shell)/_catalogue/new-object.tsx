@@ -9,7 +9,7 @@ import type { Failure } from '@/src/data/errors';
 import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
 import type { Field as Entry } from '@/src/exchange/catalogue/field';
 import { BlockFields } from './block-fields';
-import { focusWrong, wrongOf } from './wrong';
+import { focusWrong, wrongOf, wrongText } from './wrong';
 import './object.css';
 
 type Whole = Readonly<Record<string, Typed | string>>;
@@ -87,10 +87,7 @@ export function NewObject({ title, list, label, blocks, code, note, add }: Props
         )}
         {wrong.length > 0 && (
           <p role="status" className="error-box">
-            {wrong.length === 1
-              ? 'One field needs another look.'
-              : `${wrong.length} fields need another look.`}{' '}
-            Nothing is kept yet.
+            {wrongText(wrong.length)} Nothing is kept yet.
           </p>
         )}
         {code && (

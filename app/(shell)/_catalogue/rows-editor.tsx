@@ -24,7 +24,7 @@ export function RowsEditor({ name, table, rows, wrong, onRows }: Props) {
     onRows(rows.map((row, at) => (at === index ? { ...row, [column]: text } : row)));
 
   const add = () => {
-    onRows([...rows, emptyRow(columns, rows.at(-1))]);
+    onRows([...rows, emptyRow(columns, rows.at(-1), table.again)]);
     requestAnimationFrame(() => {
       body.current?.querySelector<HTMLElement>('tr[data-row]:last-of-type :is(input, select)')?.focus();
     });
@@ -179,10 +179,14 @@ function Row({ number, columns, row, path, wrong, onCell, onPaste, onRemove }: R
 }
 
 /** Choices are taken from the row before: the next channel mostly has the same. */
-function emptyRow(columns: readonly [string, Field<unknown>][], last: TypedRow | undefined): TypedRow {
-  return Object.fromEntries(
-    columns.map(([name, { choices }]) => [name, choices ? (last?.[name] ?? choices[0]?.value ?? '') : '']),
-  );
+function emptyRow(
+  columns: readonly [string, Field<unknown>][],
+  last: TypedRow | undefined,
+  again: readonly string[] = [],
+): TypedRow {
+  const start = (name: string, { choices }: Field<unknown>) =>
+    choices || again.includes(name) ? (last?.[name] ?? choices?.[0]?.value ?? '') : '';
+  return Object.fromEntries(columns.map(([name, field]) => [name, start(name, field)]));
 }
 
 /** Lines and columns of a pasted piece of a sheet; one cell alone is plain text. */

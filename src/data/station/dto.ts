@@ -31,6 +31,8 @@ export type StationDto = {
   /** blocks that the viewer may change */
   canEdit: readonly StationBlockName[];
   canRetire: boolean;
+  canReadDesk: boolean;
+  canReadClock: boolean;
   /** of the sessions the viewer may know of */
   sessionsAhead: readonly { code: string; title: string; startMs: number }[];
 };

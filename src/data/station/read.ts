@@ -96,6 +96,8 @@ export const readStation = (
         blocks: await blocksOf(db(), row),
         canEdit: editableBlocks(viewer, row.code),
         canRetire: can(viewer, 'station.write'),
+        canReadDesk: can(viewer, 'desk.read', { stationCode: row.code }),
+        canReadClock: can(viewer, 'clock.read', { stationCode: row.code }),
         sessionsAhead: ahead
           .filter(({ stationCode }) => stationCode === row.code)
           .map(({ code: sessionCode, title, startMs }) => ({ code: sessionCode, title, startMs })),

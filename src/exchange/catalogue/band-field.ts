@@ -1,7 +1,7 @@
-import { readField, refuse, type Field } from './field';
+import { neededField, refuse, type Field } from './field';
 
 /** A band by its frequency, written one way, so that stations, sources and modes name the same band alike. */
-export const bandField: Field<string> = readField(
+export const bandField: Field<string> = neededField(
   { label: 'Band', help: 'By its frequency, as 22 GHz.' },
   (text) => {
     const found = /^(\d{1,4}(?:[.,]\d{1,3})?)\s*([gm])hz$/i.exec(text.trim());

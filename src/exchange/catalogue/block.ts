@@ -13,6 +13,8 @@ export type RowsField<R> = {
   help?: string;
   /** "Add a band" */
   add: string;
+  /** columns that a new row takes from the row before; choices always are */
+  again?: readonly string[];
   columns: FieldsOf<R>;
   most: number;
 };

@@ -100,6 +100,15 @@ export function readField<T>(
   return { ...words, kind: 'text', read, write, ...(echo && { echo }) };
 }
 
+/** The same, for a value that cannot be left out. */
+export const neededField: typeof readField = (words, read, write, echo) =>
+  readField(
+    words,
+    (text) => (text.trim() === '' ? refuse(`“${words.label}” is empty. Type it.`) : read(text)),
+    write,
+    echo,
+  );
+
 /** A refusal as a value. */
 export const refuse = (message: string, mend?: string): { ok: false; message: string; mend?: string } => ({
   ok: false,

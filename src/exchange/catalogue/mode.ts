@@ -2,7 +2,7 @@ import { coverOf, dataRateOf } from '../../schedule/mode-channels';
 import { bandField } from './band-field';
 import type { Block, Wrong } from './block';
 import { doubles } from './checks';
-import { choiceField, numberField, optionalNumberField, readField, refuse, textField } from './field';
+import { choiceField, numberField, optionalNumberField, neededField, refuse, textField } from './field';
 
 export type ModeValues = {
   name: string;
@@ -57,6 +57,7 @@ const channels: Block<Record<never, never>, { channels: Channel }> = {
       label: 'Channels',
       help: 'The edge is the sky frequency that the sideband starts from. All have one bandwidth and as many bits, and each polarisation has as many.',
       add: 'Add a channel',
+      again: ['bandwidthHz'],
       most: 256,
       columns: {
         edgeHz: numberField({ label: 'Edge', unit: 'MHz', above: 0, max: 1e6, scale: 1e6 }),
@@ -123,7 +124,7 @@ const stations: Block<Record<never, never>, { stations: ModeStation }> = {
       add: 'Add a station',
       most: 100,
       columns: {
-        stationCode: readField(
+        stationCode: neededField(
           { label: 'Station' },
           (text) =>
             /^[A-Za-z][A-Za-z0-9]$/.test(text.trim())

@@ -10,6 +10,7 @@ import type { Block } from './block';
 import { doubles } from './checks';
 import {
   choiceField,
+  neededField,
   numberField,
   numberOut,
   optionalNumberField,
@@ -66,13 +67,13 @@ const place: Block<SourceValues> = {
       (names) => names.join(', '),
     ),
     role: choiceField({ label: 'Role', choices: ROLE_CHOICES }),
-    raDeg: readField(
+    raDeg: neededField(
       { label: 'Right ascension, ICRS', help: 'Hours as 08 25 50.338, or degrees.' },
       readRightAscension,
       rightAscensionOut,
       (raDeg) => `${rightAscensionText(raDeg)} = ${raDeg.toFixed(6)}°`,
     ),
-    decDeg: readField(
+    decDeg: neededField(
       { label: 'Declination, ICRS', help: 'As +03 09 24.5, or degrees.' },
       readDeclination,
       declinationOut,

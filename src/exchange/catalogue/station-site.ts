@@ -5,7 +5,7 @@ import {
   choiceField,
   numberField,
   optionalNumberField,
-  readField,
+  neededField,
   refuse,
   textField,
   type Read,
@@ -57,7 +57,7 @@ export const position: Block<PositionValues> = {
   keep: 'Keep position',
   fields: {
     name: textField({ label: 'Name', isNeeded: true, longest: 80 }),
-    timeZone: readField(
+    timeZone: neededField(
       { label: 'Time zone', help: 'As Europe/Berlin; the second line of each time.' },
       readZone,
       (zone) => zone,
@@ -226,7 +226,6 @@ const labelOf = (name: (typeof GEODETIC)[number] | (typeof ITRF)[number]) => pos
 
 function readZone(text: string): Read<string> {
   const zone = text.trim();
-  if (zone === '') return refuse('“Time zone” is empty. Type it as Europe/Berlin.');
   try {
     return { ok: true, value: new Intl.DateTimeFormat('en', { timeZone: zone }).resolvedOptions().timeZone };
   } catch {

@@ -1,6 +1,6 @@
 import type { Block } from './block';
 import { before } from './checks';
-import { areaField, readField, refuse, textField, type Field } from './field';
+import { areaField, neededField, refuse, textField, type Field } from './field';
 import { allowances, bands, recording, wiring } from './station-signal';
 import { horizon, mount, position, wrap } from './station-site';
 import { timeField } from './time-field';
@@ -65,7 +65,7 @@ export const OWN_BLOCKS: readonly StationBlockName[] = ['horizon', 'bands', 'awa
 export const NEW_STATION_BLOCKS = ['position', 'mount', 'recording'] as const;
 
 /** The code, as it is typed once and never changes. */
-export const stationCodeField: Field<string> = readField(
+export const stationCodeField: Field<string> = neededField(
   { label: 'Code', help: 'Two characters, a letter first. It never changes.' },
   (text) =>
     /^[A-Za-z][A-Za-z0-9]$/.test(text.trim())

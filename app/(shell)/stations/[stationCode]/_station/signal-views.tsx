@@ -99,7 +99,7 @@ export function RecordingView({
   freeAtMs: number | null;
 }) {
   const rate = (bitsPerS: number | null) =>
-    bitsPerS === null ? 'not said' : `up to ${numberText(bitsPerS / 1e6)} Mb/s`;
+    bitsPerS === null ? 'rate not said' : `up to ${numberText(bitsPerS / 1e6)} Mb/s`;
   return (
     <Pairs
       pairs={[

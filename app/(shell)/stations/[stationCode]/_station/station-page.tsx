@@ -3,6 +3,7 @@
 import type { Route } from 'next';
 
 import { formatInTimeZone } from 'date-fns-tz';
+import Link from 'next/link';
 import { useState } from 'react';
 import { numberText } from '@/app/_ui/format';
 import type { StationDto } from '@/src/data/station/dto';
@@ -39,7 +40,18 @@ export function StationPage({ station, nowMs }: { station: StationDto; nowMs: nu
         retiredAtMs={station.retiredAtMs}
         sessionsAhead={station.sessionsAhead}
         retire={station.canRetire ? (isRetired) => retire(code, isRetired) : null}
-      />
+      >
+        {station.canReadClock && (
+          <Link href={`/stations/${code}/clock` as Route} className="btn">
+            Clock log
+          </Link>
+        )}
+        {station.canReadDesk && (
+          <Link href={`/stations/${code}/desk` as Route} className="btn">
+            Desk of {code}
+          </Link>
+        )}
+      </ObjectHead>
       <div className="object-columns object-columns-3">
         <div className="object-column">
           <ObjectBlock
