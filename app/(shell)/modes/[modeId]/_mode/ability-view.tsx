@@ -3,6 +3,7 @@ import { staveOrder } from '@/app/_ui/stave-order';
 import type { ModeAbility, ModeDto } from '@/src/data/mode/dto';
 import { plainChannel, type Channel, type ModeStation } from '@/src/exchange/catalogue/mode';
 import { dataRateOf } from '@/src/schedule/mode-channels';
+import { Scroll } from '../../../_catalogue/scroll';
 
 /** How each station does the mode: as it is, in another way, or not at all. */
 export function AbilityView({ mode }: { mode: ModeDto }) {
@@ -24,7 +25,7 @@ export function AbilityView({ mode }: { mode: ModeDto }) {
       <p className="help mb-1">
         {counts[0]} of {rows.length} as it is, {counts[1]} in another way, {counts[2]} not.
       </p>
-      <div className="block-scroll">
+      <Scroll label="Table of stations">
         <table className="tt">
           <thead>
             <tr>
@@ -63,7 +64,7 @@ export function AbilityView({ mode }: { mode: ModeDto }) {
             ))}
           </tbody>
         </table>
-      </div>
+      </Scroll>
     </>
   );
 }

@@ -2,6 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import { numberText } from '@/app/_ui/format';
 import type { Channel } from '@/src/exchange/catalogue/mode';
 import { coverOf } from '@/src/schedule/mode-channels';
+import { Scroll } from '../../../_catalogue/scroll';
 
 const WIDTH = 860;
 const LEFT = 40;
@@ -19,8 +20,8 @@ export function ChannelDrawing({ channels }: { channels: readonly Channel[] }) {
   const lines = [...new Set(channels.map(({ polarisation }) => polarisation))];
   const foot = TOP + lines.length * PITCH;
   return (
-    <div className="block-scroll">
-      <svg viewBox={`0 0 ${WIDTH} ${foot + 22}`} className="block w-full min-w-[520px]" aria-hidden="true">
+    <Scroll label="Drawing of channels">
+      <svg viewBox={`0 0 ${WIDTH} ${foot + 22}`} className="channel-drawing" aria-hidden="true">
         {x.ticks(8).map((tick) => (
           <g key={tick}>
             <line x1={x(tick)} x2={x(tick)} y1="10" y2={foot} stroke="var(--rule)" />
@@ -77,7 +78,7 @@ export function ChannelDrawing({ channels }: { channels: readonly Channel[] }) {
           MHz
         </text>
       </svg>
-    </div>
+    </Scroll>
   );
 }
 

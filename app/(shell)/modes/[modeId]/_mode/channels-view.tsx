@@ -2,6 +2,7 @@ import { numberText } from '@/app/_ui/format';
 import { plainChannel, type Channel } from '@/src/exchange/catalogue/mode';
 import { coverOf, dataRateOf } from '@/src/schedule/mode-channels';
 import { ChannelDrawing } from './channel-drawing';
+import { Scroll } from '../../../_catalogue/scroll';
 
 const POLARISATIONS: Readonly<Record<Channel['polarisation'], string>> = {
   R: 'right circular',
@@ -20,7 +21,7 @@ export function ChannelsView({ channels, toneSpacingHz }: Props) {
     <>
       <p className="help text-right">teal: the edge the frequency belongs to</p>
       <ChannelDrawing channels={channels} />
-      <div className="block-scroll">
+      <Scroll label="Table of channels">
         <table className="tt">
           <thead>
             <tr>
@@ -97,7 +98,7 @@ export function ChannelsView({ channels, toneSpacingHz }: Props) {
             </tr>
           </tfoot>
         </table>
-      </div>
+      </Scroll>
     </>
   );
 }

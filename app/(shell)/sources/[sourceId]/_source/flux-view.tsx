@@ -1,5 +1,6 @@
 import { numberText } from '@/app/_ui/format';
 import type { SourceDto } from '@/src/data/source/dto';
+import { Scroll } from '../../../_catalogue/scroll';
 
 export function FluxView({ flux }: { flux: SourceDto['blocks']['flux'] }) {
   const { bands, components } = flux;
@@ -40,7 +41,7 @@ export function FluxView({ flux }: { flux: SourceDto['blocks']['flux'] }) {
       </table>
       <p className="help mt-1">The size is the width at half maximum of a round Gaussian.</p>
       {components.length > 0 && (
-        <div className="block-scroll mt-2">
+        <Scroll label="Components" className="mt-2">
           <table className="tt">
             <caption className="sr-only">Components</caption>
             <thead>
@@ -69,7 +70,7 @@ export function FluxView({ flux }: { flux: SourceDto['blocks']['flux'] }) {
               ))}
             </tbody>
           </table>
-        </div>
+        </Scroll>
       )}
     </>
   );

@@ -3,6 +3,7 @@ import { angleText, dayText, minuteText } from '@/app/_ui/format';
 import type { Absence } from '@/src/exchange/catalogue/station';
 import type { Corner } from '@/src/exchange/catalogue/station-site';
 import { MaskDrawing } from './mask-drawing';
+import { Scroll } from '../../../_catalogue/scroll';
 
 export function HorizonView({ corners, lowestDeg }: { corners: readonly Corner[]; lowestDeg: number }) {
   const lower = `The lowest elevation of ${angleText(lowestDeg, 1)} applies where the mask is lower.`;
@@ -11,7 +12,7 @@ export function HorizonView({ corners, lowestDeg }: { corners: readonly Corner[]
     <>
       <div className="mask">
         <MaskDrawing corners={corners} />
-        <div className="block-scroll mask-table">
+        <Scroll label="Corners" className="mask-table">
           <table className="tt">
             <thead>
               <tr>
@@ -32,7 +33,7 @@ export function HorizonView({ corners, lowestDeg }: { corners: readonly Corner[]
               ))}
             </tbody>
           </table>
-        </div>
+        </Scroll>
       </div>
       <p className="help mt-1">
         {corners.length} corners, straight lines between them, closed at 360°. {lower}
@@ -52,7 +53,7 @@ export function AwayView({ away, timeZone, nowMs }: AwayProps) {
   }
   return (
     <>
-      <div className="block-scroll">
+      <Scroll label="Times">
         <table className="tt">
           <thead>
             <tr>
@@ -77,7 +78,7 @@ export function AwayView({ away, timeZone, nowMs }: AwayProps) {
             ))}
           </tbody>
         </table>
-      </div>
+      </Scroll>
       <p className="help mt-1">
         The second line is local time, {timeZone}.{past0}
       </p>

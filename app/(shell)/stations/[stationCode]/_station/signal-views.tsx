@@ -10,13 +10,14 @@ import {
 import { fullTimeText } from '@/src/schedule/words';
 import { Pairs } from '../../../_catalogue/pairs';
 import { WiringDrawing } from './wiring-drawing';
+import { Scroll } from '../../../_catalogue/scroll';
 
 export function BandsView({ bands }: { bands: readonly StationBand[] }) {
   if (bands.length === 0) {
     return <p className="help">No band has an SEFD: every fringe of this station is “no data”.</p>;
   }
   return (
-    <div className="block-scroll">
+    <Scroll label="Bands">
       <table className="tt">
         <thead>
           <tr>
@@ -57,7 +58,7 @@ export function BandsView({ bands }: { bands: readonly StationBand[] }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </Scroll>
   );
 }
 

@@ -4,6 +4,7 @@ import type { MountValues, Sector } from '@/src/exchange/catalogue/station-site'
 import { Pairs } from '../../../_catalogue/pairs';
 import { latitudeText, longitudeText } from '../../_place/place-text';
 import { WrapSpiral } from './wrap-spiral';
+import { Scroll } from '../../../_catalogue/scroll';
 
 export function PositionView({ station }: { station: StationDto }) {
   const { code, site, itrf, blocks } = station;
@@ -36,7 +37,7 @@ export function PositionView({ station }: { station: StationDto }) {
 export function MountView({ mount }: { mount: MountValues }) {
   return (
     <>
-      <div className="block-scroll">
+      <Scroll label="Axes">
         <table className="tt">
           <thead>
             <tr>
@@ -76,7 +77,7 @@ export function MountView({ mount }: { mount: MountValues }) {
             />
           </tbody>
         </table>
-      </div>
+      </Scroll>
       <Pairs
         pairs={[
           ['Dish', `${numberText(mount.dishM)} m`],
