@@ -1,4 +1,4 @@
-import { compareScans, scanStopMs, type GroupId, type Plan, type Scan } from './plan';
+import { compareScans, scanStopMs, type GroupId, type Plan, type Scan, type StationCode } from './plan';
 
 /** What counts as one on a sheet: a scan, or a nodding group with its legs by start. */
 export type Block = {
@@ -28,3 +28,10 @@ export function blocksOf(plan: Pick<Plan, 'scans'>): Block[] {
   }
   return blocks;
 }
+
+/** How many scans a plan has, a nodding group as one; of one station, those that it takes part in. */
+export const countBlocks = (plan: Pick<Plan, 'scans'>, station?: StationCode): number =>
+  blocksOf(plan).filter(
+    ({ legs }) =>
+      station === undefined || legs.some((leg) => leg.stations.some((member) => member.station === station)),
+  ).length;

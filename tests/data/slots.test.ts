@@ -5,7 +5,7 @@ import { db } from '@/db/client';
 import { mailOutbox } from '@/db/schema/mail-outbox';
 import { readMailbox } from '@/src/data/mail/read';
 import { newestSnapshot } from '@/src/data/offer/read';
-import { offerPlan } from '@/src/data/offer/write';
+import { offerPlan, resendMail } from '@/src/data/offer/write';
 import { takeAct } from '@/src/data/plan/write';
 import { readSlots } from '@/src/data/slot/read';
 import { replySlot } from '@/src/data/slot/write';
@@ -88,6 +88,20 @@ describe('an offer', () => {
       ['failed', 1],
       ['sent', 2],
     ]);
+  });
+
+  it('that could not be told is shown to the scheduler, who sends it again', async () => {
+    const { id, scheduler } = await sessionWithScan();
+    await offerPlan(scheduler, id, offer());
+    const unsentFor = async (viewer: typeof scheduler) => {
+      const read = await readSlots(viewer, id);
+      return read.ok ? read.board.unsent : read.code;
+    };
+    const bounced = [{ to: 'operator@brightmoor.example', trouble: 'The address does not take mail.' }];
+    expect(await unsentFor(scheduler)).toEqual(bounced);
+    expect(await unsentFor(await makeViewer('operator', { stationCode: 'Af' }))).toEqual([]);
+    expect(await resendMail(scheduler, id)).toEqual({ ok: true, sent: 0, failed: bounced });
+    expect(await resendMail(await makeViewer('correlator'), id)).toMatchObject({ code: 'forbidden' });
   });
 
   it('made twice with one id stands once, and no one is told twice', async () => {

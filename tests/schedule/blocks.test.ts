@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { blocksOf } from '@/src/schedule/blocks';
+import { blocksOf, countBlocks } from '@/src/schedule/blocks';
 import type { Scan } from '@/src/schedule/plan';
 
 const scan = (id: string, startSeconds: number, groupId: string | null = null): Scan => ({
@@ -28,5 +28,20 @@ describe('the blocks of a plan', () => {
 
   it('are none of an empty plan', () => {
     expect(blocksOf({ scans: [] })).toEqual([]);
+  });
+
+  it('are counted for all, or for one station', () => {
+    const joinedBy = (one: Scan, ...codes: string[]) => ({
+      ...one,
+      stations: codes.map((station) => ({ station, lateSeconds: 0, earlySeconds: 0 })),
+    });
+    const scans = [
+      joinedBy(scan('a', 0), 'Af'),
+      joinedBy(scan('b', 100, 'g'), 'Bm'),
+      joinedBy(scan('c', 200, 'g'), 'Af', 'Bm'),
+    ];
+    expect([countBlocks({ scans }), countBlocks({ scans }, 'Af'), countBlocks({ scans }, 'Bm')]).toEqual([
+      2, 2, 1,
+    ]);
   });
 });

@@ -20,19 +20,20 @@ const PAGES: readonly Page[] = [
   { kind: 'network', label: 'Stations', verb: 'catalogue.read', path: '/stations' as Route },
   { kind: 'network', label: 'Sources', verb: 'catalogue.read', path: '/sources' as Route },
   { kind: 'network', label: 'Modes', verb: 'catalogue.read', path: '/modes' as Route },
+  { kind: 'network', label: 'Mailbox', verb: 'mail.read', path: '/mail' as Route },
   { kind: 'session', label: 'Timeline', verb: 'plan.read-draft', segment: 'timeline' },
   { kind: 'session', label: 'Sky', verb: 'plan.read-draft', segment: 'sky' },
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },
   { kind: 'session', label: 'Coverage', verb: 'plan.read-draft', segment: 'coverage' },
+  { kind: 'session', label: 'Slots', verb: 'slot.read', segment: 'slots' },
 ];
 
 /**
- * The pages of a place that one of the viewer's roles has a part in. An operator's own desk and clock log come first
- * beside the sessions; at a station the way back to the sessions comes last.
+ * The pages of a place that one of the viewer's roles has a part in. An operator's own desk and clock log come first;
+ * at a station the way back to the sessions comes last.
  */
 export function navFor(viewer: Viewer, place: Place): NavItem[] {
   const items = pagesOf(viewer, place);
-  if (place.kind === 'session') return items;
   if (place.kind === 'station') return [...items, ...pagesOf(viewer, { kind: 'network' }).slice(0, 1)];
   const own = viewer.grants.find(({ role }) => role === 'operator')?.stationCode;
   return own ? [...pagesOf(viewer, { kind: 'station', stationCode: own }), ...items] : items;

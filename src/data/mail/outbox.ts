@@ -1,6 +1,6 @@
 import 'server-only';
 import { and, asc, eq, inArray, ne } from 'drizzle-orm';
-import { db, transact, type Tx } from '../../../db/client';
+import { db, transact, type Database, type Tx } from '../../../db/client';
 import { mailOutbox } from '../../../db/schema/mail-outbox';
 import { nowMs } from '../../env';
 import { sendMail } from '../../mail/send';
@@ -21,6 +21,17 @@ export async function queueMail(tx: Tx, messages: readonly Queued[], madeAtMs: n
     )
     .onConflictDoNothing();
 }
+
+/** What of a session did not go out, with what the service said. */
+export const unsentOf = (
+  from: Database | Tx,
+  sessionId: string,
+): Promise<{ id: string; to: string; trouble: string }[]> =>
+  from
+    .select({ id: mailOutbox.id, to: mailOutbox.to, trouble: mailOutbox.trouble })
+    .from(mailOutbox)
+    .where(and(eq(mailOutbox.sessionId, sessionId), ne(mailOutbox.state, 'sent')))
+    .orderBy(asc(mailOutbox.to));
 
 /** Tries what of these is not sent yet, once each: what fails stays, with what the service said. */
 export async function sendQueued(

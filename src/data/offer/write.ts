@@ -2,7 +2,7 @@ import 'server-only';
 import { and, eq, inArray } from 'drizzle-orm';
 import { formatInTimeZone } from 'date-fns-tz';
 import { z } from 'zod';
-import { transact, type Tx } from '../../../db/client';
+import { db, transact, type Tx } from '../../../db/client';
 import { grants } from '../../../db/schema/grants';
 import { offers } from '../../../db/schema/offers';
 import { sessions } from '../../../db/schema/sessions';
@@ -10,13 +10,14 @@ import { users } from '../../../db/schema/users';
 import { can, type Viewer } from '../../access/policy';
 import { env, nowMs } from '../../env';
 import { offerMessage } from '../../mail/offer-message';
+import { countBlocks } from '../../schedule/blocks';
 import { ID_PATTERN } from '../../schedule/plan-ids';
 import { unpackPlan } from '../../schedule/plan-rows';
 import type { Slot } from '../../schedule/slots';
 import { fullTimeText, listText } from '../../schedule/words';
 import { answer, forbiddenFor, invalid, Refusal, type Failure } from '../errors';
 import { parsed } from '../input';
-import { queueMail, sendQueued, type Queued } from '../mail/outbox';
+import { queueMail, sendQueued, unsentOf, type Queued } from '../mail/outbox';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { StoredSnapshot } from './read';
 import { saveOffer, type OfferRow } from './save';
@@ -44,6 +45,18 @@ export const offerPlan = (viewer: Viewer, key: string, body: unknown): Promise<O
     const stored = await transact((tx) => store(tx, viewer, key, made));
     const { sent, failed } = await sendQueued(stored.mailIds);
     return { ok: true, number: stored.number, slots: stored.slots, sent, failed };
+  });
+
+/** Sends once more what did not go out. */
+export const resendMail = (
+  viewer: Viewer,
+  key: string,
+): Promise<{ ok: true; sent: number; failed: { to: string; trouble: string }[] } | Failure> =>
+  answer(async () => {
+    const session = await fetchSession(db(), viewer, key);
+    if (!can(viewer, 'offer.write', subjectOf(session))) throw forbiddenFor('offer.write');
+    const unsent = await unsentOf(db(), session.id);
+    return { ok: true, ...(await sendQueued(unsent.map(({ id }) => id))) };
   });
 
 async function store(tx: Tx, viewer: Viewer, key: string, made: z.output<typeof input>) {
@@ -118,7 +131,7 @@ async function messagesOf(
       until: fullTimeText(slot.endMs),
       localFrom: local(slot.startMs),
       localUntil: local(slot.endMs),
-      scans: plan.scans.filter((scan) => scan.stations.some((one) => one.station === slot.station)).length,
+      scans: countBlocks(plan, slot.station),
       mode: listText(modes.filter(({ id }) => slot.modeIds.includes(id)).map(({ name }) => name)),
       answerBy: offer.answerByMs === null ? null : fullTimeText(offer.answerByMs),
       note: offer.note,

@@ -5,6 +5,7 @@ export type SlotDto = {
   stationCode: string;
   stationName: string;
   timeZone: string;
+  longitudeDeg: number;
   startMs: number;
   endMs: number;
   answer: Answer;
@@ -18,6 +19,8 @@ export type SlotDto = {
   isOnBehalf: boolean;
   /** its scans in the offer: start, stop, number, source */
   scans: { startMs: number; stopMs: number; number: string; source: string }[];
+  /** a nodding group counts once */
+  scanCount: number;
   /** whether the viewer may answer, and how */
   canReply: boolean;
   isOwn: boolean;
@@ -42,6 +45,8 @@ export type SlotBoard = {
   /** stations of the session without a scan in the offer */
   unasked: string[];
   canOffer: boolean;
+  /** messages of the session that did not go out; only for those who offer */
+  unsent: { to: string; trouble: string }[];
   /** null where the viewer may not see the draft */
   draft: { scans: number } | null;
   nowMs: number;

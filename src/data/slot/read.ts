@@ -1,5 +1,5 @@
 import 'server-only';
-import { eq, max } from 'drizzle-orm';
+import { eq, max, sql } from 'drizzle-orm';
 import { db, type Database } from '../../../db/client';
 import { journal } from '../../../db/schema/journal';
 import { scans } from '../../../db/schema/scans';
@@ -7,8 +7,10 @@ import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
 import { unpackPlan } from '../../schedule/plan-rows';
 import { stationOnMs, type Plan } from '../../schedule/plan';
+import { countBlocks } from '../../schedule/blocks';
 import { scanNumbers } from '../../schedule/scan-numbers';
 import { answer, forbiddenFor, type Failure } from '../errors';
+import { unsentOf } from '../mail/outbox';
 import { newestSnapshot, type Snapshot } from '../offer/read';
 import { derivedState } from '../session/dto';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
@@ -38,13 +40,27 @@ export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; boar
           ? stations.filter((station) => !answers.some((one) => one.station === station))
           : [],
         canOffer: isOpen && can(viewer, 'offer.write', subjectOf(session)),
+        unsent: can(viewer, 'offer.write', subjectOf(session))
+          ? (await unsentOf(db(), id)).map(({ to, trouble }) => ({ to, trouble }))
+          : [],
         draft: can(viewer, 'plan.read-draft', subjectOf(session))
-          ? { scans: await db().$count(scans, eq(scans.sessionId, id)) }
+          ? { scans: await countDraft(db(), id) }
           : null,
         nowMs: now,
       },
     };
   });
+
+/** A nodding group counts once. */
+async function countDraft(from: Database, sessionId: string): Promise<number> {
+  const [row] = await from
+    .select({
+      count: sql<number>`count(CASE WHEN ${scans.groupId} IS NULL THEN 1 END) + count(DISTINCT ${scans.groupId})`,
+    })
+    .from(scans)
+    .where(eq(scans.sessionId, sessionId));
+  return row?.count ?? 0;
+}
 
 async function offerOf(from: Database, session: SessionRow, snapshot: Snapshot): Promise<SlotBoard['offer']> {
   const { offerId, number, kind, madeAtMs, answerByMs, note, checksum, seq } = snapshot;
@@ -71,6 +87,7 @@ function slotOf(
     stationCode: one.station,
     stationName: station?.name ?? one.station,
     timeZone: station?.timeZone ?? 'UTC',
+    longitudeDeg: station?.site.longitudeDeg ?? 0,
     startMs: one.startMs,
     endMs: one.endMs,
     answer: one.answer,
@@ -86,6 +103,7 @@ function slotOf(
       const source = snapshot.sources.find(({ id }) => id === scan.sourceId)?.name ?? '';
       return [{ ...stationOnMs(scan, member), number: numbers.get(scan.id) ?? '', source }];
     }),
+    scanCount: countBlocks(plan, one.station),
     canReply: isOpen && can(viewer, 'slot.reply', subject),
     isOwn: viewer.grants.some(({ role, stationCode }) => role === 'operator' && stationCode === one.station),
   };

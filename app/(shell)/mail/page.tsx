@@ -1,0 +1,37 @@
+import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
+import { EmptySheet } from '@/app/_ui/empty-sheet';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { readMailbox } from '@/src/data/mail/read';
+import { nowMs } from '@/src/env';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { PageFrame } from '../_masthead/page-frame';
+import { Mailbox } from './_mail/mailbox';
+import './_mail/mail.css';
+
+export const metadata: Metadata = { title: 'Mailbox' };
+
+export default async function MailPage() {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const answer = await readMailbox(viewer);
+  if (!answer.ok) {
+    forbidden();
+  }
+  return (
+    <PageFrame viewer={viewer} nowMs={nowMs()} place={{ kind: 'network' }}>
+      {answer.isUp ? (
+        <Mailbox messages={answer.messages} />
+      ) : answer.isReal ? (
+        <EmptySheet heading="Mail goes to its service">
+          This installation sends its messages for real, so none are kept here.
+        </EmptySheet>
+      ) : (
+        <EmptySheet heading="The local mail service does not answer">
+          It is started together with the application. Messages are kept meanwhile: the slots page of a
+          session names those that did not go out, and sends them again.
+        </EmptySheet>
+      )}
+    </PageFrame>
+  );
+}

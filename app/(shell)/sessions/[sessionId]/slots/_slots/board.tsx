@@ -1,0 +1,209 @@
+'use client';
+
+import { formatInTimeZone } from 'date-fns-tz';
+import { AnswerBox } from '@/app/_ui/answer-box';
+import { ANSWER_WORDS } from '@/app/_ui/answer-words';
+import { dayText, minuteText, spanText } from '@/app/_ui/format';
+import { useWidth } from '@/app/_ui/use-width';
+import type { SlotBoard, SlotDto } from '@/src/data/slot/dto';
+
+const HOUR = 3_600_000;
+const EDGE = 10;
+const ROW = 92;
+const isDay = (ms: number): boolean => ms % (24 * HOUR) === 0;
+
+type Props = {
+  board: SlotBoard;
+  slots: readonly SlotDto[];
+  chosen: string | null;
+  onChoose: (code: string) => void;
+};
+type Scale = (ms: number) => number;
+
+/** One row a station: its hours on the session's axis, in UT and in its own time, and its answer. */
+export function Board({ board, slots, chosen, onChoose }: Props) {
+  const [box, width] = useWidth<HTMLDivElement>(600);
+  const { span } = board;
+  const fromMs = Math.min(span.startMs, ...slots.map(({ startMs }) => startMs));
+  const untilMs = Math.max(span.endMs, ...slots.map(({ endMs }) => endMs));
+  const x: Scale = (ms) => EDGE + ((ms - fromMs) / (untilMs - fromMs)) * (width - 2 * EDGE);
+  const hours = ticksOf(fromMs, untilMs, width);
+  return (
+    <div className="slots-grid">
+      <div className="slots-row slots-axis" aria-hidden="true">
+        <span className="slots-name">Station</span>
+        <div ref={box}>
+          <svg width={width} height={38} className="block">
+            {hours.map((ms, index) => (
+              <g key={ms}>
+                {(isDay(ms) || (index === 0 && !hours.some((one) => isDay(one) && x(one) - x(ms) < 110))) && (
+                  <text x={x(ms) - (index === 0 ? 8 : 0)} y={13} fontSize={12} fontWeight={600}>
+                    {index === 0 ? `${new Date(ms).getUTCFullYear()} day ` : 'day '}
+                    {dayText(ms)}
+                  </text>
+                )}
+                <text x={x(ms)} y={32} fontSize={12} fontWeight={600} textAnchor="middle">
+                  {minuteText(ms).slice(0, 2)}
+                </text>
+              </g>
+            ))}
+          </svg>
+        </div>
+        <span className="slots-answer">Answer</span>
+      </div>
+      {slots.map((slot) => (
+        <button
+          key={slot.stationCode}
+          type="button"
+          className="slots-row slots-pick"
+          aria-pressed={slot.stationCode === chosen}
+          aria-label={`${slot.stationName}: ${ANSWER_WORDS[slot.answer]}, ${minuteText(slot.startMs)} to ${minuteText(slot.endMs)} UT`}
+          onClick={() => onChoose(slot.stationCode)}
+        >
+          <span className="slots-name">
+            <b className="font-serif text-[19px]">{slot.stationCode}</b>
+            <span>{slot.stationName}</span>
+            <span className="text-ink2">{slot.timeZone}</span>
+          </span>
+          <svg width={width} height={ROW} className="block" aria-hidden="true">
+            {hours.map((ms) => (
+              <line
+                key={ms}
+                x1={x(ms)}
+                x2={x(ms)}
+                y1={0}
+                y2={ROW}
+                stroke={ms % (24 * HOUR) === 0 ? 'var(--ink)' : 'var(--hair)'}
+                strokeWidth={ms % (24 * HOUR) === 0 ? 1.75 : 1}
+              />
+            ))}
+            <Bar slot={slot} x={x} />
+            <Night slot={slot} x={x} fromMs={fromMs} untilMs={untilMs} />
+          </svg>
+          <span className="slots-answer">
+            <span className="flex items-center gap-2">
+              <AnswerBox code={slot.stationCode} name={slot.stationName} answer={slot.answer} />
+              <b className="first-letter:uppercase">{ANSWER_WORDS[slot.answer]}</b>
+            </span>
+            {slot.answeredAtMs !== null && (
+              <span className="text-ink2">
+                day {dayText(slot.answeredAtMs)}, {minuteText(slot.answeredAtMs)} UT
+                {slot.isOnBehalf && ', on behalf'}
+              </span>
+            )}
+            {slot.reason !== '' && <span className="text-ink2">“{slot.reason}”</span>}
+          </span>
+        </button>
+      ))}
+    </div>
+  );
+}
+
+function Bar({ slot, x }: { slot: SlotDto; x: Scale }) {
+  const { startMs, endMs, answer, without, scanCount, timeZone } = slot;
+  const [x1, x2] = [x(startMs), x(endMs)];
+  const isFilled = answer === 'confirmed' || answer === 'partly';
+  const box = { y: 14, height: 24 };
+  const zone = (ms: number) => formatInTimeZone(ms, timeZone, 'HH:mm zzz');
+  const words = `${spanText(Math.round((endMs - startMs) / 60_000) * 60)}, ${scanCount} ${scanCount === 1 ? 'scan' : 'scans'}`;
+  return (
+    <g>
+      <defs>
+        <pattern
+          id="slot-hatch"
+          width="5"
+          height="5"
+          patternUnits="userSpaceOnUse"
+          patternTransform="rotate(45)"
+        >
+          <rect width="5" height="5" fill="var(--sheet)" />
+          <line x1="0" y1="0" x2="0" y2="5" stroke="var(--ink2)" strokeWidth="1.4" />
+        </pattern>
+      </defs>
+      <rect
+        {...box}
+        x={x1}
+        width={Math.max(2, x2 - x1)}
+        fill={isFilled ? 'var(--ink)' : 'var(--sheet)'}
+        stroke={answer === 'declined' ? 'var(--verm)' : 'var(--ink)'}
+        strokeDasharray={answer === 'open' || answer === 'stale' ? '4 3' : undefined}
+      />
+      {without.map(([from, until]) => (
+        <rect
+          key={from}
+          {...box}
+          x={x(from)}
+          width={Math.max(2, x(until) - x(from))}
+          fill="url(#slot-hatch)"
+          stroke="var(--ink2)"
+        />
+      ))}
+      {answer === 'declined' && (
+        <line x1={x1} x2={x2} y1={box.y + box.height} y2={box.y} stroke="var(--verm)" strokeWidth={1.5} />
+      )}
+      {answer === 'stale' && <path d={`M${x2} ${box.y}h-12l12 12z`} fill="var(--ink)" />}
+      {x2 - x1 > 130 && (
+        <text
+          x={(x1 + x2) / 2}
+          y={box.y + 16}
+          fontSize={12}
+          fontWeight={600}
+          textAnchor="middle"
+          style={{
+            fill: isFilled ? 'var(--sheet)' : 'var(--ink)',
+            ...(answer === 'declined' && {
+              paintOrder: 'stroke',
+              stroke: 'var(--sheet)',
+              strokeWidth: 6,
+            }),
+          }}
+        >
+          {words}
+        </text>
+      )}
+      {(
+        [
+          [x1, startMs, 'start'],
+          [x2, endMs, 'end'],
+        ] as const
+      ).map(([at, ms, anchor]) => (
+        <g key={anchor}>
+          <text x={at} y={52} fontSize={12} fontWeight={640} textAnchor={anchor}>
+            {minuteText(ms)}
+          </text>
+          <text x={at} y={66} fontSize={11} textAnchor={anchor} className="fill-ink2">
+            {zone(ms)}
+          </text>
+        </g>
+      ))}
+    </g>
+  );
+}
+
+/** 22 to 06 in the station's own time: a thick line under the hours. */
+function Night({ slot, x, fromMs, untilMs }: { slot: SlotDto; x: Scale; fromMs: number; untilMs: number }) {
+  const hourAt = (ms: number) => Number(formatInTimeZone(ms, slot.timeZone, 'H'));
+  const first = Math.floor(fromMs / HOUR) * HOUR;
+  const count = Math.ceil((untilMs - first) / HOUR);
+  const nights = Array.from({ length: count }, (_, k) => first + k * HOUR).filter((ms) => {
+    const hour = hourAt(ms);
+    return hour >= 22 || hour < 6;
+  });
+  const path = nights
+    .map((ms) => `M${x(Math.max(ms, fromMs)).toFixed(1)} 76H${x(Math.min(ms + HOUR, untilMs)).toFixed(1)}`)
+    .join('');
+  return (
+    <g>
+      <line x1={x(fromMs)} x2={x(untilMs)} y1={76} y2={76} stroke="var(--rule)" />
+      <path d={path} stroke="var(--ink2)" strokeWidth={4} />
+    </g>
+  );
+}
+
+function ticksOf(fromMs: number, untilMs: number, width: number): number[] {
+  const hours = (untilMs - fromMs) / HOUR;
+  const every = [1, 2, 4, 6, 12, 24].find((step) => (hours / step) * 34 <= width) ?? 24;
+  const first = Math.ceil(fromMs / (every * HOUR));
+  const last = Math.floor(untilMs / (every * HOUR));
+  return Array.from({ length: last - first + 1 }, (_, k) => (first + k) * every * HOUR);
+}

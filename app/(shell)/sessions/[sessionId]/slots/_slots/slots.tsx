@@ -1,0 +1,142 @@
+'use client';
+
+import { useState } from 'react';
+import { AnswerBox } from '@/app/_ui/answer-box';
+import { ANSWER_WORDS } from '@/app/_ui/answer-words';
+import { EmptySheet } from '@/app/_ui/empty-sheet';
+import { spanText } from '@/app/_ui/format';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
+import { staveOrder } from '@/app/_ui/stave-order';
+import type { SlotBoard, SlotDto } from '@/src/data/slot/dto';
+import { fullTimeText } from '@/src/schedule/words';
+import { AnswerPanel } from './answer-panel';
+import { Board } from './board';
+import { OfferDialog } from './offer-dialog';
+import { Unsent } from './unsent';
+
+/** In the order of the staves. */
+const eastward = (slots: readonly SlotDto[]): SlotDto[] =>
+  staveOrder(
+    slots.map((slot) => ({ slot, code: slot.stationCode, site: { longitudeDeg: slot.longitudeDeg } })),
+  ).map(({ slot }) => slot);
+
+const KINDS = { offer: 'Offer', publish: 'Version' } as const;
+
+/** What each station is asked for, and what it said. */
+export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
+  const { session, offer, draft } = board;
+  const slots = eastward(board.slots);
+  const first = (slots.find(({ isOwn }) => isOwn) ?? slots[0])?.stationCode ?? null;
+  const [picked, setChosen] = useState<string | null>(null);
+  const chosen = picked ?? first;
+  const [asked, setAsked] = useState<'offer' | 'publish' | null>(null);
+  const slot = slots.find(({ stationCode }) => stationCode === chosen);
+  const dialog = (
+    <OfferDialog key={asked} board={board} kind={asked} toFix={toFix} onClose={() => setAsked(null)} />
+  );
+  const live = <RefreshOn address={liveKeys.stamp(session.id)} />;
+  if (!offer) {
+    return (
+      <>
+        {live}
+        <EmptySheet
+          heading="Nothing is offered yet"
+          codes={session.stations}
+          actions={
+            board.canOffer && (
+              <button
+                type="button"
+                className="btn btn-primary"
+                disabled={draft?.scans === 0}
+                onClick={() => setAsked('offer')}
+              >
+                Offer {session.code} to its stations
+              </button>
+            )
+          }
+        >
+          {draft?.scans === 0
+            ? 'The plan has no scan yet: lay it out on the timeline first. Each station then gets the hours it is needed for.'
+            : 'An offer asks each station for its hours, by mail and on its desk. Until then nobody at a station sees this plan.'}
+        </EmptySheet>
+        {dialog}
+      </>
+    );
+  }
+  const answered = slots.filter(({ answer }) => answer !== 'open').length;
+  const hours = (list: readonly { startMs: number; endMs: number }[]) =>
+    list.reduce((sum, { startMs, endMs }) => sum + (endMs - startMs) / 1000, 0);
+  const given = slots.reduce(
+    (sum, { answer, hours: said }) =>
+      answer === 'confirmed' || answer === 'partly'
+        ? sum + said.reduce((own, [from, until]) => own + (until - from) / 1000, 0)
+        : sum,
+    0,
+  );
+  return (
+    <>
+      {live}
+      <div className="slots-bar">
+        <h1 className="text-h2">
+          {KINDS[offer.kind]} {offer.number}, {fullTimeText(offer.madeAtMs)}
+        </h1>
+        <p className="help">
+          {offer.answerByMs === null ? 'no time to answer by' : `answer by ${fullTimeText(offer.answerByMs)}`}
+          {offer.isBehind && draft && <b> · the draft has moved on since</b>}
+        </p>
+        {board.canOffer && (
+          <div className="ml-auto flex gap-2">
+            <button type="button" className="btn" onClick={() => setAsked('publish')}>
+              Publish
+            </button>
+            <button type="button" className="btn btn-primary" onClick={() => setAsked('offer')}>
+              Offer the plan anew
+            </button>
+          </div>
+        )}
+      </div>
+      {board.unsent.length > 0 && <Unsent sessionId={session.id} unsent={board.unsent} />}
+      {offer.note !== '' && <p className="slots-note">{offer.note}</p>}
+      <div className="slots">
+        <section aria-label="Slots" className="slots-main">
+          <Board board={board} slots={slots} chosen={chosen} onChoose={setChosen} />
+          {board.unasked.length > 0 && (
+            <p className="help px-3.5 py-2">
+              Without a scan in this offer, so not asked: {board.unasked.join(', ')}.
+            </p>
+          )}
+          <ul className="slots-legend" aria-label="Looks of the answers">
+            {(['confirmed', 'partly', 'open', 'stale', 'declined'] as const).map((answer) => (
+              <li key={answer}>
+                <AnswerBox code={slots[0]?.stationCode ?? ''} answer={answer} /> {ANSWER_WORDS[answer]}
+              </li>
+            ))}
+          </ul>
+          <p className="slots-sums">
+            <span>
+              <b>
+                {answered} of {slots.length}
+              </b>{' '}
+              {slots.length === 1 ? 'station has' : 'stations have'} answered
+            </span>
+            <span>
+              <b>{spanText(given)}</b> given of {spanText(hours(slots))}
+            </span>
+          </p>
+        </section>
+        {slot && (
+          <aside aria-label="Chosen station" className="slots-side">
+            <AnswerPanel
+              key={`${slot.stationCode} ${offer.id}`}
+              sessionId={session.id}
+              offerId={offer.id}
+              slot={slot}
+            />
+          </aside>
+        )}
+      </div>
+      {dialog}
+    </>
+  );
+}

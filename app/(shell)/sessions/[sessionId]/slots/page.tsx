@@ -1,0 +1,37 @@
+import type { Metadata } from 'next';
+import { forbidden, notFound } from 'next/navigation';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { readTimeline } from '@/src/data/plan/read';
+import { readSlots } from '@/src/data/slot/read';
+import { checkPlan } from '@/src/schedule/checks';
+import { unpackPlan } from '@/src/schedule/plan-rows';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { SessionFrame } from '../_head/session-frame';
+import { planContextOf } from '../_plan/plan-context';
+import { Slots } from './_slots/slots';
+import './_slots/slots.css';
+
+export const metadata: Metadata = { title: 'Slots' };
+
+export default async function SlotsPage({ params }: { params: Promise<{ sessionId: string }> }) {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const { sessionId } = await params;
+  const answer = await readSlots(viewer, sessionId);
+  if (!answer.ok) {
+    if (answer.code === 'forbidden') forbidden();
+    notFound();
+  }
+  const { board } = answer;
+  const draft = board.canOffer ? await readTimeline(viewer, sessionId) : null;
+  const toFix = draft?.ok
+    ? checkPlan(unpackPlan(draft.timeline.plan), planContextOf(draft.timeline)).filter(
+        ({ severity }) => severity === 'fix',
+      ).length
+    : 0;
+  return (
+    <SessionFrame viewer={viewer} session={board.session} nowMs={board.nowMs}>
+      <Slots board={board} toFix={toFix} />
+    </SessionFrame>
+  );
+}
