@@ -15,6 +15,8 @@ const session = (code: string, startHours: number, stations = ['Af', 'Bm']): Ses
   stations,
   scanCount: 0,
   canReadPlan: true,
+  offer: null,
+  answers: {},
 });
 
 const all = [

@@ -49,7 +49,7 @@ describe('the demo’s timeline', () => {
       minElevationDeg: 5,
       leastSpareSeconds: 10,
       snrLimits: { doubtful: 7, fair: 10, strong: 20 },
-      clockRules: { noteAfterHours: 24, unknownAfterDays: 7, instrumentSigmaSeconds: 5e-7 },
+      clockRules: { noteAfterHours: 24, unknownAfterDays: 7, instrumentSigmaSeconds: 3e-7 },
     });
     expect(Object.keys(timeline.revs)).toHaveLength(plan.scans.length + plan.groups.length + 1);
     expect(timeline).toMatchObject({ seq: 0, steps: { undo: null, redo: null } });

@@ -36,19 +36,22 @@ type Ready = {
 export const takeAct = (viewer: Viewer, key: string, body: unknown): Promise<Taken | ActFailure> =>
   answer(async () => {
     const act = parseAct(body);
-    return transact(async (tx) => {
-      const session = await fetchSession(tx, viewer, key);
-      const role = actingRole(viewer, 'plan.edit', subjectOf(session));
-      if (role === null) throw forbiddenFor('plan.edit');
-      const acting = { tx, session, viewer, role };
-      const known = await findAct(tx, session.id, act.actId);
-      if (known) return resent(acting, known);
-      if (session.state === 'closed' || session.state === 'cancelled') {
-        throw conflict({ reason: 'closed', message: `${session.code} is ${session.state}: its plan stays.` });
-      }
-      return take(acting, act.kind === 'do' ? await readyDo(acting, act) : await readyStep(acting, act));
-    });
+    return transact((tx) => takeIn(tx, viewer, key, act));
   });
+
+/** The same inside a transaction that does more. */
+export async function takeIn(tx: Tx, viewer: Viewer, key: string, act: ActInput): Promise<Taken> {
+  const session = await fetchSession(tx, viewer, key);
+  const role = actingRole(viewer, 'plan.edit', subjectOf(session));
+  if (role === null) throw forbiddenFor('plan.edit');
+  const acting = { tx, session, viewer, role };
+  const known = await findAct(tx, session.id, act.actId);
+  if (known) return resent(acting, known);
+  if (session.state === 'closed' || session.state === 'cancelled') {
+    throw conflict({ reason: 'closed', message: `${session.code} is ${session.state}: its plan stays.` });
+  }
+  return take(acting, act.kind === 'do' ? await readyDo(acting, act) : await readyStep(acting, act));
+}
 
 async function readyDo(
   { tx, session, viewer }: Acting,

@@ -1,4 +1,5 @@
 import type { sessions } from '../../../db/schema/sessions';
+import type { Answer } from '../../schedule/slots';
 
 type StoredState = (typeof sessions.$inferSelect)['state'];
 
@@ -19,6 +20,10 @@ export type SessionListItem = SessionHead & {
   /** null where the viewer may not see the draft plan */
   scanCount: number | null;
   canReadPlan: boolean;
+  /** what the stations were asked or told last; null before the first offer */
+  offer: { number: number; kind: 'offer' | 'publish' } | null;
+  /** to it, by station */
+  answers: Readonly<Record<string, Answer>>;
 };
 
 export function derivedState(
