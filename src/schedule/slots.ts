@@ -2,7 +2,7 @@ import { stationOnMs, type Plan, type StationCode } from './plan';
 
 /** Before the first start and after the last stop; common practice, no source. */
 export const LEAD_SECONDS = 15 * 60;
-export const TAIL_SECONDS = 5 * 60;
+export const TAIL_SECONDS = 10 * 60;
 
 /** Hours [startMs, endMs). */
 export type Hours = readonly [startMs: number, endMs: number];
@@ -73,6 +73,13 @@ export function hoursWithout(span: Hours, reply: Pick<Reply, 'hours'> | null): H
   }
   if (fromMs < span[1]) gaps.push([fromMs, span[1]]);
   return gaps.filter(([startMs, endMs]) => endMs > startMs);
+}
+
+/** The part of some hours that lies in a span; none is empty. */
+export function within([startMs, endMs]: Hours, hours: readonly Hours[]): Hours[] {
+  return hours
+    .map(([from, until]): Hours => [Math.max(from, startMs), Math.min(until, endMs)])
+    .filter(([from, until]) => until > from);
 }
 
 /** What it costs that a station is away: its scans that are hit, whole or in part. */

@@ -26,6 +26,8 @@ const PAGES: readonly Page[] = [
   { kind: 'session', label: 'Fringes', verb: 'plan.read-draft', segment: 'fringes' },
   { kind: 'session', label: 'Coverage', verb: 'plan.read-draft', segment: 'coverage' },
   { kind: 'session', label: 'Slots', verb: 'slot.read', segment: 'slots' },
+  { kind: 'session', label: 'Comments', verb: 'session.read', segment: 'comments' },
+  { kind: 'session', label: 'Session', verb: 'session.edit', segment: 'settings' },
 ];
 
 /**

@@ -38,5 +38,13 @@ async function Sessions({ viewer, now, find }: { viewer: Viewer; now: number; fi
   const named = await listStations(viewer, codes);
   if (!named.ok) forbidden();
   const stations = staveOrder(named.stations).map(({ code, name }) => ({ code, name }));
-  return <Listing sessions={answer.sessions} stations={stations} nowMs={now} find={find} />;
+  return (
+    <Listing
+      sessions={answer.sessions}
+      stations={stations}
+      nowMs={now}
+      find={find}
+      canMake={answer.canMake}
+    />
+  );
 }

@@ -1,6 +1,19 @@
 import type { Answer, Hours } from '../../schedule/slots';
 import type { SessionHead } from '../session/dto';
 
+/** A word of a station on its slot, as it was said. */
+export type SlotWord = {
+  atMs: number;
+  /** of the offer that it answers */
+  number: number;
+  kind: 'offer' | 'publish';
+  reply: 'confirmed' | 'partly' | 'declined';
+  hours: Hours[];
+  reason: string;
+  role: string;
+  isOnBehalf: boolean;
+};
+
 export type SlotDto = {
   stationCode: string;
   stationName: string;
@@ -21,6 +34,10 @@ export type SlotDto = {
   scans: { startMs: number; stopMs: number; number: string; source: string }[];
   /** a nodding group counts once */
   scanCount: number;
+  /** names of the modes it records in */
+  modes: string[];
+  /** all that the station said, newest first */
+  words: SlotWord[];
   /** whether the viewer may answer, and how */
   canReply: boolean;
   isOwn: boolean;
@@ -50,4 +67,22 @@ export type SlotBoard = {
   /** null where the viewer may not see the draft */
   draft: { scans: number } | null;
   nowMs: number;
+};
+
+/** A slot in a list over the sessions. */
+export type ListedSlot = Pick<
+  SlotDto,
+  | 'stationCode'
+  | 'stationName'
+  | 'timeZone'
+  | 'startMs'
+  | 'endMs'
+  | 'answer'
+  | 'hours'
+  | 'reason'
+  | 'isOnBehalf'
+> & {
+  sessionCode: string;
+  title: string;
+  answerByMs: number | null;
 };

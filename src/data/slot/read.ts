@@ -1,11 +1,14 @@
 import 'server-only';
-import { eq, max, sql } from 'drizzle-orm';
+import { desc, eq, max, sql } from 'drizzle-orm';
 import { db, type Database } from '../../../db/client';
 import { journal } from '../../../db/schema/journal';
+import { offers } from '../../../db/schema/offers';
 import { scans } from '../../../db/schema/scans';
+import { slotReplies } from '../../../db/schema/slot-replies';
 import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
 import { unpackPlan } from '../../schedule/plan-rows';
+import type { Hours } from '../../schedule/slots';
 import { stationOnMs, type Plan } from '../../schedule/plan';
 import { countBlocks } from '../../schedule/blocks';
 import { scanNumbers } from '../../schedule/scan-numbers';
@@ -15,7 +18,7 @@ import { newestSnapshot, type Snapshot } from '../offer/read';
 import { derivedState } from '../session/dto';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import { answersOf, type StationAnswer } from './answers';
-import type { SlotBoard, SlotDto } from './dto';
+import type { SlotBoard, SlotDto, SlotWord } from './dto';
 
 /** The slots of a session as they were offered last, with what each station said. */
 export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; board: SlotBoard } | Failure> =>
@@ -24,6 +27,7 @@ export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; boar
     if (!can(viewer, 'slot.read', subjectOf(session))) throw forbiddenFor('slot.read');
     const snapshot = await newestSnapshot(db(), session.id);
     const answers = await answersOf(db(), [session.id]);
+    const words = await wordsOf(db(), session.id);
     const now = nowMs();
     const isOpen = session.state !== 'closed' && session.state !== 'cancelled';
     const { id, code, title, startMs, lengthSeconds, stations } = session;
@@ -35,7 +39,12 @@ export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; boar
         offer: snapshot && (await offerOf(db(), session, snapshot)),
         span: { startMs, endMs: startMs + lengthSeconds * 1000 },
         slots:
-          snapshot && plan ? answers.map((one) => slotOf(viewer, session, snapshot, plan, one, isOpen)) : [],
+          snapshot && plan
+            ? answers.map((one) => ({
+                ...slotOf(viewer, session, snapshot, plan, one, isOpen),
+                words: words.get(one.station) ?? [],
+              }))
+            : [],
         unasked: snapshot
           ? stations.filter((station) => !answers.some((one) => one.station === station))
           : [],
@@ -50,6 +59,30 @@ export const readSlots = (viewer: Viewer, key: string): Promise<{ ok: true; boar
       },
     };
   });
+
+/** Each word of each station, newest first. */
+async function wordsOf(from: Database, sessionId: string): Promise<Map<string, SlotWord[]>> {
+  const rows = await from
+    .select({
+      station: slotReplies.stationCode,
+      atMs: slotReplies.atMs,
+      number: offers.number,
+      kind: offers.kind,
+      reply: slotReplies.reply,
+      hours: slotReplies.hours,
+      reason: slotReplies.reason,
+      role: slotReplies.role,
+      isOnBehalf: slotReplies.isOnBehalf,
+    })
+    .from(slotReplies)
+    .innerJoin(offers, eq(offers.id, slotReplies.offerId))
+    .where(eq(slotReplies.sessionId, sessionId))
+    .orderBy(desc(slotReplies.seq));
+  const words = new Map<string, SlotWord[]>();
+  for (const { station, hours, ...word } of rows)
+    words.set(station, [...(words.get(station) ?? []), { ...word, hours: JSON.parse(hours) as Hours[] }]);
+  return words;
+}
 
 /** A nodding group counts once. */
 async function countDraft(from: Database, sessionId: string): Promise<number> {
@@ -79,7 +112,7 @@ function slotOf(
   plan: Plan,
   one: StationAnswer,
   isOpen: boolean,
-): SlotDto {
+): Omit<SlotDto, 'words'> {
   const station = snapshot.stations.find(({ code }) => code === one.station);
   const subject = { sessionId: session.id, stationCodes: [one.station] };
   const numbers = scanNumbers(plan);
@@ -104,6 +137,7 @@ function slotOf(
       return [{ ...stationOnMs(scan, member), number: numbers.get(scan.id) ?? '', source }];
     }),
     scanCount: countBlocks(plan, one.station),
+    modes: snapshot.modes.filter(({ id }) => one.modeIds.includes(id)).map(({ name }) => name),
     canReply: isOpen && can(viewer, 'slot.reply', subject),
     isOwn: viewer.grants.some(({ role, stationCode }) => role === 'operator' && stationCode === one.station),
   };

@@ -1,5 +1,6 @@
 import { dayText } from '@/app/_ui/format';
 import type { SessionListItem } from '@/src/data/session/dto';
+import type { Answer } from '@/src/schedule/slots';
 import { MS_PER_DAY } from '@/src/units/time';
 import type { ListedStation } from './listing';
 
@@ -22,6 +23,10 @@ export function Days({ sessions, stations, nowMs }: DaysProps) {
   const pitch = stations.length > 12 ? 5 : 9;
   const foot = FIRST + Math.max(6, stations.length) * pitch + 1;
   const inView = sessions.filter((s) => s.startMs < lastMs && s.startMs + s.lengthSeconds * 1000 > firstMs);
+  // a session's name would stand on the word
+  const isNamed = inView.some(
+    ({ startMs }) => nowMs > startMs - 0.8 * MS_PER_DAY && nowMs < startMs + 2 * MS_PER_DAY,
+  );
   return (
     <svg className="days" height={foot + 20} aria-hidden="true">
       {Array.from({ length: DAYS_SHOWN + 1 }, (_, day) => (
@@ -40,14 +45,13 @@ export function Days({ sessions, stations, nowMs }: DaysProps) {
           <g key={session.id}>
             {stations.map(({ code }, index) =>
               session.stations.includes(code) ? (
-                <rect
+                <Block
                   key={code}
+                  answer={session.answers[code]}
                   x={x(startMs)}
                   y={FIRST + index * pitch - pitch / 3 + 0.5}
                   height={(pitch * 2) / 3}
-                  style={{ width }}
-                  fill="var(--sunk)"
-                  stroke="var(--ink2)"
+                  width={width}
                 />
               ) : null,
             )}
@@ -58,10 +62,44 @@ export function Days({ sessions, stations, nowMs }: DaysProps) {
         );
       })}
       <line x1={x(nowMs)} x2={x(nowMs)} y1="24" y2={foot} stroke="var(--ink)" strokeWidth={2} />
-      <text x={x(nowMs)} y={foot + 13} textAnchor="middle" fontSize={11.5} fontWeight={600}>
-        now
-      </text>
+      {!isNamed && (
+        <text x={x(nowMs)} y={foot + 13} textAnchor="middle" fontSize={11.5} fontWeight={600}>
+          now
+        </text>
+      )}
     </svg>
+  );
+}
+
+/** Filled, half, dashed, struck: as the station answered; plain before it was asked. */
+function Block({
+  answer,
+  x,
+  y,
+  height,
+  width,
+}: {
+  answer: Answer | undefined;
+  x: string;
+  y: number;
+  height: number;
+  width: string;
+}) {
+  const box = { x, y, height };
+  const isFilled = answer === 'confirmed';
+  const isDashed = answer === 'open' || answer === 'stale';
+  const stroke = answer === 'declined' ? 'var(--verm)' : isDashed ? 'var(--ink2)' : 'var(--ink)';
+  return (
+    <>
+      <rect
+        {...box}
+        style={{ width }}
+        fill={isFilled ? 'var(--ink)' : answer ? 'var(--sheet)' : 'var(--sunk)'}
+        stroke={answer ? stroke : 'var(--ink2)'}
+        strokeDasharray={isDashed ? '2 2' : undefined}
+      />
+      {answer === 'partly' && <rect {...box} style={{ width: `calc(${width} / 2)` }} fill="var(--ink)" />}
+    </>
   );
 }
 

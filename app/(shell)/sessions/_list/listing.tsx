@@ -1,6 +1,8 @@
 'use client';
 
+import Link from 'next/link';
 import { useState } from 'react';
+import { AnswerLegend } from '@/app/_ui/answer-legend';
 import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { Segments } from '@/app/_ui/segments';
 import type { SessionListItem } from '@/src/data/session/dto';
@@ -16,6 +18,7 @@ type ListingProps = {
   stations: readonly ListedStation[];
   nowMs: number;
   find: string;
+  canMake: boolean;
 };
 
 const SHOWS = [
@@ -24,7 +27,7 @@ const SHOWS = [
   { value: 'all', label: 'All' },
 ] as const;
 
-export function Listing({ sessions, stations, nowMs, find: asked }: ListingProps) {
+export function Listing({ sessions, stations, nowMs, find: asked, canMake }: ListingProps) {
   const [show, setShow] = useState<Show>(asked === '' ? 'ahead' : 'all');
   const [find, setFind] = useState(asked);
   const shown = shownSessions(sessions, { show, find, nowMs });
@@ -51,12 +54,20 @@ export function Listing({ sessions, stations, nowMs, find: asked }: ListingProps
             />
           </>
         )}
+        {canMake && (
+          <Link href="/sessions/new" className="btn btn-primary ml-auto">
+            New session
+          </Link>
+        )}
       </div>
       <Days sessions={sessions} stations={stations} nowMs={nowMs} />
       {shown.length > 0 && <SessionTable sessions={shown} stations={stations} nowMs={nowMs} />}
+      {shown.some(({ offer }) => offer !== null) && <AnswerLegend code={stations[0]?.code ?? ''} />}
       {sessions.length === 0 && (
         <EmptySheet level={2} heading="No sessions yet">
-          None is planned that you have a part in. It will stand here as soon as a scheduler has made it.
+          {canMake
+            ? 'Make the first one: its code, its hours, the stations and the sources.'
+            : 'None is planned that you have a part in. It will stand here as soon as a scheduler has made it.'}
         </EmptySheet>
       )}
       {sessions.length > 0 && shown.length === 0 && (

@@ -3,6 +3,7 @@ import Link from 'next/link';
 import { Chip } from '@/app/_ui/chip';
 import { dayText, minuteText, spanText } from '@/app/_ui/format';
 import { fullTimeText } from '@/src/schedule/words';
+import { AnswerBox } from '@/app/_ui/answer-box';
 import { StationCode } from '@/app/_ui/station-code';
 import type { SessionListItem } from '@/src/data/session/dto';
 import { utcParts } from '@/src/units/time';
@@ -61,13 +62,23 @@ export function SessionTable({ sessions, stations, nowMs }: SessionTableProps) {
                 <span className="list-stations">
                   {stations
                     .filter(({ code }) => session.stations.includes(code))
-                    .map(({ code, name }) => (
-                      <StationCode key={code} code={code} name={name} />
-                    ))}
+                    .map(({ code, name }) => {
+                      const answer = session.answers[code];
+                      return answer ? (
+                        <AnswerBox key={code} code={code} name={name} answer={answer} />
+                      ) : (
+                        <StationCode key={code} code={code} name={name} />
+                      );
+                    })}
                 </span>
               </td>
               <td>
                 <Chip>{session.state}</Chip>
+                {session.offer && (
+                  <div className="pt-1 text-small text-ink2">
+                    {session.offer.kind === 'publish' ? 'version' : 'offer'} {session.offer.number}
+                  </div>
+                )}
               </td>
               {hasScans && <td className="num from-narrow">{scansText(session.scanCount)}</td>}
               <td className="from-desk list-begins">
@@ -82,9 +93,9 @@ export function SessionTable({ sessions, stations, nowMs }: SessionTableProps) {
 }
 
 function Title({ session }: { session: SessionListItem }) {
-  if (!session.canReadPlan) return <b>{session.title}</b>;
+  const page = session.canReadPlan ? 'timeline' : 'slots';
   return (
-    <Link href={`/sessions/${encodeURIComponent(session.code)}/timeline` as Route}>
+    <Link href={`/sessions/${encodeURIComponent(session.code)}/${page}` as Route}>
       <b>{session.title}</b>
     </Link>
   );

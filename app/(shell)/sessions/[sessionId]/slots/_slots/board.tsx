@@ -3,9 +3,11 @@
 import { formatInTimeZone } from 'date-fns-tz';
 import { AnswerBox } from '@/app/_ui/answer-box';
 import { ANSWER_WORDS } from '@/app/_ui/answer-words';
-import { dayText, minuteText, spanText } from '@/app/_ui/format';
+import { dayText, minuteText } from '@/app/_ui/format';
 import { useWidth } from '@/app/_ui/use-width';
 import type { SlotBoard, SlotDto } from '@/src/data/slot/dto';
+import type { Hours } from '@/src/schedule/slots';
+import { Bar, type Drawn, type Scale } from './bar';
 
 const HOUR = 3_600_000;
 const EDGE = 10;
@@ -15,13 +17,14 @@ const isDay = (ms: number): boolean => ms % (24 * HOUR) === 0;
 type Props = {
   board: SlotBoard;
   slots: readonly SlotDto[];
+  /** a slot as it is, or as the answer that is being made would leave it */
+  drawnOf: (slot: SlotDto) => Drawn;
   chosen: string | null;
   onChoose: (code: string) => void;
 };
-type Scale = (ms: number) => number;
 
 /** One row a station: its hours on the session's axis, in UT and in its own time, and its answer. */
-export function Board({ board, slots, chosen, onChoose }: Props) {
+export function Board({ board, slots, drawnOf, chosen, onChoose }: Props) {
   const [box, width] = useWidth<HTMLDivElement>(600);
   const { span } = board;
   const fromMs = Math.min(span.startMs, ...slots.map(({ startMs }) => startMs));
@@ -77,7 +80,7 @@ export function Board({ board, slots, chosen, onChoose }: Props) {
                 strokeWidth={ms % (24 * HOUR) === 0 ? 1.75 : 1}
               />
             ))}
-            <Bar slot={slot} x={x} />
+            <Bar slot={drawnOf(slot)} x={x} />
             <Night slot={slot} x={x} fromMs={fromMs} untilMs={untilMs} />
           </svg>
           <span className="slots-answer">
@@ -91,6 +94,10 @@ export function Board({ board, slots, chosen, onChoose }: Props) {
                 {slot.isOnBehalf && ', on behalf'}
               </span>
             )}
+            {slot.answer === 'stale' && (
+              <span className="text-ink2">said yes to {hoursText(slot.hours)}</span>
+            )}
+            {slot.answer === 'partly' && <span className="text-ink2">cannot {hoursText(slot.without)}</span>}
             {slot.reason !== '' && <span className="text-ink2">“{slot.reason}”</span>}
           </span>
         </button>
@@ -99,86 +106,9 @@ export function Board({ board, slots, chosen, onChoose }: Props) {
   );
 }
 
-function Bar({ slot, x }: { slot: SlotDto; x: Scale }) {
-  const { startMs, endMs, answer, without, scanCount, timeZone } = slot;
-  const [x1, x2] = [x(startMs), x(endMs)];
-  const isFilled = answer === 'confirmed' || answer === 'partly';
-  const box = { y: 14, height: 24 };
-  const zone = (ms: number) => formatInTimeZone(ms, timeZone, 'HH:mm zzz');
-  const words = `${spanText(Math.round((endMs - startMs) / 60_000) * 60)}, ${scanCount} ${scanCount === 1 ? 'scan' : 'scans'}`;
-  return (
-    <g>
-      <defs>
-        <pattern
-          id="slot-hatch"
-          width="5"
-          height="5"
-          patternUnits="userSpaceOnUse"
-          patternTransform="rotate(45)"
-        >
-          <rect width="5" height="5" fill="var(--sheet)" />
-          <line x1="0" y1="0" x2="0" y2="5" stroke="var(--ink2)" strokeWidth="1.4" />
-        </pattern>
-      </defs>
-      <rect
-        {...box}
-        x={x1}
-        width={Math.max(2, x2 - x1)}
-        fill={isFilled ? 'var(--ink)' : 'var(--sheet)'}
-        stroke={answer === 'declined' ? 'var(--verm)' : 'var(--ink)'}
-        strokeDasharray={answer === 'open' || answer === 'stale' ? '4 3' : undefined}
-      />
-      {without.map(([from, until]) => (
-        <rect
-          key={from}
-          {...box}
-          x={x(from)}
-          width={Math.max(2, x(until) - x(from))}
-          fill="url(#slot-hatch)"
-          stroke="var(--ink2)"
-        />
-      ))}
-      {answer === 'declined' && (
-        <line x1={x1} x2={x2} y1={box.y + box.height} y2={box.y} stroke="var(--verm)" strokeWidth={1.5} />
-      )}
-      {answer === 'stale' && <path d={`M${x2} ${box.y}h-12l12 12z`} fill="var(--ink)" />}
-      {x2 - x1 > 130 && (
-        <text
-          x={(x1 + x2) / 2}
-          y={box.y + 16}
-          fontSize={12}
-          fontWeight={600}
-          textAnchor="middle"
-          style={{
-            fill: isFilled ? 'var(--sheet)' : 'var(--ink)',
-            ...(answer === 'declined' && {
-              paintOrder: 'stroke',
-              stroke: 'var(--sheet)',
-              strokeWidth: 6,
-            }),
-          }}
-        >
-          {words}
-        </text>
-      )}
-      {(
-        [
-          [x1, startMs, 'start'],
-          [x2, endMs, 'end'],
-        ] as const
-      ).map(([at, ms, anchor]) => (
-        <g key={anchor}>
-          <text x={at} y={52} fontSize={12} fontWeight={640} textAnchor={anchor}>
-            {minuteText(ms)}
-          </text>
-          <text x={at} y={66} fontSize={11} textAnchor={anchor} className="fill-ink2">
-            {zone(ms)}
-          </text>
-        </g>
-      ))}
-    </g>
-  );
-}
+/** "22:50–23:40" */
+const hoursText = (hours: readonly Hours[]): string =>
+  hours.map(([from, until]) => `${minuteText(from)}–${minuteText(until)}`).join(', ');
 
 /** 22 to 06 in the station's own time: a thick line under the hours. */
 function Night({ slot, x, fromMs, untilMs }: { slot: SlotDto; x: Scale; fromMs: number; untilMs: number }) {

@@ -1,13 +1,13 @@
 'use client';
 
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { Dialog } from '@/app/_ui/dialog';
 import { Field } from '@/app/_ui/field';
-import { newId } from '@/app/_ui/new-id';
 import { showToast } from '@/app/_ui/toast';
 import type { SlotBoard } from '@/src/data/slot/dto';
 import { readTimeEntry } from '@/src/units/entry';
 import { offer } from '../actions';
+import { useActId } from './use-act-id';
 
 type Props = { board: SlotBoard; kind: 'offer' | 'publish' | null; toFix: number; onClose: () => void };
 
@@ -20,7 +20,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
   const [fields, setFields] = useState<Record<string, string>>({});
   const [trouble, setTrouble] = useState<string | null>(null);
   const [isSending, setIsSending] = useState(false);
-  const id = useRef<string | null>(null);
+  const idOf = useActId();
   const isHeld = toFix > 0 && !isTicked;
 
   const send = async () => {
@@ -28,24 +28,26 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
       answerBy.trim() === '' ? null : readTimeEntry(answerBy, Math.min(nowMs + 43_200_000, session.startMs));
     setTrouble(null);
     if (by && !by.ok) return setFields({ answerByMs: by.message });
-    id.current ??= newId();
+    const body = { kind, note, answerByMs: by?.value ?? null };
     setIsSending(true);
-    const answer = await offer(session.id, {
-      id: id.current,
-      kind,
-      note,
-      answerByMs: by?.value ?? null,
-    }).finally(() => setIsSending(false));
-    if (answer.ok) {
-      id.current = null;
-      const told = `${answer.sent} ${answer.sent === 1 ? 'message' : 'messages'} sent`;
-      const word = kind === 'publish' ? 'Version' : 'Offer';
-      showToast({ message: `${word} ${answer.number} is out: ${told}.` });
-      return onClose();
+    try {
+      const answer = await offer(session.id, { ...body, id: idOf(body) });
+      if (answer.ok) {
+        const word = kind === 'publish' ? 'Version' : 'Offer';
+        const told = `${answer.sent} ${answer.sent === 1 ? 'message' : 'messages'} sent`;
+        const left = answer.failed.length > 0 ? `, ${answer.failed.length} not sent` : '';
+        showToast({ message: `${word} ${answer.number} is out: ${told}${left}.` });
+        return onClose();
+      }
+      const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
+      if (back.length === 0) setTrouble(answer.message);
+      setFields(Object.fromEntries(back) as Record<string, string>);
+    } catch (error) {
+      if (!(error instanceof TypeError)) throw error;
+      setTrouble('There is no line. What you typed is kept: send it again when the line is back.');
+    } finally {
+      setIsSending(false);
     }
-    const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
-    if (back.length === 0) setTrouble(answer.message);
-    setFields(Object.fromEntries(back) as Record<string, string>);
   };
 
   const problems = `${toFix} ${toFix === 1 ? 'problem' : 'problems'}`;

@@ -1,8 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { AnswerBox } from '@/app/_ui/answer-box';
-import { ANSWER_WORDS } from '@/app/_ui/answer-words';
+import { AnswerLegend } from '@/app/_ui/answer-legend';
 import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { spanText } from '@/app/_ui/format';
 import { liveKeys } from '@/app/_ui/live-keys';
@@ -10,7 +9,9 @@ import RefreshOn from '@/app/_ui/refresh-on';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { SlotBoard, SlotDto } from '@/src/data/slot/dto';
 import { fullTimeText } from '@/src/schedule/words';
+import type { Preview } from './answer-form';
 import { AnswerPanel } from './answer-panel';
+import { Hatch } from './bar';
 import { Board } from './board';
 import { OfferDialog } from './offer-dialog';
 import { Unsent } from './unsent';
@@ -20,6 +21,12 @@ const eastward = (slots: readonly SlotDto[]): SlotDto[] =>
   staveOrder(
     slots.map((slot) => ({ slot, code: slot.stationCode, site: { longitudeDeg: slot.longitudeDeg } })),
   ).map(({ slot }) => slot);
+
+const answerByText = (ms: number, nowMs: number): string => {
+  const hours = Math.round(Math.abs(ms - nowMs) / 3_600_000);
+  const span = hours < 48 ? `${hours} h` : `${Math.round(hours / 24)} days`;
+  return `answer by ${fullTimeText(ms)}, ${ms < nowMs ? `${span} ago` : `in ${span}`}`;
+};
 
 const KINDS = { offer: 'Offer', publish: 'Version' } as const;
 
@@ -31,7 +38,13 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
   const [picked, setChosen] = useState<string | null>(null);
   const chosen = picked ?? first;
   const [asked, setAsked] = useState<'offer' | 'publish' | null>(null);
+  const [preview, setPreview] = useState<Preview | null>(null);
   const slot = slots.find(({ stationCode }) => stationCode === chosen);
+  const drawnOf = (one: SlotDto) => (one.stationCode === chosen && preview ? { ...one, ...preview } : one);
+  const choose = (code: string) => {
+    if (code !== chosen) setPreview(null);
+    setChosen(code);
+  };
   const dialog = (
     <OfferDialog key={asked} board={board} kind={asked} toFix={toFix} onClose={() => setAsked(null)} />
   );
@@ -74,6 +87,11 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
         : sum,
     0,
   );
+  const toAsk = slots.filter(({ answer }) => answer === 'stale');
+  const declined = slots.reduce(
+    (sum, { without }) => sum + without.reduce((own, [from, until]) => own + (until - from) / 1000, 0),
+    0,
+  );
   return (
     <>
       {live}
@@ -82,7 +100,7 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
           {KINDS[offer.kind]} {offer.number}, {fullTimeText(offer.madeAtMs)}
         </h1>
         <p className="help">
-          {offer.answerByMs === null ? 'no time to answer by' : `answer by ${fullTimeText(offer.answerByMs)}`}
+          {offer.answerByMs === null ? 'no time to answer by' : answerByText(offer.answerByMs, board.nowMs)}
           {offer.isBehind && draft && <b> · the draft has moved on since</b>}
         </p>
         {board.canOffer && (
@@ -98,21 +116,16 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
       </div>
       {board.unsent.length > 0 && <Unsent sessionId={session.id} unsent={board.unsent} />}
       {offer.note !== '' && <p className="slots-note">{offer.note}</p>}
+      <Hatch />
       <div className="slots">
         <section aria-label="Slots" className="slots-main">
-          <Board board={board} slots={slots} chosen={chosen} onChoose={setChosen} />
+          <Board board={board} slots={slots} drawnOf={drawnOf} chosen={chosen} onChoose={choose} />
           {board.unasked.length > 0 && (
             <p className="help px-3.5 py-2">
               Without a scan in this offer, so not asked: {board.unasked.join(', ')}.
             </p>
           )}
-          <ul className="slots-legend" aria-label="Looks of the answers">
-            {(['confirmed', 'partly', 'open', 'stale', 'declined'] as const).map((answer) => (
-              <li key={answer}>
-                <AnswerBox code={slots[0]?.stationCode ?? ''} answer={answer} /> {ANSWER_WORDS[answer]}
-              </li>
-            ))}
-          </ul>
+          <AnswerLegend code={slots[0]?.stationCode ?? ''} />
           <p className="slots-sums">
             <span>
               <b>
@@ -123,6 +136,16 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
             <span>
               <b>{spanText(given)}</b> given of {spanText(hours(slots))}
             </span>
+            {toAsk.length > 0 && (
+              <span>
+                <b>{spanText(hours(toAsk))}</b> to ask again
+              </span>
+            )}
+            {declined > 0 && (
+              <span>
+                <b>{spanText(declined)}</b> declined
+              </span>
+            )}
           </p>
         </section>
         {slot && (
@@ -131,7 +154,10 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
               key={`${slot.stationCode} ${offer.id}`}
               sessionId={session.id}
               offerId={offer.id}
+              span={board.span}
               slot={slot}
+              drawn={drawnOf(slot)}
+              onPreview={setPreview}
             />
           </aside>
         )}

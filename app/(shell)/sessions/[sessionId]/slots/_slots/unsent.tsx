@@ -10,8 +10,15 @@ export function Unsent({ sessionId, unsent }: { sessionId: string; unsent: SlotB
   const [isSending, setIsSending] = useState(false);
   const again = async () => {
     setIsSending(true);
-    const answer = await resend(sessionId).finally(() => setIsSending(false));
-    if (answer.ok) showToast({ message: `${answer.sent} of ${unsent.length} sent now.` });
+    try {
+      const answer = await resend(sessionId);
+      showToast({ message: answer.ok ? `${answer.sent} of ${unsent.length} sent now.` : answer.message });
+    } catch (error) {
+      if (!(error instanceof TypeError)) throw error;
+      showToast({ message: 'There is no line. Send again when it is back.' });
+    } finally {
+      setIsSending(false);
+    }
   };
   const [first] = unsent;
   return (

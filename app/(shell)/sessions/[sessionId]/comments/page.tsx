@@ -1,0 +1,22 @@
+import type { Metadata } from 'next';
+import { notFound } from 'next/navigation';
+import { ToSignIn } from '@/app/_ui/to-sign-in';
+import { readComments } from '@/src/data/comment/read';
+import { currentViewer } from '@/src/viewer/current-viewer';
+import { SessionFrame } from '../_head/session-frame';
+import { Comments } from './_comments/comments';
+
+export const metadata: Metadata = { title: 'Comments' };
+
+export default async function CommentsPage({ params }: { params: Promise<{ sessionId: string }> }) {
+  const viewer = await currentViewer();
+  if (!viewer) return <ToSignIn />;
+  const answer = await readComments(viewer, (await params).sessionId);
+  if (!answer.ok) notFound();
+  const { session, comments, canWrite, nowMs } = answer;
+  return (
+    <SessionFrame viewer={viewer} session={session} nowMs={nowMs}>
+      <Comments session={session} comments={comments} canWrite={canWrite} />
+    </SessionFrame>
+  );
+}
