@@ -1,9 +1,12 @@
+import type { Route } from 'next';
 import { redirect } from 'next/navigation';
 import { ToSignIn } from './_ui/to-sign-in';
+import { landingFor } from '@/src/data/session/landing';
 import { currentViewer } from '@/src/viewer/current-viewer';
 
-/** Every role of today lands on the sessions. */
+/** Sends each role to where its work begins. */
 export default async function Home() {
-  if (await currentViewer()) redirect('/sessions');
+  const viewer = await currentViewer();
+  if (viewer) redirect((await landingFor(viewer)) as Route);
   return <ToSignIn />;
 }

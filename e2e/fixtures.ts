@@ -74,7 +74,9 @@ async function saveState(browser: Browser, { person, file, baseURL }: Saving): P
   const page = await context.newPage();
   await page.goto('/sign-in');
   await signIn(page, emailOf(person));
-  await expect(page.getByRole('heading', { name: 'Sessions' })).toBeVisible();
+  await expect(
+    page.getByRole('button', { name: /^(Administrator|Scheduler|Operator|Correlator|Investigator)/ }),
+  ).toBeVisible();
   await context.storageState({ path: file });
   await context.close();
 }

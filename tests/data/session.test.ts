@@ -7,6 +7,7 @@ import { writeComment } from '@/src/data/comment/write';
 import { offerPlan } from '@/src/data/offer/write';
 import { readTimeline } from '@/src/data/plan/read';
 import { takeAct } from '@/src/data/plan/write';
+import { landingFor } from '@/src/data/session/landing';
 import { readSessionForm } from '@/src/data/session/form';
 import { listSessions } from '@/src/data/session/read';
 import { editSession, makeSession, setSessionState } from '@/src/data/session/write';
@@ -249,6 +250,25 @@ describe('comments', () => {
     const stranger = await makeViewer('operator', { stationCode: 'Cf' });
     expect(await writeComment(stranger, id, { id: newId(), text: 'x' })).toMatchObject({ code: 'not_found' });
     expect(await readComments(stranger, id)).toMatchObject({ code: 'not_found' });
+  });
+});
+
+describe('where work begins', () => {
+  it.each([
+    ['admin', {}, '/sessions'],
+    ['scheduler', {}, '/sessions'],
+    ['operator', { stationCode: 'Bm' }, '/stations/Bm/desk'],
+    ['correlator', {}, '/sessions/ARC-030/fringes'],
+  ] as const)('is for %s with %j at %s', async (role, where, path) => {
+    expect(await landingFor(await makeViewer(role, where))).toBe(path);
+  });
+
+  it('is for an investigator the coverage of their own session, and the list without one', async () => {
+    const { id, code } = await storeSession();
+    expect(await landingFor(await makeViewer('investigator', { sessionId: id }))).toBe(
+      `/sessions/${code}/coverage`,
+    );
+    expect(await landingFor({ userId: 'u', email: 'u@x', theme: null, grants: [] })).toBe('/sessions');
   });
 });
 

@@ -78,7 +78,7 @@ describe('an offer', () => {
     expect(af?.subject).toMatch(/^TST-\d+ offer 1: can Af observe\?$/);
     expect(af?.text).toContain('Third epoch.');
     expect(af?.text).toContain(
-      'Station time: 2027-03-01 13:45 Europe/Berlin to 2027-03-01 14:15 Europe/Berlin',
+      'Station time: 2027-03-01 13:45 Europe/Berlin to 2027-03-01 14:20 Europe/Berlin',
     );
     expect(af?.html).toContain('Answer for the slot');
     const { rows } = await database().client.execute(

@@ -6,6 +6,7 @@ import {
   scansHit,
   slotsOf,
   TAIL_SECONDS,
+  within,
   type Reply,
 } from '@/src/schedule/slots';
 import { makePlan, makeScan, member, T0 } from './plan-maker';
@@ -78,5 +79,20 @@ describe('a station’s word', () => {
       ['b', true],
     ]);
     expect(scansHit(plan, 'Em', [[T0, T0 + HOUR]])).toEqual([]);
+  });
+});
+
+describe('the hours within a slot', () => {
+  it('are cut at its ends, and those outside fall away', () => {
+    const span = [T0, T0 + 4 * HOUR] as const;
+    const hours = [
+      [T0 - HOUR, T0 + HOUR],
+      [T0 + 2 * HOUR, T0 + 9 * HOUR],
+      [T0 + 4 * HOUR, T0 + 5 * HOUR],
+    ] as const;
+    expect(within(span, hours)).toEqual([
+      [T0, T0 + HOUR],
+      [T0 + 2 * HOUR, T0 + 4 * HOUR],
+    ]);
   });
 });

@@ -25,7 +25,7 @@ export function Masthead({ viewer, nowMs, place, title, sub }: MastheadProps) {
       </a>
       <Link
         href="/"
-        title="Sessions"
+        title="Where your work begins"
         className={place.kind === 'network' ? 'mast-logo mast-logo-margin' : 'mast-logo'}
       >
         <Mark />
