@@ -7,6 +7,7 @@ import { readMailbox } from '@/src/data/mail/read';
 import { newestSnapshot } from '@/src/data/offer/read';
 import { offerPlan, resendMail } from '@/src/data/offer/write';
 import { takeAct } from '@/src/data/plan/write';
+import { listSlots } from '@/src/data/slot/list';
 import { readSlots } from '@/src/data/slot/read';
 import { replySlot } from '@/src/data/slot/write';
 import { LEAD_SECONDS, TAIL_SECONDS } from '@/src/schedule/slots';
@@ -279,6 +280,57 @@ describe('an answer to a slot', () => {
     await offerPlan(session.scheduler, session.id, offer());
     expect(await answerOf('Af')).toMatchObject({ answer: 'stale', without: [] });
     expect(await answerOf('Fn')).toMatchObject({ answer: 'declined' });
+  });
+});
+
+describe('what was said', () => {
+  it('is kept word by word, newest first, with the offer it answers', async () => {
+    const { id, scheduler } = await sessionWithScan();
+    const made = offer();
+    await offerPlan(scheduler, id, made);
+    const operator = await makeViewer('operator', { stationCode: 'Af' });
+    const body = { offerId: made.id, actId: newId() };
+    await replySlot(operator, id, 'Af', { ...body, reply: 'declined', reason: 'Staff' });
+    await replySlot(scheduler, id, 'Af', { ...body, actId: newId(), reply: 'confirmed' });
+    const read = await readSlots(operator, id);
+    const af = read.ok && read.board.slots.find(({ stationCode }) => stationCode === 'Af');
+    expect(af && af.words).toMatchObject([
+      { reply: 'confirmed', role: 'scheduler', isOnBehalf: true, number: 1, kind: 'offer', reason: '' },
+      { reply: 'declined', role: 'operator', isOnBehalf: false, hours: [], reason: 'Staff' },
+    ]);
+    expect(af && af.modes).toHaveLength(1);
+    const bm = read.ok && read.board.slots.find(({ stationCode }) => stationCode === 'Bm');
+    expect(bm && bm.words).toEqual([]);
+  });
+});
+
+describe('the list of slots', () => {
+  it('has an operator’s own, of every session that is offered', async () => {
+    const [one, two] = [await sessionWithScan(), await sessionWithScan()];
+    const draft = await sessionWithScan();
+    const answerByMs = START_MS - 24 * HOUR;
+    await offerPlan(one.scheduler, one.id, offer({ answerByMs }));
+    await offerPlan(two.scheduler, two.id, offer());
+    const listed = await listSlots(await makeViewer('operator', { stationCode: 'Af' }));
+    if (!listed.ok) throw new Error(listed.message);
+    const codes = listed.slots.map(({ sessionCode }) => sessionCode);
+    expect(codes).toEqual(expect.arrayContaining([one.code, two.code]));
+    expect(codes).not.toContain(draft.code);
+    expect(new Set(listed.slots.map(({ stationCode }) => stationCode))).toEqual(new Set(['Af']));
+    expect(listed.slots.find(({ sessionCode }) => sessionCode === one.code)).toMatchObject({
+      answer: 'open',
+      stationName: 'Arrow Fell',
+      timeZone: 'Europe/Berlin',
+      answerByMs,
+    });
+  });
+
+  it('is for those who answer', async () => {
+    const scheduler = await listSlots(await makeViewer('scheduler'));
+    const codes = scheduler.ok ? scheduler.slots.map(({ stationCode }) => stationCode) : [];
+    expect(codes).toEqual(expect.arrayContaining(['Af', 'Bm', 'Fn']));
+    for (const role of ['correlator', 'admin'] as const)
+      expect(await listSlots(await makeViewer(role))).toMatchObject({ ok: false, code: 'forbidden' });
   });
 });
 

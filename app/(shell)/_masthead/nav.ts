@@ -16,6 +16,7 @@ const PAGES: readonly Page[] = [
   { kind: 'station', label: 'Desk', verb: 'desk.read', segment: 'desk' },
   { kind: 'station', label: 'Clock log', verb: 'clock.read', segment: 'clock' },
   { kind: 'network', label: 'Sessions', verb: 'session.list', path: '/sessions' },
+  { kind: 'network', label: 'Slots', verb: 'slot.reply', path: '/slots' as Route },
   { kind: 'network', label: 'Clocks', verb: 'clock.read', path: '/clocks' },
   { kind: 'network', label: 'Stations', verb: 'catalogue.read', path: '/stations' as Route },
   { kind: 'network', label: 'Sources', verb: 'catalogue.read', path: '/sources' as Route },

@@ -11,6 +11,21 @@ import './_mail/mail.css';
 
 export const metadata: Metadata = { title: 'Mailbox' };
 
+const WHY = {
+  real: {
+    heading: 'Mail goes to its service',
+    text: 'This installation sends its messages for real, so none are kept here.',
+  },
+  silent: {
+    heading: 'The local mail service does not answer',
+    text: 'It is started together with the application. Messages are kept meanwhile: the slots page of a session names those that did not go out, and sends them again.',
+  },
+  none: {
+    heading: 'No mail service is set up',
+    text: 'Messages are kept. Set RESEND_API_KEY and start the application again; the slots page of a session then sends those that did not go out.',
+  },
+} as const;
+
 export default async function MailPage() {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
@@ -22,15 +37,8 @@ export default async function MailPage() {
     <PageFrame viewer={viewer} nowMs={nowMs()} place={{ kind: 'network' }}>
       {answer.isUp ? (
         <Mailbox messages={answer.messages} />
-      ) : answer.isReal ? (
-        <EmptySheet heading="Mail goes to its service">
-          This installation sends its messages for real, so none are kept here.
-        </EmptySheet>
       ) : (
-        <EmptySheet heading="The local mail service does not answer">
-          It is started together with the application. Messages are kept meanwhile: the slots page of a
-          session names those that did not go out, and sends them again.
-        </EmptySheet>
+        <EmptySheet heading={WHY[answer.why].heading}>{WHY[answer.why].text}</EmptySheet>
       )}
     </PageFrame>
   );

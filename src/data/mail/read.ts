@@ -15,8 +15,8 @@ export type LocalMessage = {
 
 export type Mailbox =
   | { ok: true; isUp: true; messages: LocalMessage[] }
-  /** the fake does not answer, or mail is real and goes to its service */
-  | { ok: true; isUp: false; isReal: boolean };
+  /** mail goes out for real, the fake does not answer, or there is neither */
+  | { ok: true; isUp: false; why: 'real' | 'silent' | 'none' };
 
 const outbox = z.object({
   messages: z.array(
@@ -36,9 +36,10 @@ export const readMailbox = (viewer: Viewer): Promise<Mailbox | Failure> =>
   answer(async () => {
     if (!can(viewer, 'mail.read')) throw forbiddenFor('mail.read');
     const { isDemo, mailKey, mailUrl } = env();
-    if (!isDemo || mailKey !== null) return { ok: true, isUp: false, isReal: true };
+    if (mailKey !== null) return { ok: true, isUp: false, why: 'real' };
+    if (!isDemo) return { ok: true, isUp: false, why: 'none' };
     const text = mailUrl === null ? null : await fetchOutbox(mailUrl);
-    if (text === null) return { ok: true, isUp: false, isReal: false };
+    if (text === null) return { ok: true, isUp: false, why: 'silent' };
     return { ok: true, isUp: true, messages: outbox.parse(JSON.parse(text)).messages };
   });
 

@@ -13,7 +13,12 @@ import './_slots/slots.css';
 
 export const metadata: Metadata = { title: 'Slots' };
 
-export default async function SlotsPage({ params }: { params: Promise<{ sessionId: string }> }) {
+type Props = {
+  params: Promise<{ sessionId: string }>;
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+};
+
+export default async function SlotsPage({ params, searchParams }: Props) {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
   const { sessionId } = await params;
@@ -23,6 +28,7 @@ export default async function SlotsPage({ params }: { params: Promise<{ sessionI
     notFound();
   }
   const { board } = answer;
+  const { station } = await searchParams;
   const draft = board.canOffer ? await readTimeline(viewer, sessionId) : null;
   const toFix = draft?.ok
     ? checkPlan(unpackPlan(draft.timeline.plan), planContextOf(draft.timeline)).filter(
@@ -31,7 +37,7 @@ export default async function SlotsPage({ params }: { params: Promise<{ sessionI
     : 0;
   return (
     <SessionFrame viewer={viewer} session={board.session} nowMs={board.nowMs}>
-      <Slots board={board} toFix={toFix} />
+      <Slots board={board} toFix={toFix} station={typeof station === 'string' ? station : null} />
     </SessionFrame>
   );
 }

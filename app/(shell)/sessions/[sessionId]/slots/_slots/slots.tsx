@@ -30,21 +30,28 @@ const answerByText = (ms: number, nowMs: number): string => {
 
 const KINDS = { offer: 'Offer', publish: 'Version' } as const;
 
+type Props = {
+  board: SlotBoard;
+  /** open problems of the draft */
+  toFix: number;
+  /** chosen by the address */
+  station: string | null;
+};
+
 /** What each station is asked for, and what it said. */
-export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
+export function Slots({ board, toFix, station }: Props) {
   const { session, offer, draft } = board;
   const slots = eastward(board.slots);
-  const first = (slots.find(({ isOwn }) => isOwn) ?? slots[0])?.stationCode ?? null;
+  const named = slots.find(({ stationCode }) => stationCode === station);
+  const first = (named ?? slots.find(({ isOwn }) => isOwn) ?? slots[0])?.stationCode ?? null;
   const [picked, setChosen] = useState<string | null>(null);
   const chosen = picked ?? first;
   const [asked, setAsked] = useState<'offer' | 'publish' | null>(null);
-  const [preview, setPreview] = useState<Preview | null>(null);
+  const [made, setMade] = useState<{ of: string; preview: Preview | null }>({ of: '', preview: null });
+  const panelKey = `${chosen} ${offer?.id}`;
+  const preview = made.of === panelKey ? made.preview : null;
   const slot = slots.find(({ stationCode }) => stationCode === chosen);
   const drawnOf = (one: SlotDto) => (one.stationCode === chosen && preview ? { ...one, ...preview } : one);
-  const choose = (code: string) => {
-    if (code !== chosen) setPreview(null);
-    setChosen(code);
-  };
   const dialog = (
     <OfferDialog key={asked} board={board} kind={asked} toFix={toFix} onClose={() => setAsked(null)} />
   );
@@ -119,7 +126,7 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
       <Hatch />
       <div className="slots">
         <section aria-label="Slots" className="slots-main">
-          <Board board={board} slots={slots} drawnOf={drawnOf} chosen={chosen} onChoose={choose} />
+          <Board board={board} slots={slots} drawnOf={drawnOf} chosen={chosen} onChoose={setChosen} />
           {board.unasked.length > 0 && (
             <p className="help px-3.5 py-2">
               Without a scan in this offer, so not asked: {board.unasked.join(', ')}.
@@ -151,13 +158,13 @@ export function Slots({ board, toFix }: { board: SlotBoard; toFix: number }) {
         {slot && (
           <aside aria-label="Chosen station" className="slots-side">
             <AnswerPanel
-              key={`${slot.stationCode} ${offer.id}`}
+              key={panelKey}
               sessionId={session.id}
               offerId={offer.id}
               span={board.span}
               slot={slot}
               drawn={drawnOf(slot)}
-              onPreview={setPreview}
+              onPreview={(preview) => setMade({ of: panelKey, preview })}
             />
           </aside>
         )}

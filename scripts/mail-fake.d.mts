@@ -1,0 +1,1 @@
+export function startMailFake(port?: number): Promise<string>;
