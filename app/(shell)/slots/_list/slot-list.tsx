@@ -74,11 +74,13 @@ function Row({ slot, nowMs }: { slot: ListedSlot; nowMs: number }) {
         </p>
       </div>
       <div>
-        <b className="first-letter:uppercase">{ANSWER_WORDS[answer]}</b>
+        <b className="inline-block first-letter:uppercase">{ANSWER_WORDS[answer]}</b>
         <p className="help">
           {slot.isOnBehalf && 'on behalf '}
           {slot.reason !== '' && `“${slot.reason}”`}
-          {isToAnswer && slot.answerByMs !== null && `answer by ${fullTimeText(slot.answerByMs)}`}
+          {isToAnswer &&
+            slot.answerByMs !== null &&
+            `${slot.answerByMs < nowMs ? 'was due' : 'answer by'} ${fullTimeText(slot.answerByMs)}`}
         </p>
       </div>
       <Link

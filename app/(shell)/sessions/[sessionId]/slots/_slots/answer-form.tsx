@@ -121,7 +121,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
       {said === 'partly' && (
         <div className="grid grid-cols-2 gap-2.5">
           <TimeField
-            label="Cannot from"
+            label="Cannot from, UT"
             text={entered.from}
             entry={read.from}
             zone={slot.timeZone}
@@ -129,7 +129,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
             onText={(from) => change({ from })}
           />
           <TimeField
-            label="until"
+            label="until, UT"
             text={entered.until}
             entry={read.until}
             zone={slot.timeZone}
@@ -140,8 +140,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
       )}
       {(said === 'partly' || said === 'declined') && (
         <>
-          <div role="group" aria-label="Why?" className="slots-why">
-            <span className="label">Why?</span>
+          <div role="group" aria-label="Reason" className="slots-why">
             {REASONS.map((one) => (
               <button key={one} type="button" aria-pressed={one === why} onClick={() => setWhy(one)}>
                 {one}
@@ -149,7 +148,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
             ))}
           </div>
           <Field
-            label="In a word, for the scheduler"
+            label="Why, in a few words for the scheduler"
             value={words}
             maxLength={480}
             error={fields.reason}
@@ -229,7 +228,6 @@ function TimeField({ label, text, entry, zone, error, onText }: TimeFieldProps) 
       placeholder="22:50"
       inputMode="numeric"
       error={error}
-      end={<span className="text-small text-ink2">UT</span>}
       help={entry.ok ? stationTime(entry.value, zone) : undefined}
       onChange={(event) => onText(event.target.value)}
     />

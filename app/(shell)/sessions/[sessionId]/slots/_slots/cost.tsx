@@ -18,10 +18,12 @@ export function Cost({ slot, without }: { slot: SlotDto; without: readonly Hours
       <p>
         <b>
           {isAll
-            ? `Hits all ${slot.scanCount} ${slot.scanCount === 1 ? 'scan' : 'scans'} of ${slot.stationCode}.`
-            : `Hits ${hits.length} of ${slot.scanCount} scans: ${listText(named.length > MOST + 1 ? [...named.slice(0, MOST), `${named.length - MOST} more`] : named)}.`}
-        </b>{' '}
-        {isAll ? 'No baseline with it is left.' : 'What lies outside these hours is kept.'}
+            ? `Hits all ${slot.scanCount} ${slot.scanCount === 1 ? 'scan' : 'scans'} of ${slot.stationCode}`
+            : `Hits ${hits.length} of ${slot.scanCount} scans`}
+        </b>
+        {isAll
+          ? '. No baseline with it is left.'
+          : `: ${nameThem(named)}. What lies outside these hours is kept.`}
       </p>
       {!isAll && hits.length <= MOST && (
         <table className="tt">
@@ -55,6 +57,9 @@ export function Cost({ slot, without }: { slot: SlotDto; without: readonly Hours
     </div>
   );
 }
+
+const nameThem = (names: readonly string[]): string =>
+  listText(names.length > MOST + 1 ? [...names.slice(0, MOST), `${names.length - MOST} more`] : names);
 
 /** The legs of a nodding group count as one. */
 function hitsOf(slot: SlotDto, without: readonly Hours[]): Hit[] {
