@@ -74,9 +74,8 @@ async function saveState(browser: Browser, { person, file, baseURL }: Saving): P
   const page = await context.newPage();
   await page.goto('/sign-in');
   await signIn(page, emailOf(person));
-  await expect(
-    page.getByRole('button', { name: /^(Administrator|Scheduler|Operator|Correlator|Investigator)/ }),
-  ).toBeVisible();
+  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
+  await expect(page.getByRole('timer', { name: 'UT' })).toBeVisible();
   await context.storageState({ path: file });
   await context.close();
 }

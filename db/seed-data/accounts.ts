@@ -20,5 +20,9 @@ export const ACCOUNTS: readonly {
   { email: 'operator@fallowness.example', role: 'operator', stationCode: 'Fn', isUnlisted: true },
   { email: 'operator@cinderflat.example', role: 'operator', stationCode: 'Cf', isUnlisted: true },
   { email: 'correlator@antiphon.example', role: 'correlator' },
-  { email: 'investigator@antiphon.example', role: 'investigator', sessionCodes: ['ARC-031', 'ARC-029'] },
+  {
+    email: 'investigator@antiphon.example',
+    role: 'investigator',
+    sessionCodes: ['ARC-031', 'ARC-030', 'ARC-029'],
+  },
 ];

@@ -25,7 +25,7 @@ export function ClockTable({ clocks, nowMs }: { clocks: readonly ClockSummary[];
         <h1>Clocks</h1>
         <p className="help">station clock minus UTC, via GPS, positive = early</p>
       </header>
-      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Clocks">
+      <div className="relative overflow-x-auto" tabIndex={0} role="group" aria-label="Clocks">
         <table className="tt">
           <thead>
             <tr>

@@ -174,7 +174,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
       </div>
       <p className="clk-sentence" aria-live="polite">
         {offsetSeconds === null ? (
-          <span className="text-ink3">{code} clock is …</span>
+          <span className="text-ink2">{code} clock is …</span>
         ) : (
           <>
             {code} clock is <Offset seconds={offsetSeconds} />.
