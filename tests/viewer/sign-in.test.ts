@@ -41,9 +41,7 @@ describe('sign-in', () => {
   });
 
   it('keeps only a hash of what the browser holds', async () => {
-    await expect(signIn(null, form('admin@antiphon.example', 'antiphon-demo'))).rejects.toThrow(
-      'to /',
-    );
+    await expect(signIn(null, form('admin@antiphon.example', 'antiphon-demo'))).rejects.toThrow('to /');
     const token = jar.get('antiphon_login');
     expect(token).toMatch(/^[\w-]{32}$/);
     const { rows } = await database().client.execute('SELECT id FROM login_sessions');
