@@ -1,4 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { and, eq } from 'drizzle-orm';
+import { db } from '@/db/client';
+import { sourceBands } from '@/db/schema/source-bands';
 import { seedId } from '@/db/seed-ids';
 import { readHealth } from '@/src/data/health/read';
 import { readJournal, readTimeline } from '@/src/data/plan/read';
@@ -7,7 +10,15 @@ import { derivedState } from '@/src/data/session/dto';
 import { listSessions, readSession } from '@/src/data/session/read';
 import { listStations } from '@/src/data/station/read';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { makeScan, makeSession, makeViewer, newId, NOW, openDatabase } from '@/tests/helpers/database';
+import {
+  makeScan,
+  makeSession,
+  makeViewer,
+  newId,
+  NOW,
+  openDatabase,
+  sourceId,
+} from '@/tests/helpers/database';
 
 openDatabase();
 
@@ -55,6 +66,26 @@ describe('the demo’s timeline', () => {
     expect(timeline).toMatchObject({ seq: 0, steps: { undo: null, redo: null } });
     expect(timeline.nowMs).toBeGreaterThanOrEqual(Date.parse(NOW));
   });
+});
+
+it('a source with components is their sum, not its one flux density', async () => {
+  const stored = [
+    { fluxJy: 0.3, majorMas: 0.2, minorMas: 0.1, positionAngleDeg: 90, eastMas: 1, northMas: -2 },
+    { fluxJy: 0.1, majorMas: 0, minorMas: 0, positionAngleDeg: 0, eastMas: 0, northMas: 0 },
+  ];
+  const bandOf = and(eq(sourceBands.sourceId, sourceId('J0738+1742')), eq(sourceBands.band, '8.4 GHz'));
+  await db()
+    .update(sourceBands)
+    .set({ components: JSON.stringify(stored) })
+    .where(bandOf);
+  const read = await readTimeline(await makeViewer('scheduler'), 'ARC-031');
+  if (!read.ok) throw new Error(read.message);
+  const found = read.timeline.sources.find(({ name }) => name === 'J0738+1742')?.components['8.4 GHz'];
+  await db().update(sourceBands).set({ components: '[]' }).where(bandOf);
+  expect(found?.map(({ fluxJy }) => fluxJy)).toEqual([0.3, 0.1]);
+  expect(found?.[0]?.positionAngleRad).toBeCloseTo(Math.PI / 2, 12);
+  // 1 mas in radians
+  expect(found?.[0]?.eastRad).toBeCloseTo((1e-3 / 3600) * (Math.PI / 180), 18);
 });
 
 describe('who reads and writes a plan', () => {

@@ -12,6 +12,7 @@ import type { GaussianComponent } from '../../array/structure';
 import type { PlanMode } from '../../schedule/context';
 import { summaryOf } from '../../schedule/mode-channels';
 import type { HorizonPoint } from '../../sky/types';
+import { degToRad } from '../../units/angle';
 import type { TimelineSource, TimelineStation } from './dto';
 
 const RAD_PER_MAS = Math.PI / 648_000_000;
@@ -84,9 +85,7 @@ export async function readSources(from: Database | Tx, sessionId: string): Promi
     ...row,
     position: { raDeg, decDeg },
     components: Object.fromEntries(
-      bands
-        .filter(({ band }) => band.sourceId === row.id)
-        .map(({ band }) => [band.band, [roundGaussian(band.fluxJy, band.sizeMas ?? 0)]]),
+      bands.filter(({ band }) => band.sourceId === row.id).map(({ band }) => [band.band, componentsOf(band)]),
     ),
   }));
 }
@@ -115,6 +114,29 @@ export async function readModes(from: Database | Tx): Promise<PlanMode[]> {
 function horizonOf(stored: string): HorizonPoint[] {
   const corners = JSON.parse(stored) as [azimuthDeg: number, elevationDeg: number][];
   return corners.map(([azimuthDeg, elevationDeg]) => ({ azimuthDeg, elevationDeg }));
+}
+
+type StoredComponent = {
+  fluxJy: number;
+  majorMas: number;
+  minorMas: number;
+  positionAngleDeg: number;
+  eastMas: number;
+  northMas: number;
+};
+
+/** The list of components stands for flux density and size where there is one. */
+function componentsOf(band: typeof sourceBands.$inferSelect): GaussianComponent[] {
+  const stored = JSON.parse(band.components) as StoredComponent[];
+  if (stored.length === 0) return [roundGaussian(band.fluxJy, band.sizeMas ?? 0)];
+  return stored.map((one) => ({
+    fluxJy: one.fluxJy,
+    majorRad: one.majorMas * RAD_PER_MAS,
+    minorRad: one.minorMas * RAD_PER_MAS,
+    positionAngleRad: degToRad(one.positionAngleDeg),
+    eastRad: one.eastMas * RAD_PER_MAS,
+    northRad: one.northMas * RAD_PER_MAS,
+  }));
 }
 
 function roundGaussian(fluxJy: number, sizeMas: number): GaussianComponent {
