@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { forbidden, notFound } from 'next/navigation';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { readTimeline } from '@/src/data/plan/read';
+import { readStamp } from '@/src/data/session/stamp';
 import { readSlots } from '@/src/data/slot/read';
 import { checkPlan } from '@/src/schedule/checks';
 import { unpackPlan } from '@/src/schedule/plan-rows';
@@ -22,6 +23,8 @@ export default async function SlotsPage({ params, searchParams }: Props) {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
   const { sessionId } = await params;
+  // first, so that what changes while the page is made is not missed
+  const stamp = await readStamp(viewer, sessionId);
   const answer = await readSlots(viewer, sessionId);
   if (!answer.ok) {
     if (answer.code === 'forbidden') forbidden();
@@ -37,7 +40,12 @@ export default async function SlotsPage({ params, searchParams }: Props) {
     : 0;
   return (
     <SessionFrame viewer={viewer} session={board.session} nowMs={board.nowMs}>
-      <Slots board={board} toFix={toFix} station={typeof station === 'string' ? station : null} />
+      <Slots
+        board={board}
+        stamp={stamp.ok ? `${stamp.plan} ${stamp.stations}` : undefined}
+        toFix={toFix}
+        station={typeof station === 'string' ? station : null}
+      />
     </SessionFrame>
   );
 }

@@ -32,6 +32,8 @@ const KINDS = { offer: 'Offer', publish: 'Version' } as const;
 
 type Props = {
   board: SlotBoard;
+  /** of what the board shows */
+  stamp: string | undefined;
   /** open problems of the draft */
   toFix: number;
   /** chosen by the address */
@@ -39,7 +41,7 @@ type Props = {
 };
 
 /** What each station is asked for, and what it said. */
-export function Slots({ board, toFix, station }: Props) {
+export function Slots({ board, stamp, toFix, station }: Props) {
   const { session, offer, draft } = board;
   const slots = eastward(board.slots);
   const named = slots.find(({ stationCode }) => stationCode === station);
@@ -55,7 +57,7 @@ export function Slots({ board, toFix, station }: Props) {
   const dialog = (
     <OfferDialog key={asked} board={board} kind={asked} toFix={toFix} onClose={() => setAsked(null)} />
   );
-  const live = <RefreshOn address={liveKeys.stamp(session.id)} />;
+  const live = <RefreshOn address={liveKeys.stamp(session.id)} known={stamp} />;
   if (!offer) {
     return (
       <>
