@@ -1,14 +1,42 @@
 import 'server-only';
-import { eq, sql } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import type { Tx } from './client';
 import { clockEvents } from './schema/clock-events';
 import { clockReadings } from './schema/clock-readings';
+import { stationBands } from './schema/station-bands';
 import { stations } from './schema/stations';
 import { CLOCK_CHANGE, CLOCK_DAYS, CLOCKS, HOURS_BETWEEN } from './seed-data/clocks';
+import { BAND_22 } from './seed-data/modes';
+import { EQUIPMENT } from './seed-data/stations';
 import { seedId } from './seed-ids';
 import { operatorOf } from './seed-sessions';
 
 const HOUR_MS = 3_600_000;
+
+/** What each station records with, and the hills around it. */
+export async function fillEquipment(tx: Tx, nowMs: number): Promise<void> {
+  for (const one of EQUIPMENT) {
+    await tx
+      .update(stations)
+      .set({
+        horizon: JSON.stringify(one.horizon),
+        formatter: one.formatter,
+        recorder: one.recorder,
+        recorderBitsPerS: one.recorderGbits * 1e9,
+        recorderFreeBytes: one.freeTB * 1e12,
+        recorderFreeAtMs: nowMs,
+        maxChannels: one.channels,
+        maxBitsPerS: one.recorderGbits * 1e9,
+        preScanSeconds: one.preScanSeconds,
+        contacts: one.contacts,
+      })
+      .where(eq(stations.code, one.code));
+    await tx
+      .update(stationBands)
+      .set({ zenithOpacity: one.opacity })
+      .where(and(eq(stationBands.stationCode, one.code), eq(stationBands.band, BAND_22)));
+  }
+}
 
 /** How each station's clock is read: part of the catalogue, so it is filled once. */
 export async function fillCounters(tx: Tx, nowMs: number): Promise<void> {

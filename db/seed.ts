@@ -27,7 +27,7 @@ import { SESSIONS } from './seed-data/session';
 import { SOURCES } from './seed-data/sources';
 import { SEFDS, STATIONS } from './seed-data/stations';
 import { fillAnswers } from './seed-answers';
-import { fillClocks, fillCounters } from './seed-clocks';
+import { fillClocks, fillCounters, fillEquipment } from './seed-clocks';
 import { seedId, userId } from './seed-ids';
 import { demoStartMs, fillSessions, modeId, sessionId, sessionStartMs, sourceId } from './seed-sessions';
 
@@ -52,6 +52,7 @@ export async function seedDemo(nowMs: number): Promise<'filled' | 'moved' | 'kep
       .returning();
     if (!marked) return 'kept';
     await fillCatalogues(tx);
+    await fillEquipment(tx, nowMs);
     await fillCounters(tx, nowMs);
     await fillSessions(tx, startMs);
     await fillAccounts(tx, accounts);

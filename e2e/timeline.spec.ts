@@ -76,8 +76,9 @@ test('the same by keys: add, take a station out, move, remove, undo', async ({ p
   const live = page.getByRole('status').filter({ hasText: /New scan of|Scan \d+, / });
 
   await grid.focus();
-  for (let step = 0; step < 11; step++) await page.keyboard.press('ArrowRight');
-  await expect(inspector.getByRole('heading', { name: 'Scan 11', exact: true })).toBeVisible();
+  // ten scans, then the legs of the nodding group one by one
+  for (let step = 0; step < 10 + 17; step++) await page.keyboard.press('ArrowRight');
+  await expect(inspector.getByRole('heading', { name: 'Scan 11.17', exact: true })).toBeVisible();
 
   await sourceRow(page, 'J0854+2006').focus();
   await page.keyboard.press('Enter');
@@ -145,7 +146,7 @@ test('a drop that does not fit goes back and says why; with Shift it makes the p
   await page.keyboard.up('Shift');
   await expect(page.getByText(/two scans at once|at once|busy/).first()).toBeVisible();
   await page.keyboard.press('Control+z');
-  await expect(page.getByText('1 to fix, 1 to note')).toBeVisible();
+  await expect(page.getByText('1 to fix, 2 to note')).toBeVisible();
   expect(await scanCount(page)).toBe(before);
 });
 

@@ -139,3 +139,103 @@ export const SEFDS: readonly (readonly [string, number, number | null])[] = [
   ['Cf', 1900, null],
   ['Bm', 1500, 1500],
 ];
+
+/**
+ * Invented: hills as [azimuth, elevation], what is recorded with, what is free (TB), the zenith opacity at 22 GHz, who
+ * is on call.
+ */
+export const EQUIPMENT: readonly {
+  code: string;
+  horizon: readonly (readonly [number, number])[];
+  formatter: string;
+  recorder: string;
+  recorderGbits: number;
+  freeTB: number;
+  channels: number;
+  opacity: number;
+  preScanSeconds: number;
+  contacts: string;
+}[] = [
+  {
+    code: 'Em',
+    horizon: [],
+    formatter: 'digital, 16 channels',
+    recorder: 'disk pack',
+    recorderGbits: 2.048,
+    freeTB: 12.4,
+    channels: 16,
+    opacity: 0.05,
+    preScanSeconds: 3,
+    contacts: 'Control room: extension 11 (invented)',
+  },
+  {
+    code: 'Dp',
+    horizon: [
+      [224, 6],
+      [238, 8],
+      [262, 9],
+      [292, 7],
+      [316, 6],
+    ],
+    formatter: 'digital, 8 channels',
+    recorder: 'disk pack',
+    recorderGbits: 1.024,
+    freeTB: 8.1,
+    channels: 8,
+    opacity: 0.09,
+    preScanSeconds: 5,
+    contacts: 'Control room: extension 12 (invented)',
+  },
+  {
+    code: 'Fn',
+    horizon: [],
+    formatter: 'digital, 16 channels',
+    recorder: 'network store',
+    recorderGbits: 4.096,
+    freeTB: 63.5,
+    channels: 16,
+    opacity: 0.1,
+    preScanSeconds: 3,
+    contacts: 'Night desk: extension 13 (invented)',
+  },
+  {
+    code: 'Af',
+    horizon: [],
+    formatter: 'digital, 16 channels',
+    recorder: 'network store',
+    recorderGbits: 4.096,
+    freeTB: 41.8,
+    channels: 16,
+    opacity: 0.1,
+    preScanSeconds: 3,
+    contacts: 'Night desk: extension 14 (invented)',
+  },
+  {
+    code: 'Cf',
+    horizon: [],
+    formatter: 'analogue, 1 bit',
+    recorder: 'disk pack',
+    recorderGbits: 0.256,
+    freeTB: 3.1,
+    channels: 8,
+    opacity: 0.06,
+    preScanSeconds: 8,
+    contacts: 'Site keeper: extension 15 (invented)',
+  },
+  {
+    code: 'Bm',
+    horizon: [
+      [20, 6],
+      [40, 7],
+      [70, 6],
+    ],
+    formatter: 'digital, 8 channels',
+    recorder: 'disk pack',
+    recorderGbits: 2.048,
+    freeTB: 5.4,
+    channels: 8,
+    opacity: 0.08,
+    preScanSeconds: 3,
+    contacts: 'Duty phone: extension 16 (invented)',
+  },
+];
