@@ -14,7 +14,7 @@ const HOUR = 3_600_000;
 const seedId = (name: string) => idOf(createHash('sha256').update(name).digest());
 const MODE = seedId('mode:22 GHz');
 
-/** Adds a scan of Af and Bm, as the timeline would. */
+/** Adds a scan of Af and Fn, as the timeline would. */
 async function addScan(page: Page, startMs: number): Promise<void> {
   const scan = {
     id: seedId(`${code} scan ${startMs}`),
@@ -22,7 +22,7 @@ async function addScan(page: Page, startMs: number): Promise<void> {
     modeId: MODE,
     startMs,
     lengthSeconds: 600,
-    stations: ['Af', 'Bm'].map((station) => ({ station, lateSeconds: 0, earlySeconds: 0 })),
+    stations: ['Af', 'Fn'].map((station) => ({ station, lateSeconds: 0, earlySeconds: 0 })),
     groupId: null,
     leg: null,
     comment: '',
@@ -56,7 +56,7 @@ test('nothing is offered before there is a scan, and nobody at a station sees th
   await page.getByLabel('Start, UT').fill('2027-050 18:00');
   await page.getByLabel('Length').fill('12 h');
   await page.getByRole('checkbox', { name: /^Af/ }).check();
-  await page.getByRole('checkbox', { name: /^Bm/ }).check();
+  await page.getByRole('checkbox', { name: /^Fn/ }).check();
   await page.getByLabel('Add a source by name').fill('J0827+5217');
   await page.getByRole('button', { name: 'Add the source' }).click();
   await page.getByLabel('Mode that new scans').selectOption(MODE);
@@ -129,23 +129,23 @@ test('an operator comes by the list, sees what declining costs, says why, and th
   await expect(page.getByText('Sent: Af confirmed.')).toBeVisible();
   await expect(said.getByRole('listitem')).toHaveCount(2);
   await expect(page.getByRole('button', { name: /^Arrow Fell: confirmed/ })).toBeVisible();
-  await page.getByRole('button', { name: /^Bright Moor: not answered/ }).click();
-  await expect(page.getByText('The operators of Bright Moor answer for it')).toBeVisible();
+  await page.getByRole('button', { name: /^Fallow Ness: not answered/ }).click();
+  await expect(page.getByText('The operators of Fallow Ness answer for it')).toBeVisible();
   await expect(form).toBeHidden();
 });
 
 test('a scheduler answers for a station in part, and that is marked', async ({ pageAs }) => {
   const page = await pageAs('scheduler');
-  await page.goto(`/sessions/${code}/slots?station=Bm`);
-  const form = page.getByRole('form', { name: 'Answer for Bm' });
+  await page.goto(`/sessions/${code}/slots?station=Fn`);
+  const form = page.getByRole('form', { name: 'Answer for Fn' });
   await form.getByRole('button', { name: 'In part' }).click();
   await form.getByLabel('Cannot from, UT').fill('22:05');
   await form.getByLabel('until, UT').fill('23:30');
   await expect(form.getByRole('row', { name: /J0827\+5217 5 min of 10 min/ })).toBeVisible();
-  await expect(form.getByText('Bm observes 21:45 to 22:05 UT: 20 min of 35 min.')).toBeVisible();
+  await expect(form.getByText('Fn observes 21:45 to 22:05 UT: 20 min of 35 min.')).toBeVisible();
   await form.getByRole('button', { name: 'Power' }).click();
   await form.getByRole('button', { name: 'Send: in part' }).click();
-  const row = page.getByRole('button', { name: /^Bright Moor: partly/ });
+  const row = page.getByRole('button', { name: /^Fallow Ness: partly/ });
   await expect(row.getByText(/on behalf/)).toBeVisible();
   await expect(row.getByText('“Power”')).toBeVisible();
 });
