@@ -156,7 +156,7 @@ test('a late slew is mended by its first button', async ({ pageAs }) => {
   await expect(page.getByText('49 s short')).toBeVisible();
   await page.getByRole('button', { name: 'Af joins at 01:03:00, 1 min late' }).click();
   await expect(page.getByText('49 s short')).toBeHidden();
-  await expect(page.getByText('1 to note')).toBeVisible();
+  await expect(page.getByText('2 to note')).toBeVisible();
   await page.keyboard.press('Control+z');
   await expect(page.getByText('49 s short')).toBeVisible();
 });

@@ -76,7 +76,7 @@ async function signInAndFindTimeline(page) {
   await page.getByRole('button', { name: 'Sign in' }).click();
   await page.waitForURL((url) => url.pathname !== '/sign-in');
   await page.goto(`${address}/sessions`);
-  const link = page.locator('main a[href*="/sessions/"]').first();
+  const link = page.locator('main a[href$="/timeline"]').first();
   const href = (await link.getAttribute('href')).replace(/\/timeline$/, '');
   return `${address}${href}/timeline`;
 }

@@ -4,8 +4,6 @@ import type { Plan, ScanId } from './plan';
 import { scanNumbers } from './scan-numbers';
 import { clockText, lengthText } from './words';
 
-export { problemMends, type Mend } from './problem-mends';
-
 /** who with its point; what and shortfall without: "who what: shortfall." or "who what." */
 export type ProblemSentence = { who: string; what: string; shortfall: string | null };
 

@@ -1,7 +1,9 @@
 'use client';
 
+import { useEffect, useState } from 'react';
 import type { Problem } from '@/src/schedule/checks';
-import { problemMends, problemSentence } from '@/src/schedule/problem-words';
+import type { problemMends } from '@/src/schedule/problem-mends';
+import { problemSentence } from '@/src/schedule/problem-words';
 import { useActs } from './acts';
 import { useDerived } from './derived';
 import { useTimeline, useTimelineStore } from './store';
@@ -12,6 +14,7 @@ export function Footnotes({ onLoud }: { onLoud: (key: string | null) => void }) 
   const letters = useDerived((derived) => derived.letters);
   const shown = problems.filter(({ key }) => letters.has(key));
   const rest = problems.length - shown.length;
+  const mendsOf = useMends();
   return (
     <section aria-labelledby="notes-title" className="flex min-h-0 flex-1 border-t-head border-ink">
       <h2 id="notes-title" className="w-head flex-none pl-[12px] pt-2 text-lead">
@@ -26,7 +29,7 @@ export function Footnotes({ onLoud }: { onLoud: (key: string | null) => void }) 
         ) : (
           <ul className="gap-x-3.5 pr-3.5 narrow:columns-2 wide:columns-3">
             {shown.map((problem) => (
-              <Footnote key={problem.key} problem={problem} onLoud={onLoud} />
+              <Footnote key={problem.key} problem={problem} mendsOf={mendsOf} onLoud={onLoud} />
             ))}
             {rest > 0 && <li className="help pt-[7px]">{rest} more to note, without a letter.</li>}
           </ul>
@@ -36,13 +39,43 @@ export function Footnotes({ onLoud }: { onLoud: (key: string | null) => void }) 
   );
 }
 
-function Footnote({ problem, onLoud }: { problem: Problem; onLoud: (key: string | null) => void }) {
+type MendsOf = typeof problemMends;
+
+const MENDS_AFTER_MS = 200;
+
+/** What would mend a problem is worked out by code of its own, loaded once the sheet is drawn. */
+function useMends(): MendsOf | null {
+  const isReady = useDerived((derived) => derived.isReady);
+  const [loaded, setLoaded] = useState<{ mendsOf: MendsOf } | null>(null);
+  useEffect(() => {
+    if (!isReady) return;
+    let isOver = false;
+    const load = async () => {
+      const { problemMends: mendsOf } = await import('@/src/schedule/problem-mends');
+      if (!isOver) setLoaded({ mendsOf });
+    };
+    const timer = setTimeout(() => void load(), MENDS_AFTER_MS);
+    return () => {
+      isOver = true;
+      clearTimeout(timer);
+    };
+  }, [isReady]);
+  return loaded?.mendsOf ?? null;
+}
+
+type FootnoteProps = {
+  problem: Problem;
+  mendsOf: MendsOf | null;
+  onLoud: (key: string | null) => void;
+};
+
+function Footnote({ problem, mendsOf, onLoud }: FootnoteProps) {
   const store = useTimelineStore();
   const canEdit = useTimeline((state) => state.canEdit);
   const plan = useDerived((derived) => derived.plan);
   const context = useTimeline((state) => state.context);
   const { dispatch } = useActs();
-  const mends = canEdit ? problemMends(problem, plan, context) : [];
+  const mends = canEdit && mendsOf ? mendsOf(problem, plan, context) : [];
   return (
     <li
       className="break-inside-avoid pt-[7px] text-table"

@@ -52,7 +52,7 @@ export function Desk({ desk: first }: { desk: DeskDto }) {
         </aside>
         <ScanList run={run} now={now} saying={saying} canSay={desk.canSay} onChoose={setChosenId} />
       </div>
-      <Tabs code={code} sessionCode={run.code} />
+      <Tabs code={code} />
     </>
   );
 }

@@ -23,7 +23,7 @@ export function Nothing({ desk, now }: { desk: DeskDto; now: number }) {
           <Slots desk={desk} now={now} />
         </aside>
       </div>
-      <Tabs code={code} sessionCode={null} />
+      <Tabs code={code} />
     </>
   );
 }

@@ -5,13 +5,12 @@ import Link from 'next/link';
 import { usePathname } from 'next/navigation';
 
 /** At the bottom of a phone, within a thumb's reach: the station's pages. */
-export function Tabs({ code, sessionCode }: { code: string; sessionCode: string | null }) {
+export function Tabs({ code }: { code: string }) {
   const path = usePathname();
-  const slots = sessionCode === null ? '/sessions' : `/sessions/${encodeURIComponent(sessionCode)}/slots`;
   const tabs = [
     ['Now', `/stations/${code}/desk`, 'M3 14h4M7 14V5h4M11 14V8h4'],
     ['Clock', `/stations/${code}/clock`, 'M9 2a7 7 0 1 0 .01 0M9 5v4l3 2'],
-    ['Slots', slots, 'M3 3v12M15 3v12M6 7h6M6 11h4'],
+    ['Slots', '/slots', 'M3 3v12M15 3v12M6 7h6M6 11h4'],
   ] as const;
   return (
     <nav aria-label="Station" className="desk-tabs">
