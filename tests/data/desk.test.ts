@@ -171,6 +171,32 @@ describe('how a scan went', () => {
     });
   });
 
+  it('of a nodding group is said once, each leg with its part', async () => {
+    const operator = await operatorOf('Af');
+    const read = await readDesk(operator, 'Af');
+    const group = read.ok ? read.desk.run?.scans.find(({ legIds }) => legIds.length > 1) : undefined;
+    if (!read.ok || !read.desk.run || !group) throw new Error('no group');
+    expect(group).toMatchObject({ number: '11', source: 'J0825+0309 with J0811+0146' });
+    const lost = [group.startMs, group.startMs + 90_000];
+    const body = {
+      actId: newId(),
+      scanId: group.scanId,
+      outcome: 'partly',
+      lost,
+      reason: 'antenna',
+      text: '',
+    };
+    const answer = await sayOutcome(operator, read.desk.run.sessionId, 'Af', body);
+    expect(answer).toMatchObject({ ok: true, outcome: { outcome: 'partly', reason: 'antenna', times: 2 } });
+    const said = await outcomesOf(db(), read.desk.run.sessionId, 'Af');
+    const words = group.legIds.map((id) => said.find(({ scanId }) => scanId === id)?.outcome);
+    expect(words.slice(0, 4)).toEqual(['lost', 'partly', 'good', 'good']);
+    expect(words).toHaveLength(17);
+    const after = await readDesk(operator, 'Af');
+    const word = after.ok && after.desk.run?.outcomes.find(({ scanId }) => scanId === group.scanId);
+    expect(word).toMatchObject({ outcome: 'partly' });
+  });
+
   it('of a closed session stays as it was said', async () => {
     const closed = await running('closed');
     const body = say({ scanId: closed.over.id });

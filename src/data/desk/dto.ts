@@ -2,9 +2,11 @@ import type { Answer } from '../../schedule/slots';
 import type { OutcomeDto } from '../outcome/read';
 import type { SessionState } from '../session/dto';
 
-/** One scan at the station; angles in degrees, the way there from the scan before. */
+/** One scan at the station, or a nodding group as one; angles in degrees, the way there from the scan before. */
 export type DeskScan = {
+  /** of a group its first leg */
   scanId: string;
+  legIds: string[];
   number: string;
   source: string;
   startMs: number;

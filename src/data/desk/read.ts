@@ -7,6 +7,7 @@ import { slots } from '../../../db/schema/slots';
 import { stations } from '../../../db/schema/stations';
 import { can, canSome, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
+import { blocksOf, type Block } from '../../schedule/blocks';
 import type { PlanContext } from '../../schedule/context';
 import { stationPaths, type PathLeg } from '../../schedule/paths';
 import { unpackPlan } from '../../schedule/plan-rows';
@@ -15,7 +16,7 @@ import { gmstHours } from '../../sky/position';
 import { fitOf } from '../clock/read';
 import { answer, forbiddenFor, notFound, type Failure } from '../errors';
 import { newestSnapshot, type Snapshot } from '../offer/read';
-import { outcomesOf } from '../outcome/read';
+import { outcomesOf, wordOn } from '../outcome/read';
 import { derivedState } from '../session/dto';
 import { answersOf, type StationAnswer } from '../slot/answers';
 import type { DeskDto, DeskScan } from './dto';
@@ -92,6 +93,8 @@ async function runOf(from: Database, asked: Asked, now: number): Promise<DeskDto
   const snapshot = await newestSnapshot(from, session.id);
   if (!snapshot) return null;
   const { number, kind } = snapshot;
+  const scans = scansOf(snapshot, station, now);
+  const said = await outcomesOf(from, session.id, station);
   return {
     sessionId: session.id,
     code: session.code,
@@ -102,8 +105,8 @@ async function runOf(from: Database, asked: Asked, now: number): Promise<DeskDto
     startMs,
     endMs,
     answer: word,
-    scans: scansOf(snapshot, station, now),
-    outcomes: await outcomesOf(from, session.id, station),
+    scans,
+    outcomes: scans.flatMap(({ legIds }) => wordOn(legIds, said) ?? []),
   };
 }
 
@@ -119,12 +122,34 @@ function scansOf(snapshot: Snapshot, station: string, now: number): DeskScan[] {
     settings: snapshot.settings,
   };
   const numbers = scanNumbers(plan);
-  return (stationPaths(plan, context).get(station) ?? []).map((leg) => {
-    const scan = plan.scans.find(({ id }) => id === leg.scanId);
-    const source = context.sources[leg.sourceId]?.name ?? '';
-    const mode = context.modes[scan?.modeId ?? '']?.name ?? '';
-    return { ...rowOf(leg), number: numbers.get(leg.scanId) ?? '', source, mode };
+  const paths = stationPaths(plan, context).get(station) ?? [];
+  return blocksOf(plan).flatMap((block) => {
+    const legs = block.legs.flatMap((scan) => paths.find(({ scanId }) => scanId === scan.id) ?? []);
+    const [first] = legs;
+    const last = legs.at(-1);
+    if (!first || !last) return [];
+    const { stopMs, stopAzDeg, stopElDeg } = rowOf(last);
+    const number = numbers.get(first.scanId) ?? '';
+    return [
+      {
+        ...rowOf(first),
+        stopMs,
+        stopAzDeg,
+        stopElDeg,
+        number: block.groupId === null ? number : number.replace(/\.\d+$/, ''),
+        source: sourceWords(block, context),
+        mode: context.modes[block.legs[0].modeId]?.name ?? '',
+        legIds: legs.map(({ scanId }) => scanId),
+      },
+    ];
   });
+}
+
+/** "J0825+0309 with J0811+0146" of a nodding group. */
+function sourceWords({ legs, groupId }: Block, { sources }: PlanContext): string {
+  const nameOf = (leg: 'target' | 'calibrator' | null) =>
+    sources[legs.find((one) => one.leg === leg)?.sourceId ?? '']?.name ?? '';
+  return groupId === null ? nameOf(null) : `${nameOf('target')} with ${nameOf('calibrator')}`;
 }
 
 const rowOf = (leg: PathLeg) => ({

@@ -56,3 +56,28 @@ export async function outcomesOf(
     isOnBehalf: row.isOnBehalf === 1,
   }));
 }
+
+/**
+ * The word on a scan, or on a nodding group that is said as one: good or lost where all its legs are, else partly.
+ *
+ * @returns under the first leg's id; undefined where a leg was not spoken of
+ */
+export function wordOn(legIds: readonly string[], outcomes: readonly OutcomeDto[]): OutcomeDto | undefined {
+  const said = legIds.flatMap((id) => outcomes.find(({ scanId }) => scanId === id) ?? []);
+  const newest = said.reduce<OutcomeDto | undefined>(
+    (best, one) => (!best || one.atMs > best.atMs ? one : best),
+    undefined,
+  );
+  const [first = ''] = legIds;
+  if (!newest || said.length < legIds.length) return undefined;
+  if (said.length === 1) return newest;
+  const words = new Set(said.map(({ outcome }) => outcome));
+  const worst = said.find(({ outcome }) => outcome !== 'good') ?? newest;
+  return {
+    ...worst,
+    scanId: first,
+    outcome: words.size === 1 ? worst.outcome : 'partly',
+    lost: said.flatMap(({ lost }) => lost),
+    atMs: newest.atMs,
+  };
+}

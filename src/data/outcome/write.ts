@@ -8,13 +8,13 @@ import { nowMs } from '../../env';
 import { ID_PATTERN } from '../../schedule/plan-ids';
 import { unpackPlan } from '../../schedule/plan-rows';
 import { stationOnMs } from '../../schedule/plan';
-import type { Hours } from '../../schedule/slots';
+import { within, type Hours } from '../../schedule/slots';
 import { clockText } from '../../schedule/words';
 import { answer, forbiddenFor, invalid, notFound, Refusal, type Failure } from '../errors';
 import { parsed } from '../input';
 import { newestSnapshot } from '../offer/read';
 import { fetchSession } from '../session/scope';
-import { outcomesOf, REASONS, type OutcomeDto } from './read';
+import { outcomesOf, REASONS, wordOn, type Outcome, type OutcomeDto } from './read';
 
 const common = {
   actId: z.string().regex(ID_PATTERN, 'This has no id. Load the page again.'),
@@ -34,7 +34,10 @@ const input = z.discriminatedUnion(
   'Say how it went: good, partly or lost.',
 );
 
-/** A station's word on how a scan went; said again it amends, sent twice it stands once. */
+/**
+ * A station's word on how a scan went; said again it amends, sent twice it stands once. A nodding group is said as one:
+ * each leg gets its part of the hours off source.
+ */
 export const sayOutcome = (
   viewer: Viewer,
   key: string,
@@ -45,12 +48,16 @@ export const sayOutcome = (
     const said = parsed(input, body);
     return transact(async (tx) => {
       const session = await fetchSession(tx, viewer, key);
-      const on = await findScan(tx, session.id, station, said.scanId);
+      const legs = await findLegs(tx, session.id, station, said.scanId);
+      const on = { startMs: legs[0].startMs, stopMs: legs.at(-1)?.stopMs ?? legs[0].stopMs };
       const role = actingRole(viewer, 'outcome.write', { sessionId: session.id, stationCodes: [station] });
       if (role === null) throw forbiddenFor('outcome.write');
       const isOwn = viewer.grants.some((held) => held.role === 'operator' && held.stationCode === station);
       const find = async () =>
-        (await outcomesOf(tx, session.id, station)).find(({ scanId }) => scanId === said.scanId);
+        wordOn(
+          legs.map(({ scanId }) => scanId),
+          await outcomesOf(tx, session.id, station),
+        );
       const where = and(eq(scanOutcomes.sessionId, session.id), eq(scanOutcomes.actId, said.actId));
       const known = (await tx.$count(scanOutcomes, where)) > 0;
       if (!known) {
@@ -63,20 +70,27 @@ export const sayOutcome = (
           const message = 'Say in a few words what it was.';
           throw invalid(message, { text: [message] });
         }
-        await tx.insert(scanOutcomes).values({
-          sessionId: session.id,
-          scanId: said.scanId,
-          stationCode: station,
-          outcome: said.outcome,
-          lost: JSON.stringify(lostOf(said, on)),
-          reason: said.outcome === 'good' ? null : said.reason,
-          text: said.text,
-          userId: viewer.userId,
-          role: isOwn ? 'operator' : role,
-          isOnBehalf: !isOwn,
-          atMs: nowMs(),
-          actId: said.actId,
-        });
+        const lost = lostOf(said, on);
+        await tx.insert(scanOutcomes).values(
+          legs.map((leg, index) => {
+            const hours = within([leg.startMs, leg.stopMs], lost);
+            const outcome = outcomeOf(leg, hours);
+            return {
+              sessionId: session.id,
+              scanId: leg.scanId,
+              stationCode: station,
+              outcome,
+              lost: JSON.stringify(hours),
+              reason: said.outcome === 'good' || outcome === 'good' ? null : said.reason,
+              text: said.text,
+              userId: viewer.userId,
+              role: isOwn ? ('operator' as const) : role,
+              isOnBehalf: !isOwn,
+              atMs: nowMs(),
+              actId: index === 0 ? said.actId : `${said.actId}.${index}`,
+            };
+          }),
+        );
       }
       const outcome = await find();
       if (!outcome) throw new Error('The outcome went away while it was said.');
@@ -85,14 +99,35 @@ export const sayOutcome = (
   });
 
 type On = { startMs: number; stopMs: number };
+type Leg = On & { scanId: string };
 
-/** The hours of a scan of the newest snapshot at a station. */
-async function findScan(tx: Tx, sessionId: string, station: string, scanId: string): Promise<On> {
+/** The hours of a scan of the newest snapshot at a station; of a leg, those of its whole nodding group. */
+async function findLegs(
+  tx: Tx,
+  sessionId: string,
+  station: string,
+  scanId: string,
+): Promise<[Leg, ...Leg[]]> {
   const snapshot = await newestSnapshot(tx, sessionId);
-  const scan = snapshot && unpackPlan(snapshot.plan).scans.find(({ id }) => id === scanId);
-  const member = scan?.stations.find((one) => one.station === station);
-  if (!scan || !member) throw notFound(`${station.slice(0, 8)} has no such scan in the plan it was given.`);
-  return stationOnMs(scan, member);
+  const scans = snapshot ? unpackPlan(snapshot.plan).scans : [];
+  const asked = scans.find(({ id }) => id === scanId);
+  const together =
+    asked && asked.groupId !== null
+      ? scans.filter(({ groupId }) => groupId === asked.groupId)
+      : asked
+        ? [asked]
+        : [];
+  const [first, ...rest] = together.flatMap((scan) => {
+    const member = scan.stations.find((one) => one.station === station);
+    return member ? [{ scanId: scan.id, ...stationOnMs(scan, member) }] : [];
+  });
+  if (!first) throw notFound(`${station.slice(0, 8)} has no such scan in the plan it was given.`);
+  return [first, ...rest];
+}
+
+function outcomeOf({ startMs, stopMs }: On, lost: readonly Hours[]): Outcome {
+  const lostMs = lost.reduce((sum, [from, until]) => sum + until - from, 0);
+  return lostMs === 0 ? 'good' : lostMs >= stopMs - startMs ? 'lost' : 'partly';
 }
 
 function lostOf(said: z.output<typeof input>, { startMs, stopMs }: On): Hours[] {
