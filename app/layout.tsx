@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { cookies, headers } from 'next/headers';
 import { archivo, serif, serifGreek } from './_fonts/fonts';
+import './_ui/controls.css';
 import './_ui/masthead.css';
 import './_ui/sheet.css';
 import './globals.css';

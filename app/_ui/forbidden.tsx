@@ -6,9 +6,8 @@ import { EmptySheet } from './empty-sheet';
 /** A page that the viewer's roles have no part in: which right it takes, and who can give it. */
 export function Forbidden({ verb, viewer }: { verb: Verb; viewer: Viewer | null }) {
   const { heading, message } = whoCanGrant(verb);
-  const labels = ROLES.flatMap((role) => viewer?.grants.filter((grant) => grant.role === role) ?? []).map(
-    roleLabel,
-  );
+  const grants = ROLES.flatMap((role) => viewer?.grants.filter((grant) => grant.role === role) ?? []);
+  const labels = [...new Set(grants.map(roleLabel))];
   return (
     <BareFrame status="403">
       <EmptySheet

@@ -3,15 +3,16 @@ const PITCH = 92;
 const HEIGHT = 66;
 const LEFT = 92;
 const HOURS = 12;
+const UNNAMED = 6;
 
 type RuledStavesProps = {
   /** stations in stave order; without them the staves stand unnamed */
   codes?: readonly string[];
-  count?: number;
 };
 
 /** The empty sheet: staves ruled at 0°, 30°, 60° and 90°, nothing on them. */
-export function RuledStaves({ codes, count = codes?.length ?? 6 }: RuledStavesProps) {
+export function RuledStaves({ codes = [] }: RuledStavesProps) {
+  const count = codes.length || UNNAMED;
   const staves = Array.from({ length: count }, (_, index) => FIRST + index * PITCH);
   return (
     <svg className="ruled-staves" height={FIRST + count * PITCH} aria-hidden="true">
@@ -44,7 +45,7 @@ export function RuledStaves({ codes, count = codes?.length ?? 6 }: RuledStavesPr
             fontWeight={600}
             style={{ fill: 'var(--ink3)' }}
           >
-            {codes?.[index] ?? ''}
+            {codes[index] ?? ''}
           </text>
         </g>
       ))}

@@ -111,7 +111,7 @@ export async function readModes(from: Database | Tx): Promise<PlanMode[]> {
   }));
 }
 
-function horizonOf(stored: string): HorizonPoint[] {
+export function horizonOf(stored: string): HorizonPoint[] {
   const corners = JSON.parse(stored) as [azimuthDeg: number, elevationDeg: number][];
   return corners.map(([azimuthDeg, elevationDeg]) => ({ azimuthDeg, elevationDeg }));
 }

@@ -1,24 +1,15 @@
 import 'server-only';
-import { asc, eq, isNull, or, inArray } from 'drizzle-orm';
+import { eq } from 'drizzle-orm';
 import { db } from '../../../db/client';
-import { modes } from '../../../db/schema/modes';
 import { sessionSources } from '../../../db/schema/session-sources';
-import { sources } from '../../../db/schema/sources';
-import { stations } from '../../../db/schema/stations';
 import { can, type Viewer } from '../../access/policy';
 import { writeBlock } from '../../exchange/catalogue/block';
 import { RULES, WHAT, WHEN, type SessionTyped } from '../../exchange/session-form';
 import { nowMs } from '../../env';
-import type { SourceRole } from '../../schedule/context';
 import { answer, forbiddenFor, type Failure } from '../errors';
+import { choicesOf, type SessionChoices } from './choices';
 import { derivedState, type SessionHead } from './dto';
 import { fetchSession, subjectOf, type SessionRow } from './scope';
-
-export type SessionChoices = {
-  stations: { code: string; name: string; longitudeDeg: number; isRetired: boolean }[];
-  sources: { id: string; name: string; role: SourceRole; isRetired: boolean }[];
-  modes: { id: string; name: string; isRetired: boolean }[];
-};
 
 export type SessionForm = {
   typed: SessionTyped;
@@ -56,7 +47,11 @@ export const readSessionForm = (
     if (key === null) {
       if (!can(viewer, 'session.make')) throw forbiddenFor('session.make');
       const startMs = Math.ceil((now + 7 * DAY_MS) / DAY_MS) * DAY_MS;
-      const choices = await choicesOf([], [], null);
+      const choices = await choicesOf(
+        viewer,
+        { sessionId: null, codes: [], sourceIds: [], modeId: null },
+        now,
+      );
       const typed: SessionTyped = {
         code: '',
         what: writeBlock(WHAT, { title: '', purpose: '' }),
@@ -74,16 +69,18 @@ export const readSessionForm = (
       .select({ id: sessionSources.sourceId, wantedScans: sessionSources.wantedScans })
       .from(sessionSources)
       .where(eq(sessionSources.sessionId, session.id));
-    const choices = await choicesOf(
-      session.stations,
-      taken.map(({ id }) => id),
-      session.modeId,
-    );
+    const kept = {
+      sessionId: session.id,
+      codes: session.stations,
+      sourceIds: taken.map(({ id: sourceId }) => sourceId),
+      modeId: session.modeId,
+    };
+    const choices = await choicesOf(viewer, kept, now);
     const { id, code, title, startMs, lengthSeconds } = session;
     return {
       ok: true,
       form: {
-        typed: typedOf(session, taken),
+        typed: typedOf(session, inOrderOf(choices.sources, taken)),
         choices,
         rev: session.rev,
         session: {
@@ -100,6 +97,10 @@ export const readSessionForm = (
     };
   });
 
+/** By name, as they are listed to choose from. */
+const inOrderOf = <T extends { id: string }>(listed: readonly { id: string }[], taken: readonly T[]): T[] =>
+  listed.flatMap(({ id }) => taken.filter((one) => one.id === id));
+
 const typedOf = (
   session: SessionRow,
   taken: readonly { id: string; wantedScans: number }[],
@@ -112,38 +113,3 @@ const typedOf = (
   stations: session.stations,
   sources: taken.map(({ id, wantedScans }) => ({ id, wanted: String(wantedScans) })),
 });
-
-/** What may be chosen: all that is not retired, and what the session has already. */
-async function choicesOf(
-  codes: readonly string[],
-  sourceIds: readonly string[],
-  modeId: string | null,
-): Promise<SessionChoices> {
-  const [stationRows, sourceRows, modeRows] = await Promise.all([
-    db()
-      .select({
-        code: stations.code,
-        name: stations.name,
-        longitudeDeg: stations.longitudeDeg,
-        retiredAtMs: stations.retiredAtMs,
-      })
-      .from(stations)
-      .where(or(isNull(stations.retiredAtMs), inArray(stations.code, [...codes])))
-      .orderBy(asc(stations.longitudeDeg), asc(stations.code)),
-    db()
-      .select({ id: sources.id, name: sources.name, role: sources.role, retiredAtMs: sources.retiredAtMs })
-      .from(sources)
-      .where(or(isNull(sources.retiredAtMs), inArray(sources.id, [...sourceIds])))
-      .orderBy(asc(sources.name)),
-    db()
-      .select({ id: modes.id, name: modes.name, retiredAtMs: modes.retiredAtMs })
-      .from(modes)
-      .where(or(isNull(modes.retiredAtMs), eq(modes.id, modeId ?? '')))
-      .orderBy(asc(modes.name)),
-  ]);
-  const plain = <T extends { retiredAtMs: number | null }>({ retiredAtMs, ...row }: T) => ({
-    ...row,
-    isRetired: retiredAtMs !== null,
-  });
-  return { stations: stationRows.map(plain), sources: sourceRows.map(plain), modes: modeRows.map(plain) };
-}

@@ -1,5 +1,5 @@
 import 'server-only';
-import { and, asc, eq, gt, inArray, ne } from 'drizzle-orm';
+import { and, asc, eq, gt, inArray, isNull, ne } from 'drizzle-orm';
 import { db } from '../../../db/client';
 import { sessionStations } from '../../../db/schema/session-stations';
 import { sessions } from '../../../db/schema/sessions';
@@ -17,17 +17,17 @@ import { blocksOf, fetchStation } from './rows';
 
 export type StationListItem = { code: string; name: string; site: { longitudeDeg: number } };
 
-/** The stations of these codes, as lists of sessions name them. */
+/** The stations of these codes, or all in use, as lists of sessions and empty sheets name them. */
 export const listStations = (
   viewer: Viewer,
-  codes: readonly string[],
+  codes: readonly string[] | 'in use',
 ): Promise<{ ok: true; stations: StationListItem[] } | Failure> =>
   answer(async () => {
     if (!can(viewer, 'catalogue.read')) throw forbiddenFor('catalogue.read');
     const rows = await db()
       .select({ code: stations.code, name: stations.name, longitudeDeg: stations.longitudeDeg })
       .from(stations)
-      .where(inArray(stations.code, [...codes]))
+      .where(codes === 'in use' ? isNull(stations.retiredAtMs) : inArray(stations.code, [...codes]))
       .orderBy(asc(stations.code));
     return {
       ok: true,

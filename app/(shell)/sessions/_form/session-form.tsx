@@ -1,6 +1,7 @@
 'use client';
 
 import type { Route } from 'next';
+import dynamic from 'next/dynamic';
 import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useEffect, useId, useRef, useState, useTransition, type FormEvent, type ReactNode } from 'react';
@@ -17,6 +18,8 @@ import { SourceChoice } from './source-choice';
 import { StationChoice } from './station-choice';
 import '../../_catalogue/object.css';
 import './session-form.css';
+
+const AsItStands = dynamic(() => import('./as-it-stands'), { ssr: false });
 
 type Body = { id: string; typed: SessionTyped } | { actId: string; rev: number; typed: SessionTyped };
 
@@ -84,18 +87,18 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
 
   return (
     <form ref={element} className="sform" noValidate onSubmit={submit} aria-label={label}>
-      {refusal !== null && (
-        <div role="alert" className="error-box">
-          {refusal}
-        </div>
-      )}
-      {wrong.length > 0 && (
-        <p role="status" className="error-box">
-          {wrongText(wrong.length)} Nothing is kept yet.
-        </p>
-      )}
-      <Part title="What it is">
-        <div className="sform-code">
+      <div className="sform-parts">
+        {refusal !== null && (
+          <div role="alert" className="error-box">
+            {refusal}
+          </div>
+        )}
+        {wrong.length > 0 && (
+          <p role="status" className="error-box">
+            {wrongText(wrong.length)} Nothing is kept yet.
+          </p>
+        )}
+        <Part title="What it is" className="sform-what">
           <Field
             label={CODE_FIELD.label}
             className="h-field"
@@ -105,53 +108,54 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
             help={CODE_FIELD.help}
             error={errorOf('code')}
           />
-        </div>
-        {partOf('what', WHAT)}
-      </Part>
-      <Part title="When">{partOf('when', WHEN)}</Part>
-      <Part title="Stations">
-        <StationChoice
-          choices={form.choices.stations}
-          chosen={typed.stations}
-          error={errorOf('stations')}
-          onChoose={(stations) => set({ stations })}
-        />
-      </Part>
-      <Part title="Sources">
-        <SourceChoice
-          choices={form.choices.sources}
-          chosen={typed.sources}
-          wrong={wrong}
-          onChoose={(sources) => set({ sources })}
-        />
-      </Part>
-      <Part title="Mode">
-        <label className="label" htmlFor={modeField}>
-          Mode that new scans are laid out in
-        </label>
-        <select
-          id={modeField}
-          className="field h-field"
-          value={typed.modeId}
-          aria-invalid={errorOf('modeId') !== undefined || undefined}
-          aria-describedby={errorOf('modeId') ? `${modeField}-error` : undefined}
-          onChange={({ target }) => set({ modeId: target.value })}
-        >
-          {typed.modeId === '' && <option value="">Choose</option>}
-          {form.choices.modes.map(({ id, name, isRetired }) => (
-            <option key={id} value={id}>
-              {name}
-              {isRetired ? ' (retired)' : ''}
-            </option>
-          ))}
-        </select>
-        {errorOf('modeId') && (
-          <p id={`${modeField}-error`} className="mt-1 text-small font-strong text-verm">
-            {errorOf('modeId')}
-          </p>
-        )}
-      </Part>
-      <Part title="Settings">{partOf('rules', RULES)}</Part>
+          {partOf('what', WHAT)}
+        </Part>
+        <Part title="When">{partOf('when', WHEN)}</Part>
+        <Part title="Stations">
+          <StationChoice
+            choices={form.choices.stations}
+            chosen={typed.stations}
+            error={errorOf('stations')}
+            onChoose={(stations) => set({ stations })}
+          />
+        </Part>
+        <Part title="Sources">
+          <SourceChoice
+            choices={form.choices.sources}
+            chosen={typed.sources}
+            wrong={wrong}
+            onChoose={(sources) => set({ sources })}
+          />
+        </Part>
+        <Part title="Mode">
+          <label className="label" htmlFor={modeField}>
+            Mode that new scans are laid out in
+          </label>
+          <select
+            id={modeField}
+            className="field h-field"
+            value={typed.modeId}
+            aria-invalid={errorOf('modeId') !== undefined || undefined}
+            aria-describedby={errorOf('modeId') ? `${modeField}-error` : undefined}
+            onChange={({ target }) => set({ modeId: target.value })}
+          >
+            {typed.modeId === '' && <option value="">Choose</option>}
+            {form.choices.modes.map(({ id, name, isRetired }) => (
+              <option key={id} value={id}>
+                {name}
+                {isRetired ? ' (retired)' : ''}
+              </option>
+            ))}
+          </select>
+          {errorOf('modeId') && (
+            <p id={`${modeField}-error`} className="mt-1 text-small font-strong text-verm">
+              {errorOf('modeId')}
+            </p>
+          )}
+        </Part>
+        <Part title="Settings">{partOf('rules', RULES)}</Part>
+      </div>
+      <AsItStands typed={typed} choices={form.choices} />
       <footer className="sform-foot">
         <span className="help">
           {form.rev === null
@@ -169,12 +173,20 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
   );
 }
 
-function Part({ title, children }: { title: string; children: ReactNode }) {
+function Part({
+  title,
+  className = '',
+  children,
+}: {
+  title: string;
+  className?: string;
+  children: ReactNode;
+}) {
   const id = useId();
   return (
     <section aria-labelledby={id} className="sform-part">
       <h2 id={id}>{title}</h2>
-      <div className="min-w-0">{children}</div>
+      <div className={`min-w-0 ${className}`}>{children}</div>
     </section>
   );
 }

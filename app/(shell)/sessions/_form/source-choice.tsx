@@ -1,7 +1,7 @@
 'use client';
 
 import { useId, useState } from 'react';
-import type { SessionChoices } from '@/src/data/session/form';
+import type { SessionChoices } from '@/src/data/session/choices';
 import type { Wrong } from '@/src/exchange/catalogue/block';
 
 type Chosen = readonly { id: string; wanted: string }[];

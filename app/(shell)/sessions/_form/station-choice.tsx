@@ -1,5 +1,5 @@
 import { staveOrder } from '@/app/_ui/stave-order';
-import type { SessionChoices } from '@/src/data/session/form';
+import type { SessionChoices } from '@/src/data/session/choices';
 
 type Props = {
   choices: SessionChoices['stations'];
@@ -10,7 +10,7 @@ type Props = {
 
 /** Stations to tick, in the order of the staves. */
 export function StationChoice({ choices, chosen, error, onChoose }: Props) {
-  const ordered = staveOrder(choices.map((one) => ({ ...one, site: { longitudeDeg: one.longitudeDeg } })));
+  const ordered = staveOrder(choices);
   if (choices.length === 0)
     return <p className="help">There is no station yet: add them under Stations first.</p>;
   return (

@@ -25,7 +25,6 @@ export function FilterPanel({ filter, onFilter, outlook, stations, sources }: Pr
           <label key={verdict} className="flex h-[26px] items-center gap-2">
             <input
               type="checkbox"
-              className="h-[16px] w-[16px] accent-[var(--fill)]"
               checked={filter.verdicts.has(verdict)}
               onChange={() => onFilter({ ...filter, verdicts: toggled(filter.verdicts, verdict) })}
             />
@@ -41,7 +40,6 @@ export function FilterPanel({ filter, onFilter, outlook, stations, sources }: Pr
           <label key={code} className="flex h-[26px] items-center gap-2">
             <input
               type="checkbox"
-              className="h-[16px] w-[16px] accent-[var(--fill)]"
               checked={filter.stations.has(code)}
               onChange={() => onFilter({ ...filter, stations: toggled(filter.stations, code) })}
             />
