@@ -7,10 +7,12 @@ import type { StoredSnapshot } from '../src/data/offer/read';
 import { hoursWithout, type Hours, type Slot } from '../src/schedule/slots';
 import type { Tx } from './client';
 import { scanOutcomes } from './schema/scan-outcomes';
+import { sessionComments } from './schema/session-comments';
 import { sessionStations } from './schema/session-stations';
 import { sessions } from './schema/sessions';
 import { slotReplies } from './schema/slot-replies';
-import { MISHAPS, REPLIES, UNSAID } from './seed-data/answers';
+import { ACCOUNTS } from './seed-data/accounts';
+import { COMMENTS, MISHAPS, REPLIES, UNSAID } from './seed-data/answers';
 import { SESSIONS } from './seed-data/session';
 import { seedId, userId } from './seed-ids';
 import { operatorOf, scanId, SCHEDULER, sessionId } from './seed-sessions';
@@ -43,7 +45,31 @@ async function fillSession(tx: Tx, code: string, nowMs: number): Promise<void> {
   const { offer, slots } = await make('offer', 7);
   await fillReplies(tx, code, session.startMs, offer.id, slots);
   await make('publish', 3);
+  await fillComments(tx, code, session.startMs, nowMs);
   await fillOutcomes(tx, code, (JSON.parse(offer.snapshot) as StoredSnapshot).plan, nowMs);
+}
+
+async function fillComments(tx: Tx, code: string, startMs: number, nowMs: number): Promise<void> {
+  const said = COMMENTS.filter(({ session }) => session === code).flatMap(({ account, hours, text }) => {
+    const who = ACCOUNTS.find(({ email }) => email === account);
+    if (!who) throw new RangeError(`The demo has no account ${account}.`);
+    const atMs = startMs + hours * HOUR_MS;
+    // what was said later than now was not said yet
+    if (atMs > nowMs) return [];
+    const { role, stationCode = null } = who;
+    return [
+      {
+        id: seedId('comment', `${code} ${hours}`),
+        sessionId: sessionId(code),
+        userId: userId(account),
+        role,
+        stationCode,
+        atMs,
+        text,
+      },
+    ];
+  });
+  if (said.length > 0) await tx.insert(sessionComments).values(said);
 }
 
 async function fillReplies(

@@ -97,7 +97,7 @@ async function isTouched(tx: Tx, mark: typeof seedMarks.$inferSelect): Promise<b
   const counts = await Promise.all([
     tx.$count(journal, inArray(journal.sessionId, SESSION_IDS)),
     tx.$count(sessions, or(gt(sessions.rev, 0), notInArray(sessions.id, SESSION_IDS))),
-    tx.$count(sessionComments),
+    tx.$count(sessionComments, gt(sessionComments.atMs, since)),
     tx.$count(clockReadings, or(gt(clockReadings.enteredAtMs, since), gt(clockReadings.setAsideAtMs, since))),
     tx.$count(clockEvents, gt(clockEvents.enteredAtMs, since)),
     tx.$count(offers, gt(offers.madeAtMs, since)),
@@ -110,6 +110,7 @@ async function isTouched(tx: Tx, mark: typeof seedMarks.$inferSelect): Promise<b
 async function emptyDated(tx: Tx): Promise<void> {
   const ours = await tx.select({ id: offers.id }).from(offers).where(inArray(offers.sessionId, SESSION_IDS));
   const offerIds = ours.map(({ id }) => id);
+  await tx.delete(sessionComments).where(inArray(sessionComments.sessionId, SESSION_IDS));
   await tx.delete(scanOutcomes).where(inArray(scanOutcomes.sessionId, SESSION_IDS));
   await tx.delete(slotReplies).where(inArray(slotReplies.sessionId, SESSION_IDS));
   await tx.delete(slots).where(inArray(slots.offerId, offerIds));

@@ -78,3 +78,42 @@ export const UNSAID: readonly (readonly [session: string, station: string, scans
   ['ARC-030', 'Af', 1],
   ['ARC-030', 'Cf', 3],
 ];
+
+/** Invented: what was said of the sessions, in hours from their start. */
+export const COMMENTS: readonly {
+  session: string;
+  account: string;
+  hours: number;
+  text: string;
+}[] = [
+  {
+    session: 'ARC-029',
+    account: 'operator@cinderflat.example',
+    hours: -150,
+    text: 'The generator is serviced from 22:50 to 23:40. The rest of the night is staffed.',
+  },
+  {
+    session: 'ARC-029',
+    account: 'investigator@antiphon.example',
+    hours: -96,
+    text: 'Scan 24 gives the only long north–south baselines to J0827+5217. If Cf has to leave something out, let it be another.',
+  },
+  {
+    session: 'ARC-029',
+    account: 'operator@fallowness.example',
+    hours: 12,
+    text: 'Wind above 60 km/h since 07:30, dish stowed until it drops.',
+  },
+  {
+    session: 'ARC-029',
+    account: 'correlator@antiphon.example',
+    hours: 74,
+    text: 'Disks of five stations are here. Cf follows by courier.',
+  },
+  {
+    session: 'ARC-030',
+    account: 'scheduler@antiphon.example',
+    hours: -70,
+    text: 'Version 2 is the same plan as the first epoch, three sidereal days later.',
+  },
+];

@@ -8,38 +8,41 @@ import type { CommentDto } from '@/src/data/comment/read';
 import type { SessionHead } from '@/src/data/session/dto';
 import { fullTimeText } from '@/src/schedule/words';
 import { say } from '../actions';
+import './comments.css';
 
 type Props = { session: SessionHead; comments: readonly CommentDto[]; canWrite: boolean };
 
 /** What was said of a session, oldest first, each by its role. */
 export function Comments({ session, comments, canWrite }: Props) {
   return (
-    <div className="mx-auto flex w-full max-w-[820px] flex-1 flex-col gap-3.5 px-3.5 py-[18px] desk:overflow-y-auto">
+    <div className="comments">
       <RefreshOn address={liveKeys.stationsStamp(session.id)} />
-      <h1>Comments</h1>
-      {comments.length === 0 ? (
-        <p className="help">
-          Nothing was said of {session.code} yet. What is written here is read by all who have a part in it.
-        </p>
-      ) : (
-        <ol className="flex flex-col border-t-head border-ink">
-          {comments.map(({ id, by, isMine, atMs, text }) => (
-            <li key={id} className="border-b border-hair py-2.5">
-              <p className="flex flex-wrap justify-between gap-2">
-                <b>
-                  {by}
-                  {isMine && ', you'}
-                </b>
-                <time className="text-ink2" dateTime={new Date(atMs).toISOString()}>
-                  {fullTimeText(atMs)}
-                </time>
-              </p>
-              <p className="whitespace-pre-wrap break-words">{text}</p>
-            </li>
-          ))}
-        </ol>
+      <section aria-labelledby="comments-title" className="comments-said">
+        <h1 id="comments-title">Comments</h1>
+        {comments.length === 0 ? (
+          <p>
+            Nothing was said of {session.code} yet. What is written here is read by all who have a part in it.
+          </p>
+        ) : (
+          <ol>
+            {comments.map(({ id, by, isMine, atMs, text }) => (
+              <li key={id}>
+                <p className="comments-by">
+                  <b>{by}</b>
+                  {isMine && <span className="text-ink2">you</span>}
+                  <time dateTime={new Date(atMs).toISOString()}>{fullTimeText(atMs)}</time>
+                </p>
+                <p className="comments-text">{text}</p>
+              </li>
+            ))}
+          </ol>
+        )}
+      </section>
+      {canWrite && (
+        <aside aria-label="Write" className="comments-write">
+          <Write sessionId={session.id} />
+        </aside>
       )}
-      {canWrite && <Write sessionId={session.id} />}
     </div>
   );
 }
@@ -76,12 +79,12 @@ function Write({ sessionId }: { sessionId: string }) {
         void send();
       }}
     >
-      <label className="label" htmlFor={field}>
-        Your comment
-      </label>
+      <h2>
+        <label htmlFor={field}>Your comment</label>
+      </h2>
       <textarea
         id={field}
-        rows={4}
+        rows={6}
         maxLength={2000}
         className="field h-auto py-2"
         value={text}
@@ -94,6 +97,7 @@ function Write({ sessionId }: { sessionId: string }) {
           {error}
         </p>
       )}
+      <p className="help">Read by all who have a part in the session. It cannot be taken back.</p>
       <div>
         <button type="submit" className="btn btn-primary" disabled={isSending}>
           {isSending ? 'Sending' : 'Send the comment'}

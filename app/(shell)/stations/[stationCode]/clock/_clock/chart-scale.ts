@@ -9,6 +9,7 @@ export const STRIP_TOP = TOP + PLOT + 26;
 export const STRIP = 58;
 const DAY_MS = 86_400_000;
 const STEPS = 160;
+const DAY_ROOM = 34;
 const NORMAL_95 = 1.96;
 
 export type Line = { atMs: number; offsetSeconds: number; halfSeconds: number }[];
@@ -36,14 +37,16 @@ export function fitLines(fit: ClockFit, fromMs: number, untilMs: number, nowMs: 
   });
 }
 
+export type Step = { seconds: number; fromSeconds: number; toSeconds: number };
+
 /** How much the clock stepped at a change: what the stretch after says there less what the one before says. */
-export function stepAt(fit: ClockFit, atMs: number): number | null {
+export function stepAt(fit: ClockFit, atMs: number): Step | null {
   const index = fit.segments.findIndex(({ from }) => from?.getTime() === atMs);
   const [before, after] = [fit.segments[index - 1], fit.segments[index]];
   if (!before || !after) return null;
   const of = (segment: typeof before) =>
     predictClock({ ...fit, segments: [segment] }, new Date(atMs)).offsetSeconds;
-  return of(after) - of(before);
+  return { seconds: of(after) - of(before), fromSeconds: of(before), toSeconds: of(after) };
 }
 
 export function scalesOf(clock: StationClockDto, fromMs: number, width: number) {
@@ -71,10 +74,11 @@ export function scalesOf(clock: StationClockDto, fromMs: number, width: number) 
   return { x, y, strip, reach, untilMs, shown, lines };
 }
 
-/** Days of UT in a span, at most about twelve of them. */
-export function dayTicks(fromMs: number, untilMs: number): number[] {
+/** Days of UT in a span, as many as have room for their three figures. */
+export function dayTicks(fromMs: number, untilMs: number, width: number): number[] {
   const days = (untilMs - fromMs) / DAY_MS;
-  const every = [1, 2, 5, 10, 20, 50].find((step) => days / step <= 16) ?? 100;
+  const room = Math.min(16, Math.max(2, Math.floor((width - LEFT) / DAY_ROOM)));
+  const every = [1, 2, 5, 10, 20, 50].find((step) => days / step <= room) ?? 100;
   const first = Math.ceil(fromMs / DAY_MS);
   const count = Math.floor(untilMs / DAY_MS) - first + 1;
   return Array.from({ length: Math.max(0, count) }, (_, k) => first + k)

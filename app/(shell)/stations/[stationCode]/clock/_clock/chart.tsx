@@ -5,19 +5,8 @@ import { dayText, minuteText, numberText, signedText } from '@/app/_ui/format';
 import { useWidth } from '@/app/_ui/use-width';
 import { offsetWords } from '@/src/clock/reading';
 import type { ReadingDto, StationClockDto } from '@/src/data/clock/dto';
-import { CHANGE_WORDS } from './change-words';
-import {
-  dayTicks,
-  isUsed,
-  LEFT,
-  PLOT,
-  scalesOf,
-  stepAt,
-  STRIP,
-  STRIP_TOP,
-  TOP,
-  type Line,
-} from './chart-scale';
+import { Changes, SessionBoxes, SetAside } from './chart-marks';
+import { dayTicks, isUsed, LEFT, PLOT, scalesOf, STRIP, STRIP_TOP, TOP, type Line } from './chart-scale';
 
 const HEIGHT = STRIP_TOP + STRIP + 62;
 
@@ -63,6 +52,7 @@ export function Chart({ clock, fromMs }: { clock: StationClockDto; fromMs: numbe
           <FitLines scales={scales} />
           <Changes clock={clock} scales={scales} fromMs={fromMs} />
           <Points scales={scales} near={near} />
+          <SetAside scales={scales} />
           <SessionBoxes clock={clock} scales={scales} fromMs={fromMs} />
         </svg>
       </div>
@@ -113,12 +103,15 @@ function Frame({
           </text>
         </g>
       ))}
-      {dayTicks(fromMs, untilMs).map((ms) => (
+      {dayTicks(fromMs, untilMs, width).map((ms) => (
         <g key={ms}>
           <line x1={x(ms)} x2={x(ms)} y1={TOP} y2={bottom} stroke="var(--hair)" />
-          <text x={x(ms)} y={bottom + 16} fontSize={12} textAnchor="middle">
-            {dayText(ms)}
-          </text>
+          <line x1={x(ms)} x2={x(ms)} y1={bottom} y2={bottom + 5} stroke="var(--ink)" />
+          {x(ms) < right - 10 && (
+            <text x={x(ms)} y={bottom + 17} fontSize={12} textAnchor="middle">
+              {dayText(ms)}
+            </text>
+          )}
         </g>
       ))}
       {[-tick, 0, tick].map((nano) => (
@@ -138,7 +131,7 @@ function Frame({
       <text x={0} y={STRIP_TOP - 8} fontSize={12} fontWeight={600}>
         From the fit, ns
       </text>
-      <text x={0} y={bottom + 16} fontSize={12} className="fill-ink2">
+      <text x={0} y={bottom + 17} fontSize={12} className="fill-ink2">
         Day
       </text>
       {[TOP + PLOT, bottom].map((line) => (
@@ -147,7 +140,7 @@ function Frame({
       <line x1={LEFT} x2={LEFT} y1={TOP} y2={TOP + PLOT} stroke="var(--ink)" />
       <line x1={LEFT} x2={LEFT} y1={STRIP_TOP} y2={bottom} stroke="var(--ink)" />
       <line x1={x(nowMs)} x2={x(nowMs)} y1={TOP - 4} y2={bottom} stroke="var(--ink)" strokeWidth={1.5} />
-      <text x={x(nowMs) - 5} y={TOP + 6} fontSize={12} fontWeight={600} textAnchor="end">
+      <text x={x(nowMs) - 5} y={TOP - 3} fontSize={12} fontWeight={600} textAnchor="end">
         now
       </text>
     </g>
@@ -217,94 +210,6 @@ function Points({ scales, near }: { scales: Scales; near: ReadingDto | undefined
       {near && (
         <line x1={x(near.atMs)} x2={x(near.atMs)} y1={TOP} y2={STRIP_TOP + STRIP} stroke="var(--ink3)" />
       )}
-    </g>
-  );
-}
-
-function Changes({ clock, scales, fromMs }: { clock: StationClockDto; scales: Scales; fromMs: number }) {
-  const { x } = scales;
-  return (
-    <g>
-      {clock.changes
-        .filter(({ atMs }) => atMs >= fromMs)
-        .map(({ id, atMs, kind, note }) => {
-          const step = clock.fit && stepAt(clock.fit, atMs);
-          const words = `day ${dayText(atMs)}, ${minuteText(atMs)}. ${note || CHANGE_WORDS[kind]}`;
-          const label = step === null ? 'Changed' : `Jump ${signedText(step * 1e6, 3)} µs`;
-          const boxWidth = Math.min(300, Math.max(150, words.length * 5.6 + 20));
-          // where the step leaves the lower corner free, if the box fits there
-          const fitsRight = x(atMs) + 10 + boxWidth < (x.range()[1] ?? 0);
-          const isLeft = x(atMs) - boxWidth - 10 > LEFT && ((step ?? 0) < 0 || !fitsRight);
-          const left = isLeft ? x(atMs) - boxWidth - 10 : x(atMs) + 10;
-          return (
-            <g key={id}>
-              <line
-                x1={x(atMs)}
-                x2={x(atMs)}
-                y1={TOP}
-                y2={STRIP_TOP + STRIP}
-                stroke="var(--ink)"
-                strokeWidth={1.25}
-                strokeDasharray="2 3"
-              />
-              <rect
-                x={left}
-                y={TOP + PLOT - 56}
-                width={boxWidth}
-                height={42}
-                fill="var(--paper)"
-                stroke="var(--rule)"
-              />
-              <text x={left + 10} y={TOP + PLOT - 39} fontSize={12.5} fontWeight={640}>
-                {label}
-              </text>
-              <text x={left + 10} y={TOP + PLOT - 22} fontSize={12} style={{ fontStretch: '80%' }}>
-                {words.length > 52 ? `${words.slice(0, 51)}…` : words}
-              </text>
-            </g>
-          );
-        })}
-    </g>
-  );
-}
-
-function SessionBoxes({ clock, scales, fromMs }: { clock: StationClockDto; scales: Scales; fromMs: number }) {
-  const { x, untilMs } = scales;
-  const top = STRIP_TOP + STRIP + 26;
-  return (
-    <g>
-      <text x={0} y={top + 14} fontSize={12} className="fill-ink2">
-        Sessions
-      </text>
-      {clock.sessions
-        .filter(({ startMs, endMs }) => endMs > fromMs && startMs < untilMs)
-        .map(({ code, startMs, endMs }) => {
-          const x1 = x(Math.max(startMs, fromMs));
-          const x2 = x(Math.min(endMs, untilMs));
-          return (
-            <g key={code}>
-              <rect
-                x={x1}
-                y={top}
-                width={Math.max(3, x2 - x1)}
-                height={20}
-                fill="var(--sunk)"
-                stroke="var(--edge)"
-              />
-              {x2 - x1 > 44 && (
-                <text
-                  x={(x1 + x2) / 2}
-                  y={top + 14}
-                  fontSize={11}
-                  textAnchor="middle"
-                  style={{ fontStretch: '78%' }}
-                >
-                  {code}
-                </text>
-              )}
-            </g>
-          );
-        })}
     </g>
   );
 }

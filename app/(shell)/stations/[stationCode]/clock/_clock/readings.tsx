@@ -69,7 +69,7 @@ export function Readings({
                 <br />
                 µs
               </th>
-              <th scope="col" className="gap">
+              <th scope="col" className="gap from-narrow">
                 In words
               </th>
               <th scope="col" className="num">
@@ -77,11 +77,15 @@ export function Readings({
                 <br />
                 µs
               </th>
-              <th scope="col" className="gap">
+              <th scope="col" className="gap from-narrow">
                 Second
               </th>
-              <th scope="col">Way</th>
-              <th scope="col">State</th>
+              <th scope="col" className="from-narrow">
+                Way
+              </th>
+              <th scope="col" className="gap">
+                State
+              </th>
               {clock.canSetAside && <th scope="col">Do</th>}
             </tr>
           </thead>
@@ -92,16 +96,18 @@ export function Readings({
                   {dayText(one.atMs)} {clockText(one.atMs)}
                 </th>
                 <td className="num">{signedText(one.offsetSeconds * 1e6, 3)}</td>
-                <td className="gap">{offsetWords(one.offsetSeconds).split(' ')[0]?.toLowerCase()}</td>
+                <td className="gap from-narrow">
+                  {offsetWords(one.offsetSeconds).split(' ')[0]?.toLowerCase()}
+                </td>
                 <td className="num">
                   {one.fromFitSeconds === null ? '' : signedText(one.fromFitSeconds * 1e6, 3)}
                 </td>
-                <td className="gap">
+                <td className="gap from-narrow">
                   {SECONDS[one.secondCheck]}
                   {one.secondOff === null ? '' : ` by ${numberText(one.secondOff)} s`}
                 </td>
-                <td>{ORIGINS[one.origin]}</td>
-                <td>
+                <td className="from-narrow">{ORIGINS[one.origin]}</td>
+                <td className="gap">
                   {one.state === 'used'
                     ? one.isFar
                       ? 'set aside by the fit'
