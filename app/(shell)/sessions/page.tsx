@@ -3,6 +3,7 @@ import { forbidden } from 'next/navigation';
 import { Suspense } from 'react';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
+import type { SessionState } from '@/src/data/session/dto';
 import { listSessions } from '@/src/data/session/read';
 import { listStations } from '@/src/data/station/read';
 import type { Viewer } from '@/src/access/policy';
@@ -10,10 +11,16 @@ import { nowMs } from '@/src/env';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { PageFrame } from '../_masthead/page-frame';
 import { Listing } from './_list/listing';
+import { Problems } from './_list/problems';
 import { Waiting } from './_list/waiting';
 import './_list/list.css';
 
 export const metadata: Metadata = { title: 'Sessions' };
+
+/** States in which a plan can still be mended. */
+const OPEN: readonly SessionState[] = ['draft', 'offered', 'published'];
+/** Of the sessions ahead, the soonest: each is checked whole. */
+const MOST_CHECKED = 12;
 
 type SearchParams = Promise<Record<string, string | string[] | undefined>>;
 
@@ -38,6 +45,10 @@ async function Sessions({ viewer, now, find }: { viewer: Viewer; now: number; fi
   const named = await listStations(viewer, codes);
   if (!named.ok) forbidden();
   const stations = staveOrder(named.stations).map(({ code, name }) => ({ code, name }));
+  const open = answer.sessions.filter(
+    ({ canReadPlan, state, startMs, lengthSeconds }) =>
+      canReadPlan && OPEN.includes(state) && startMs + lengthSeconds * 1000 > now,
+  );
   return (
     <Listing
       sessions={answer.sessions}
@@ -45,6 +56,14 @@ async function Sessions({ viewer, now, find }: { viewer: Viewer; now: number; fi
       nowMs={now}
       find={find}
       canMake={answer.canMake}
+      problems={Object.fromEntries(
+        open.slice(-MOST_CHECKED).map(({ id, code }) => [
+          id,
+          <Suspense key={id} fallback={null}>
+            <Problems viewer={viewer} code={code} />
+          </Suspense>,
+        ]),
+      )}
     />
   );
 }

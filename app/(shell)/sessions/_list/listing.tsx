@@ -1,7 +1,7 @@
 'use client';
 
 import Link from 'next/link';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { AnswerLegend } from '@/app/_ui/answer-legend';
 import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { Segments } from '@/app/_ui/segments';
@@ -19,6 +19,8 @@ type ListingProps = {
   nowMs: number;
   find: string;
   canMake: boolean;
+  /** by session, for those that can still be mended */
+  problems: Readonly<Record<string, ReactNode>>;
 };
 
 const SHOWS = [
@@ -27,7 +29,7 @@ const SHOWS = [
   { value: 'all', label: 'All' },
 ] as const;
 
-export function Listing({ sessions, stations, nowMs, find: asked, canMake }: ListingProps) {
+export function Listing({ sessions, stations, nowMs, find: asked, canMake, problems }: ListingProps) {
   const [show, setShow] = useState<Show>(asked === '' ? 'ahead' : 'all');
   const [find, setFind] = useState(asked);
   const shown = shownSessions(sessions, { show, find, nowMs });
@@ -61,8 +63,12 @@ export function Listing({ sessions, stations, nowMs, find: asked, canMake }: Lis
         )}
       </div>
       <Days sessions={sessions} stations={stations} nowMs={nowMs} />
-      {shown.length > 0 && <SessionTable sessions={shown} stations={stations} nowMs={nowMs} />}
-      {shown.some(({ offer }) => offer !== null) && <AnswerLegend code={stations[0]?.code ?? ''} />}
+      {shown.length > 0 && (
+        <div className="list-sheet flex-1">
+          <SessionTable sessions={shown} stations={stations} nowMs={nowMs} problems={problems} />
+          {shown.some(({ offer }) => offer !== null) && <AnswerLegend code={stations[0]?.code ?? ''} />}
+        </div>
+      )}
       {sessions.length === 0 && (
         <EmptySheet level={2} heading="No sessions yet">
           {canMake

@@ -8,7 +8,7 @@ import { checkPlan } from '@/src/schedule/checks';
 import { unpackPlan } from '@/src/schedule/plan-rows';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { SessionFrame } from '../_head/session-frame';
-import { planContextOf } from '../_plan/plan-context';
+import { planContextOf } from '../../_plan/plan-context';
 import { Slots } from './_slots/slots';
 import './_slots/slots.css';
 

@@ -2,7 +2,7 @@ import { numberText } from '@/app/_ui/format';
 import type { CoverageSheet } from '@/src/data/coverage/dto';
 import type { Extreme } from '@/src/outlook/coverage';
 import { listText } from '@/src/schedule/words';
-import { sourceWords } from '../../_plan/source-words';
+import { sourceWords } from '../../../_plan/source-words';
 import { baselineHours, endsText, MAS_PER_RAD, MEGA } from './model';
 
 type Shown = NonNullable<CoverageSheet['shown']>;

@@ -6,7 +6,7 @@ import { FringeMark } from '@/app/_ui/fringe-mark';
 import { dayText, numberText } from '@/app/_ui/format';
 import { isExpected, snrText, type OutlookCell } from '@/src/outlook/fringe-outlook';
 import { verdictWords, whySentences } from '@/src/outlook/why';
-import type { PageContext } from '../../_plan/plan-context';
+import type { PageContext } from '../../../_plan/plan-context';
 import { ClockPlace } from './clock-place';
 import { scanStopMs, type PlanSpan } from '@/src/schedule/plan';
 import { clockText, lengthText } from '@/src/schedule/words';

@@ -3,7 +3,7 @@ import type { PlaceInWindow } from '@/src/outlook/clock-place';
 import type { OutlookCell } from '@/src/outlook/fringe-outlook';
 import type { Scan } from '@/src/schedule/plan';
 import { listText } from '@/src/schedule/words';
-import type { PageContext } from '../../_plan/plan-context';
+import type { PageContext } from '../../../_plan/plan-context';
 
 const WIDTH = 300;
 const EDGE = 52;

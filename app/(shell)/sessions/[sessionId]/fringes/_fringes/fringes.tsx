@@ -6,7 +6,7 @@ import RefreshOn from '@/app/_ui/refresh-on';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { planContextOf } from '../../_plan/plan-context';
+import { planContextOf } from '../../../_plan/plan-context';
 import { CellPanel } from './cell-panel';
 import { ExportButton } from './export-button';
 import { FilterPanel } from './filter-panel';

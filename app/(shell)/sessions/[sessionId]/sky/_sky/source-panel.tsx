@@ -2,7 +2,7 @@ import { angleText } from '@/app/_ui/format';
 import type { SkySheet, SkySource } from '@/src/data/sky/dto';
 import type { StationCode } from '@/src/schedule/plan';
 import { declinationText, rightAscensionText } from '@/src/units/sexagesimal';
-import { sourceWords } from '../../_plan/source-words';
+import { sourceWords } from '../../../_plan/source-words';
 import { highestOf, markText, togetherIn, windowsOf, type Mark } from './model';
 import { hoursText, togetherSentence } from './words';
 import { Spans } from './spans';

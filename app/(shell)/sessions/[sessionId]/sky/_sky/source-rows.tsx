@@ -2,7 +2,7 @@
 
 import { numberText } from '@/app/_ui/format';
 import type { KeyboardEvent } from 'react';
-import { sourceWords } from '../../_plan/source-words';
+import { sourceWords } from '../../../_plan/source-words';
 import { markText, type Mark, type Row, type Span } from './model';
 import { FIGURES, ROW } from './row-grid';
 import { crisp, hourTicks, xOf, type Scale } from './scale';

@@ -1,6 +1,6 @@
 import { numberText } from '@/app/_ui/format';
 import type { SkySheet } from '@/src/data/sky/dto';
-import { sourceWords } from '../../_plan/source-words';
+import { sourceWords } from '../../../_plan/source-words';
 import { markText, type Mark, type Row } from './model';
 import { hoursText } from './words';
 import { Spans } from './spans';

@@ -4,7 +4,7 @@ import { createStore, type StoreApi } from 'zustand/vanilla';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
-import { planContextOf } from '../../_plan/plan-context';
+import { planContextOf } from '../../../_plan/plan-context';
 import { clampView, HOUR } from './scale';
 import type { TimelineState } from './state';
 
