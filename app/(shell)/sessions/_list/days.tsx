@@ -126,11 +126,11 @@ function Block({
       <rect
         {...box}
         style={{ width }}
-        fill={isFilled ? 'var(--ink)' : answer ? 'var(--sheet)' : 'var(--sunk)'}
+        fill={isFilled ? 'var(--fill)' : answer ? 'var(--sheet)' : 'var(--sunk)'}
         stroke={answer ? stroke : 'var(--ink2)'}
         strokeDasharray={isDashed ? '2 2' : undefined}
       />
-      {answer === 'partly' && <rect {...box} style={{ width: `calc(${width} / 2)` }} fill="var(--ink)" />}
+      {answer === 'partly' && <rect {...box} style={{ width: `calc(${width} / 2)` }} fill="var(--fill)" />}
     </>
   );
 }

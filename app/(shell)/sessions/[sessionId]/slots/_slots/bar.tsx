@@ -58,7 +58,7 @@ export function Bar({ slot, x }: { slot: Drawn; x: Scale }) {
         strokeDasharray={isAsked ? '4 3' : undefined}
       />
       {filled.map((span) => (
-        <rect key={span[0]} {...rect(span)} fill="var(--ink)" />
+        <rect key={span[0]} {...rect(span)} fill="var(--fill)" />
       ))}
       {without.map((span) => (
         <rect key={span[0]} {...rect(span)} fill="url(#slot-hatch)" stroke="var(--ink2)" />
@@ -75,7 +75,7 @@ export function Bar({ slot, x }: { slot: Drawn; x: Scale }) {
           fontWeight={600}
           textAnchor="middle"
           style={{
-            fill: filled.length > 0 ? 'var(--sheet)' : 'var(--ink)',
+            fill: filled.length > 0 ? 'var(--on-ink)' : 'var(--ink)',
             ...(answer === 'declined' && {
               paintOrder: 'stroke',
               stroke: 'var(--sheet)',

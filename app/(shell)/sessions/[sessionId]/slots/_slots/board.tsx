@@ -37,18 +37,15 @@ export function Board({ board, slots, drawnOf, chosen, onChoose }: Props) {
         <span className="slots-name">Station</span>
         <div ref={box}>
           <svg width={width} height={38} className="block">
-            {hours.map((ms, index) => (
-              <g key={ms}>
-                {(isDay(ms) || (index === 0 && !hours.some((one) => isDay(one) && x(one) - x(ms) < 110))) && (
-                  <text x={x(ms) - (index === 0 ? 8 : 0)} y={13} fontSize={12} fontWeight={600}>
-                    {index === 0 ? `${new Date(ms).getUTCFullYear()} day ` : 'day '}
-                    {dayText(ms)}
-                  </text>
-                )}
-                <text x={x(ms)} y={32} fontSize={12} fontWeight={600} textAnchor="middle">
-                  {minuteText(ms).slice(0, 2)}
-                </text>
-              </g>
+            {daysOf(hours, fromMs, x).map(({ ms, at, hasYear }) => (
+              <text key={ms} x={at} y={13} fontSize={12} fontWeight={600}>
+                {hasYear && `${new Date(ms).getUTCFullYear()} `}day {dayText(ms)}
+              </text>
+            ))}
+            {hours.map((ms) => (
+              <text key={ms} x={x(ms)} y={32} fontSize={12} fontWeight={600} textAnchor="middle">
+                {minuteText(ms).slice(0, 2)}
+              </text>
             ))}
           </svg>
         </div>
@@ -128,6 +125,19 @@ function Night({ slot, x, fromMs, untilMs }: { slot: SlotDto; x: Scale; fromMs: 
       <path d={path} stroke="var(--ink2)" strokeWidth={4} />
     </g>
   );
+}
+
+const DAY_WORD = 56;
+const DAY_WITH_YEAR = 100;
+
+/** The day at the left edge and at each midnight; the first with its year where there is room. */
+function daysOf(hours: readonly number[], fromMs: number, x: Scale) {
+  const midnights = hours.filter(isDay);
+  const room = x(midnights[0] ?? Infinity) - x(fromMs);
+  return [
+    ...(room > DAY_WORD ? [{ ms: fromMs, at: x(fromMs), hasYear: room > DAY_WITH_YEAR }] : []),
+    ...midnights.map((ms) => ({ ms, at: x(ms), hasYear: false })),
+  ];
 }
 
 function ticksOf(fromMs: number, untilMs: number, width: number): number[] {

@@ -135,6 +135,7 @@ export function Slots({ board, stamp, toFix, station }: Props) {
             </p>
           )}
           <AnswerLegend code={slots[0]?.stationCode ?? ''} />
+          <p className="help px-3.5 pb-2">Thick line under the hours: 22 to 06 in the station’s time.</p>
           <p className="slots-sums">
             <span>
               <b>
