@@ -1,4 +1,5 @@
 import type { Coverage } from '../../outlook/coverage';
+import type { StationSky } from '../../outlook/source-sky';
 import type { PlanSource, PlanStation } from '../../schedule/context';
 import type { SessionHead } from '../session/dto';
 
@@ -20,7 +21,8 @@ export type CoverageSheet = {
   version: CoverageVersion;
   observed: Observed[];
   /** null where the plan has no scan */
-  shown: (Observed & { modes: string[]; coverage: Coverage }) | null;
+  shown: (Observed & { modes: string[]; coverage: Coverage; skies: StationSky[] }) | null;
+  span: { startMs: number; endMs: number };
   /** numbers of the scans that have a track */
   scanNumbers: Readonly<Record<string, string>>;
   /** what was asked for and is not there */

@@ -3,6 +3,7 @@ import { db } from '../../../db/client';
 import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
 import { coverageOf, observedIn } from '../../outlook/coverage';
+import { sourceSky } from '../../outlook/source-sky';
 import type { PlanContext } from '../../schedule/context';
 import type { Plan } from '../../schedule/plan';
 import { unpackPlan } from '../../schedule/plan-rows';
@@ -22,6 +23,8 @@ import type { CoverageSheet, CoverageVersion, Observed } from './dto';
 
 /** Between points of a track the Earth turns by half a degree. */
 const STEP_SECONDS = 120;
+/** Between points of a line of elevation: 2.5° of the Earth’s turning. */
+const SKY_STEP_SECONDS = 600;
 
 /** What is asked of an address: all of it may be absent, none of it is trusted. */
 export type CoverageWanted = { source?: string; band?: string; plan?: string };
@@ -56,7 +59,14 @@ export const readCoverage = (
         versions: [{ kind: 'draft' }, ...(snapshot ? [offered(snapshot)] : [])],
         version: isOffered ? offered(snapshot) : { kind: 'draft' },
         observed,
-        shown: chosen && coverage && { ...chosen, coverage, modes: modeNames(plan, context, chosen) },
+        shown: chosen &&
+          coverage && {
+            ...chosen,
+            coverage,
+            skies: sourceSky(plan, context, { ...chosen, stepSeconds: SKY_STEP_SECONDS }),
+            modes: modeNames(plan, context, chosen),
+          },
+        span: { startMs: plan.span.startMs, endMs: plan.span.startMs + plan.span.lengthSeconds * 1000 },
         scanNumbers: Object.fromEntries(
           [...scanNumbers(plan)].filter(([scanId]) => coverage?.scans.includes(scanId)),
         ),

@@ -12,9 +12,11 @@ import type { CoverageSheet, CoverageVersion, Observed } from '@/src/data/covera
 import { liveKeys } from '@/app/_ui/live-keys';
 import RefreshOn from '@/app/_ui/refresh-on';
 import { uvCsv } from './csv';
+import { ElevationChart } from './elevation-chart';
 import { svgText } from './figure-file';
 import { baselineRowsOf, MEGA, type Ends } from './model';
 import { NumbersPanel } from './numbers-panel';
+import { SkyDiscs } from './sky-discs';
 import { TimeTables } from './time-tables';
 import { UvPlot } from './uv-plot';
 
@@ -48,6 +50,10 @@ export function CoverageView({ sheet }: { sheet: CoverageSheet }) {
   );
 }
 
+/** The skies in the order of the staves. */
+const inOrder = (sheet: CoverageSheet, skies: NonNullable<CoverageSheet['shown']>['skies']) =>
+  staveOrder(sheet.stations).flatMap(({ code }) => skies.filter((one) => one.code === code));
+
 type ShownProps = { sheet: CoverageSheet; shown: NonNullable<CoverageSheet['shown']> };
 
 function Shown({ sheet, shown }: ShownProps) {
@@ -55,6 +61,7 @@ function Shown({ sheet, shown }: ShownProps) {
   const [lit, setLit] = useState<Ends | null>(null);
   const box = useRef<HTMLDivElement>(null);
   const rows = baselineRowsOf(coverage);
+  const skies = inOrder(sheet, shown.skies);
   const name = `${sheet.session.code}-${shown.name}-uv`;
   const saveFigure = () => {
     const figure = box.current?.querySelector<SVGSVGElement>('svg[data-figure]');
@@ -102,6 +109,23 @@ function Shown({ sheet, shown }: ShownProps) {
               lit={lit}
               onLight={setLit}
             />
+          </section>
+          <section className="border-t-head border-ink px-4.5 py-[12px]" aria-labelledby="coverage-elevation">
+            <div className="mb-1.5 flex items-baseline justify-between gap-2">
+              <h2 id="coverage-elevation">Elevation</h2>
+              <span className="help">thick where on the source; numbers are scans</span>
+            </div>
+            <ElevationChart skies={skies} span={sheet.span} numbers={sheet.scanNumbers} />
+          </section>
+          <section
+            className="border-t-head border-ink px-4.5 py-[12px] wide:border-l wide:border-l-rule"
+            aria-labelledby="coverage-sky"
+          >
+            <div className="mb-1.5 flex items-baseline justify-between gap-2">
+              <h2 id="coverage-sky">Sky over each station</h2>
+              <span className="help">north up, east left, rim = horizon</span>
+            </div>
+            <SkyDiscs skies={skies} />
           </section>
         </div>
         <NumbersPanel shown={shown} />
