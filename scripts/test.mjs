@@ -31,7 +31,7 @@ const steps = [
     env: { PLAYWRIGHT_JSON_OUTPUT_FILE: report('e2e') },
     count: () => countBrowser(read('e2e')),
   },
-  { title: 'Weight of the timeline page', args: ['scripts/budget.mjs'] },
+  { title: 'Weight of the pages', args: ['--import', 'tsx', 'scripts/budget.mts'] },
 ];
 
 const total = { passed: 0, failed: 0 };
