@@ -59,12 +59,19 @@ async function weigh({ address, name, heading }: ShownPage, context: BrowserCont
   if (!answer) throw new Error(`${name} gave no answer.`);
   const named = scriptsOf(await answer.text());
   if (named.length === 0) throw new Error(`${name} names no scripts: nothing was weighed.`);
+  // the timeline is weighed when it can be worked with; what it loads after that keeps nobody waiting
   if (name === LIMITED) await page.locator('[data-ready]').first().waitFor();
-  else await page.getByRole('heading', { name: heading }).first().waitFor();
-  await page.waitForLoadState('networkidle');
+  else {
+    await page.getByRole('heading', { name: heading }).first().waitFor();
+    await page.waitForLoadState('networkidle');
+  }
   const total = (await Promise.all(sizes)).reduce((sum, size) => sum + size, 0);
   return { named: sum(named), loaded: sum([...loaded]), total };
 }
 
-const sum = (scripts: readonly string[]) =>
-  scripts.reduce((all, script) => all + gzipped(path.join(root, '.next', decodeURIComponent(script))), 0);
+function sum(scripts: readonly string[]): number {
+  return scripts.reduce(
+    (all, script) => all + gzipped(path.join(root, '.next', decodeURIComponent(script))),
+    0,
+  );
+}

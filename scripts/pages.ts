@@ -125,6 +125,7 @@ export const PAGES: readonly ShownPage[] = [
     act: async (page) => {
       await chooseScan(page);
       await press('Edit scan')(page);
+      await page.getByRole('dialog').waitFor();
     },
   },
   { name: 'sky', by: 'scheduler', address: '/sessions/ARC-031/sky', heading: /./ },

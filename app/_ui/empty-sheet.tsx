@@ -1,8 +1,5 @@
-'use client';
-
 import type { ReactNode } from 'react';
 import { RuledStaves } from './ruled-staves';
-import { useStaveCodes } from './stave-codes';
 
 type EmptySheetProps = {
   heading: string;
@@ -25,11 +22,10 @@ export function EmptySheet({
   isBroken = false,
   level = 1,
 }: EmptySheetProps) {
-  const network = useStaveCodes();
   const Heading = level === 1 ? 'h1' : 'h2';
   return (
     <div className="empty-sheet">
-      <RuledStaves codes={codes ?? network} />
+      <RuledStaves codes={codes} />
       <div className={isBroken ? 'empty-box empty-box-broken' : 'empty-box'}>
         <Heading>{heading}</Heading>
         <div className="empty-words">{children}</div>

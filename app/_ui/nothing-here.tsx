@@ -7,11 +7,12 @@ import { EmptySheet } from './empty-sheet';
 const LONGEST_SHOWN = 40;
 
 /** Says which session or page is not there; what may not be seen is said in the same words. */
-export function NothingHere() {
+export function NothingHere({ codes }: { codes?: readonly string[] }) {
   const { sessionId } = useParams<{ sessionId?: string }>();
   const name = sessionId === undefined ? null : readable(sessionId).slice(0, LONGEST_SHOWN);
   return (
     <EmptySheet
+      codes={codes}
       heading={name === null ? 'There is no page at this address' : `There is no session ${name}`}
       actions={
         <>

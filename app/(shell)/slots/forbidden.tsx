@@ -1,6 +1,8 @@
 import { Forbidden } from '@/app/_ui/forbidden';
+import { networkOf } from '@/src/data/station/read';
 import { currentViewer } from '@/src/viewer/current-viewer';
 
 export default async function NoSlots() {
-  return <Forbidden verb="slot.reply" viewer={await currentViewer()} />;
+  const viewer = await currentViewer();
+  return <Forbidden verb="slot.reply" viewer={viewer} stations={await networkOf(viewer)} />;
 }

@@ -35,6 +35,12 @@ export const listStations = (
     };
   });
 
+/** The stations in use, west or east of each other; none for someone who may not read them. */
+export async function networkOf(viewer: Viewer | null): Promise<StationListItem[]> {
+  const network = viewer && (await listStations(viewer, 'in use'));
+  return network?.ok ? network.stations : [];
+}
+
 /** The whole catalogue, the retired ones too. */
 export const listStationRows = (
   viewer: Viewer,

@@ -1,6 +1,8 @@
 import { Forbidden } from '@/app/_ui/forbidden';
+import { networkOf } from '@/src/data/station/read';
 import { currentViewer } from '@/src/viewer/current-viewer';
 
 export default async function NoDraft() {
-  return <Forbidden verb="plan.read-draft" viewer={await currentViewer()} />;
+  const viewer = await currentViewer();
+  return <Forbidden verb="plan.read-draft" viewer={viewer} stations={await networkOf(viewer)} />;
 }

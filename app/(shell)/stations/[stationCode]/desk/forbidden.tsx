@@ -1,6 +1,8 @@
 import { Forbidden } from '@/app/_ui/forbidden';
+import { networkOf } from '@/src/data/station/read';
 import { currentViewer } from '@/src/viewer/current-viewer';
 
 export default async function NoDesk() {
-  return <Forbidden verb="desk.read" viewer={await currentViewer()} />;
+  const viewer = await currentViewer();
+  return <Forbidden verb="desk.read" viewer={viewer} stations={await networkOf(viewer)} />;
 }

@@ -132,7 +132,7 @@ function MatrixTable({ rows, columns, filter, stations, context, choice }: Props
         </tfoot>
       </table>
       <p className="help px-3.5 py-2">
-        Figures are SNR, cut off, not rounded. Clocks are not judged until a clock log is kept.
+        Figures are SNR, cut off, not rounded. <b>clk</b>: the clock limits, the search window may be missed.
       </p>
     </div>
   );

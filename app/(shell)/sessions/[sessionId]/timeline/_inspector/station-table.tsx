@@ -2,11 +2,15 @@
 
 import { useActs } from '../_timeline/acts';
 import { useDerived } from '../_timeline/derived';
-import { columnLengthText } from '@/app/_ui/format';
+import { columnLengthText, signedText } from '@/app/_ui/format';
+import { predictClock } from '@/src/clock/fit';
+import { offsetWords } from '@/src/clock/reading';
 import { useTimeline } from '../_timeline/store';
 import { toggleStation } from '@/src/schedule/gestures/toggle-station';
 import type { PathLeg } from '@/src/schedule/paths';
-import type { Scan } from '@/src/schedule/plan';
+import type { Scan, StationCode } from '@/src/schedule/plan';
+
+const MS_PER_HOUR = 3_600_000;
 
 /** Where each dish points, how long it slews and what time it has to spare. */
 export function StationTable({ scan }: { scan: Scan }) {
@@ -17,34 +21,21 @@ export function StationTable({ scan }: { scan: Scan }) {
   const legs = useDerived((derived) => derived.legs);
   const { dispatch } = useActs();
   return (
-    <table className="tt">
-      <caption className="sr-only">Stations of the scan</caption>
+    <table className="tt tt-tight">
+      <caption className="sr-only">
+        Stations of the scan; clocks are station clock minus UTC, via GPS, positive = early
+      </caption>
       <thead>
         <tr>
           <th scope="col">
             <span className="sr-only">Station</span>
           </th>
-          <th scope="col" className="num">
-            Az
-          </th>
-          <th scope="col" className="num">
-            El
-          </th>
-          <th scope="col" className="num">
-            Slew
-            <br />
-            min:s
-          </th>
-          <th scope="col" className="num">
-            Spare
-            <br />
-            min:s
-          </th>
-          {canEdit && (
-            <th scope="col" className="num">
-              <span className="sr-only">Take out or put in</span>
-            </th>
-          )}
+          <Head name="Az" />
+          <Head name="El" />
+          <Head name="Slew" unit="min:s" />
+          <Head name="Spare" unit="min:s" />
+          <Head name="Clock minus" unit="UTC, µs" />
+          <Head name="Age" unit="h" />
         </tr>
       </thead>
       <tbody>
@@ -54,9 +45,17 @@ export function StationTable({ scan }: { scan: Scan }) {
           return (
             <tr key={code} className={chosen === code ? 'bg-wash' : ''}>
               <th scope="row">
-                <span className={`code ${takesPart ? 'text-ink' : 'text-ink3'}`} title={name}>
-                  {code}
-                </span>
+                <label className="flex items-center gap-1.5" title={name}>
+                  {canEdit && (
+                    <input
+                      type="checkbox"
+                      aria-label={`${code} takes part`}
+                      checked={takesPart}
+                      onChange={() => dispatch((plan) => toggleStation(plan, scan.id, code))}
+                    />
+                  )}
+                  <span className={`code ${takesPart ? 'text-ink' : 'text-ink3'}`}>{code}</span>
+                </label>
               </th>
               {leg ? (
                 <LegCells leg={leg} least={least} />
@@ -65,23 +64,57 @@ export function StationTable({ scan }: { scan: Scan }) {
                   left out
                 </td>
               )}
-              {canEdit && (
-                <td className="num whitespace-nowrap">
-                  <button
-                    type="button"
-                    className="text-small text-ink2 underline underline-offset-[3px]"
-                    aria-label={`${takesPart ? 'Take' : 'Put'} ${code} ${takesPart ? 'out' : 'in'}`}
-                    onClick={() => dispatch((plan) => toggleStation(plan, scan.id, code))}
-                  >
-                    {takesPart ? 'out' : 'in'}
-                  </button>
-                </td>
-              )}
+              <ClockCells code={code} scan={scan} />
             </tr>
           );
         })}
       </tbody>
     </table>
+  );
+}
+
+function Head({ name, unit }: { name: string; unit?: string }) {
+  return (
+    <th scope="col" className="num">
+      {name}
+      {unit !== undefined && (
+        <>
+          <br />
+          {unit}
+        </>
+      )}
+    </th>
+  );
+}
+
+/** What the clock log predicts for the middle of the scan, and how old its newest reading is now. */
+function ClockCells({ code, scan }: { code: StationCode; scan: Scan }) {
+  const clock = useTimeline((state) => state.clocks[code]);
+  const nowMs = useTimeline((state) => state.context.nowMs);
+  const noteAfterHours = useTimeline((state) => state.context.settings.clockRules.noteAfterHours);
+  if (!clock?.fit || clock.readAtMs === null)
+    return (
+      <td className="num text-ink3" colSpan={2}>
+        not read
+      </td>
+    );
+  const middle = new Date(scan.startMs + scan.lengthSeconds * 500);
+  const { offsetSeconds } = predictClock(clock.fit, middle);
+  const hours = Math.floor((nowMs - clock.readAtMs) / MS_PER_HOUR);
+  const isOld = hours >= noteAfterHours;
+  return (
+    <>
+      <td className="num" title={`${code} clock: ${offsetWords(offsetSeconds)}`}>
+        {signedText(offsetSeconds * 1e6, 3)}
+      </td>
+      <td
+        className={`num ${isOld ? 'font-strong text-ochre' : ''}`}
+        title={isOld ? 'older than the note age' : undefined}
+      >
+        {isOld && 'clk '}
+        {hours}
+      </td>
+    </>
   );
 }
 

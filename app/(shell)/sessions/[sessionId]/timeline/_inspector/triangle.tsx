@@ -43,12 +43,18 @@ export function Triangle({ scan }: { scan: Scan }) {
         <Key verdict="none" word={`none, under ${limits.doubtful}`} />
         <Key verdict="unknown" word="no data" />
         <Key verdict="not-on" word="not on source" />
+        {cells.some(({ reason }) => reason === 'clock') && (
+          <div className="inline-flex items-center gap-[5px]">
+            <dt className="font-strong">clk</dt>
+            <dd>the clock limits</dd>
+          </div>
+        )}
       </dl>
       {missing.length > 0 && <p className="help mt-2">No data: {missing.join(', ')}.</p>}
       <p className="help mt-2">
         From zenith SEFDs (no opacity or gain curve is entered), bandwidth, time, flux and source size
-        {mode?.coherenceSeconds ? `, with ${mode.coherenceSeconds} s of coherence` : ''}. Clocks are not
-        judged here.
+        {mode?.coherenceSeconds ? `, with ${mode.coherenceSeconds} s of coherence` : ''}; clocks from the log,
+        against the correlator’s search window.
       </p>
     </section>
   );
@@ -172,7 +178,7 @@ function CellTable({ cells }: { cells: readonly OutlookCell[] }) {
                   ? `no data: ${cell.missing}`
                   : cell.verdict === 'not-on'
                     ? reasonWord(cell)
-                    : cell.verdict}
+                    : `${cell.verdict}${cell.reason === 'clock' ? ', the clock limits' : ''}`}
               </td>
               <td>{cell.snr === null ? 'none' : snrText(cell.snr)}</td>
             </tr>
@@ -196,6 +202,7 @@ const reasonWord = (cell: OutlookCell) =>
 function cellWord(cell: OutlookCell): string {
   if (cell.verdict === 'unknown') return '';
   if (cell.verdict === 'not-on') return reasonWord(cell);
+  if (cell.reason === 'clock') return 'clk';
   return cell.snr === null ? '' : snrText(cell.snr);
 }
 

@@ -49,6 +49,7 @@ export type TimelineState = {
   context: OutlookContext;
   answers: Timeline['answers'];
   away: Timeline['away'];
+  clocks: Timeline['clocks'];
   mode: PlanMode;
   canEdit: boolean;
 

@@ -45,6 +45,7 @@ export const stationsWord = (timeline: Timeline) => ({
   context: planContextOf(timeline),
   answers: timeline.answers,
   away: timeline.away,
+  clocks: timeline.clocks,
 });
 
 const StoreContext = createContext<TimelineStore | null>(null);
