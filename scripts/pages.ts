@@ -14,6 +14,8 @@ export type ShownPage = {
   status?: number;
   /** what is done on it before it is looked at */
   act?: (page: Page) => Promise<void>;
+  /** done once, by who can, before the page is shown */
+  before?: { by: Visitor; address: string; act: (page: Page) => Promise<void> };
   /** as it is printed */
   isPrinted?: boolean;
 };
@@ -209,7 +211,24 @@ export const PAGES: readonly ShownPage[] = [
   { name: 'source-new', by: 'scheduler', address: '/sources/new', heading: /./ },
   { name: 'modes', by: 'investigator', address: '/modes', heading: /^Modes$/ },
   { name: 'mode-new', by: 'scheduler', address: '/modes/new', heading: /./ },
-  { name: 'mail', by: 'admin', address: '/mail', heading: /./ },
+  { name: 'mail-none', by: 'admin', address: '/mail', heading: /./ },
+  {
+    name: 'mail',
+    by: 'admin',
+    address: '/mail',
+    heading: /./,
+    before: {
+      by: 'scheduler',
+      address: '/sessions/ARC-031/slots',
+      act: async (page) => {
+        await press(/^Offer ARC-031/)(page);
+        const dialog = page.getByRole('dialog');
+        await dialog.getByRole('checkbox').check();
+        await dialog.getByRole('button', { name: /^Offer with/ }).click();
+        await dialog.waitFor({ state: 'hidden' });
+      },
+    },
+  },
   {
     name: 'no-page',
     by: 'scheduler',
@@ -230,6 +249,28 @@ export const PAGES: readonly ShownPage[] = [
     by: 'correlator',
     address: '/sessions/ARC-031/fringes',
     heading: /./,
+    isPrinted: true,
+  },
+  {
+    name: 'print-timeline',
+    by: 'scheduler',
+    address: '/sessions/ARC-031/timeline',
+    heading: /./,
+    act: drawn,
+    isPrinted: true,
+  },
+  {
+    name: 'print-clock',
+    by: 'correlator',
+    address: '/stations/Af/clock',
+    heading: /^Arrow Fell$/,
+    isPrinted: true,
+  },
+  {
+    name: 'print-station',
+    by: 'scheduler',
+    address: '/stations/Dp',
+    heading: /^Drum Point$/,
     isPrinted: true,
   },
   {

@@ -31,6 +31,7 @@ await onStage('pictures', process.env.PICTURES_PORT ?? '4321', async ({ address,
   for (const shown of PAGES.filter(({ name }) => wanted.length === 0 || wanted.includes(name))) {
     const context = shown.by === null ? stranger : await as(shown.by);
     try {
+      if (shown.before) await prepare(shown.before, await as(shown.before.by));
       made += await picture(shown, context, address);
       console.log(`pictured  ${shown.name}`);
     } catch (error) {
@@ -41,6 +42,14 @@ await onStage('pictures', process.env.PICTURES_PORT ?? '4321', async ({ address,
 });
 console.log(`${made} pictures in ${FOLDER}/, ${failed.length} pages failed`);
 if (failed.length > 0) process.exitCode = 1;
+
+async function prepare({ address, act }: NonNullable<ShownPage['before']>, context: BrowserContext) {
+  const page = await context.newPage();
+  await page.goto(address);
+  await page.waitForLoadState('networkidle');
+  await act(page);
+  await page.close();
+}
 
 async function picture(shown: ShownPage, context: BrowserContext, address: string): Promise<number> {
   const page = await context.newPage();

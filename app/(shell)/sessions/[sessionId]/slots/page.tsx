@@ -1,8 +1,10 @@
 import type { Metadata } from 'next';
 import { forbidden, notFound } from 'next/navigation';
+import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { readTimeline } from '@/src/data/plan/read';
 import { readStamp } from '@/src/data/session/stamp';
+import { networkOf } from '@/src/data/station/read';
 import { readSlots } from '@/src/data/slot/read';
 import { checkPlan } from '@/src/schedule/checks';
 import { unpackPlan } from '@/src/schedule/plan-rows';
@@ -38,10 +40,14 @@ export default async function SlotsPage({ params, searchParams }: Props) {
         ({ severity }) => severity === 'fix',
       ).length
     : 0;
+  const codes = staveOrder(await networkOf(viewer))
+    .map(({ code }) => code)
+    .filter((code) => board.session.stations.includes(code));
   return (
     <SessionFrame viewer={viewer} session={board.session} nowMs={board.nowMs}>
       <Slots
         board={board}
+        codes={codes}
         stamp={stamp.ok ? `${stamp.plan} ${stamp.stations}` : undefined}
         toFix={toFix}
         station={typeof station === 'string' ? station : null}

@@ -43,7 +43,7 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
     <>
       <RefreshOn address={liveKeys.stamp(timeline.session.id)} />
       <div className="min-h-bar flex flex-wrap items-center gap-x-3.5 border-b border-rule text-table">
-        <div className="flex h-bar w-tray items-center justify-between px-3.5">
+        <div className="no-print flex h-bar w-tray items-center justify-between px-3.5">
           <h2 className="text-lead">Filter</h2>
           <button type="button" className="text-ink2 underline" onClick={() => setFilter(all)}>
             Clear
@@ -51,7 +51,7 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
         </div>
         <Summary outlook={outlook} />
         <div className="ml-auto flex h-bar items-center gap-2 px-3.5">
-          <span className="text-ink2">Columns by</span>
+          <span className="no-print text-ink2">Columns by</span>
           <div className="seg" role="group" aria-label="Columns by">
             {(['station', 'length'] as const).map((by) => (
               <button
@@ -67,7 +67,7 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
           <ExportButton rows={rows} context={context} code={timeline.session.code} />
         </div>
       </div>
-      <div className="grid min-h-0 flex-1 desk:grid-cols-[176px_minmax(0,1fr)_344px] desk:overflow-hidden">
+      <div className="print-wide grid min-h-0 flex-1 desk:grid-cols-[176px_minmax(0,1fr)_344px] desk:overflow-hidden print:block">
         <FilterPanel
           filter={filter}
           onFilter={setFilter}

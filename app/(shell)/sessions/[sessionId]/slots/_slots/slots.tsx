@@ -32,6 +32,8 @@ const KINDS = { offer: 'Offer', publish: 'Version' } as const;
 
 type Props = {
   board: SlotBoard;
+  /** the session's stations in the order of the staves */
+  codes: readonly string[];
   /** of what the board shows */
   stamp: string | undefined;
   /** open problems of the draft */
@@ -41,7 +43,7 @@ type Props = {
 };
 
 /** What each station is asked for, and what it said. */
-export function Slots({ board, stamp, toFix, station }: Props) {
+export function Slots({ board, codes, stamp, toFix, station }: Props) {
   const { session, offer, draft } = board;
   const slots = eastward(board.slots);
   const named = slots.find(({ stationCode }) => stationCode === station);
@@ -64,7 +66,7 @@ export function Slots({ board, stamp, toFix, station }: Props) {
         {live}
         <EmptySheet
           heading="Nothing is offered yet"
-          codes={session.stations}
+          codes={codes}
           actions={
             board.canOffer && (
               <button
