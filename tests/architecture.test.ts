@@ -142,9 +142,9 @@ describe('one door each', () => {
     expect(shipped.filter(({ text }) => reads.test(text)).map(({ file }) => file)).toEqual(['src/env.ts']);
   });
 
-  it('astronomy-engine is imported by src/sky/engine.ts only', () => {
+  it('astronomy-engine is imported by src/sky/engine.ts only, and by what benchmarks measure against', () => {
     const found = importers(/^astronomy-engine$/).map(({ file }) => file);
-    expect(found).toEqual(['src/sky/engine.ts']);
+    expect(found.filter((file) => !file.startsWith('scripts/bench/peers/'))).toEqual(['src/sky/engine.ts']);
   });
 
   it('Lucia is imported inside src/viewer only', () => {
