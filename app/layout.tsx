@@ -5,6 +5,7 @@ import './_ui/controls.css';
 import './_ui/masthead.css';
 import './_ui/sheet.css';
 import './globals.css';
+import './_ui/forced-colors.css';
 import './_ui/print.css';
 
 export const metadata: Metadata = {

@@ -175,15 +175,10 @@ test('a mode is copied; channels that do not match are refused in a sentence', a
 });
 
 for (const theme of THEMES) {
-  test(`the catalogue’s pages are accessible by ${theme}`, async ({ pageAs, baseURL }) => {
+  test(`what a catalogue’s form refuses is accessible by ${theme}`, async ({ pageAs, baseURL }) => {
     const page = await pageAs('scheduler');
     await setThemeCookie(page, theme, baseURL ?? '');
-    for (const address of ['/stations', '/sources', '/modes', '/stations/new']) {
-      await page.goto(address);
-      await expectAccessible(page);
-    }
     await page.goto('/stations/Em');
-    await expectAccessible(page);
     await page.getByRole('button', { name: 'Edit: Sensitivity by band' }).click();
     await page.getByLabel('SEFD, row 1').fill('none');
     await page.getByRole('button', { name: 'Keep sensitivity' }).click();

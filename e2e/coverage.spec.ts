@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises';
-import { expect, expectAccessible, setThemeCookie, test, THEMES } from './fixtures';
+import { expect, test } from './fixtures';
 
 const ADDRESS = '/sessions/ARC-031/coverage';
 
@@ -57,16 +57,3 @@ test('an address that names no source of the plan is told so', async ({ pageAs }
   await page.goto(`${ADDRESS}?source=J9999`);
   await expect(page.getByText(/^No scan of this plan observes “J9999”\. Shown is J/)).toBeVisible();
 });
-
-for (const theme of THEMES) {
-  test(`the Coverage page is accessible by ${theme}, and fits a phone`, async ({ pageAs, baseURL }) => {
-    const page = await pageAs('investigator');
-    await setThemeCookie(page, theme, baseURL ?? '');
-    await page.goto(ADDRESS);
-    await expect(page.getByRole('heading', { name: 'uv coverage' })).toBeVisible();
-    await expectAccessible(page);
-    await page.setViewportSize({ width: 390, height: 844 });
-    const width = await page.evaluate(() => document.documentElement.scrollWidth);
-    expect(width).toBe(390);
-  });
-}

@@ -2,27 +2,13 @@ import AxeBuilder from '@axe-core/playwright';
 import { existsSync, mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { test as base, expect, type Browser, type Page } from '@playwright/test';
-import { ACCOUNTS, DEMO_PASSWORD } from '../db/seed-data/accounts';
+import { DEMO_PASSWORD } from '../db/seed-data/accounts';
+import { emailOf, type Visitor } from '../scripts/pages';
 
 export const PASSWORD = DEMO_PASSWORD;
 
-export type Person = 'admin' | 'scheduler' | 'operatorAf' | 'operatorBm' | 'correlator' | 'investigator';
-
-const PEOPLE: Readonly<Record<Person, { role: string; stationCode?: string }>> = {
-  admin: { role: 'admin' },
-  scheduler: { role: 'scheduler' },
-  operatorAf: { role: 'operator', stationCode: 'Af' },
-  operatorBm: { role: 'operator', stationCode: 'Bm' },
-  correlator: { role: 'correlator' },
-  investigator: { role: 'investigator' },
-};
-
-export function emailOf(person: Person): string {
-  const { role, stationCode } = PEOPLE[person];
-  const account = ACCOUNTS.find((entry) => entry.role === role && entry.stationCode === stationCode);
-  if (!account) throw new Error(`the demo has no ${person}`);
-  return account.email;
-}
+export type Person = Visitor;
+export { emailOf };
 
 export async function signIn(page: Page, email: string, password = PASSWORD): Promise<void> {
   await page.getByLabel('E-mail').fill(email);
@@ -90,11 +76,14 @@ export async function setThemeCookie(
   await page.context().addCookies([{ name: 'antiphon_theme', value: theme, url: baseURL }]);
 }
 
-/** Nothing that axe finds against WCAG 2.2 A and AA. */
-export async function expectAccessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page })
-    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
-    .analyze();
+/** Nothing that axe finds against WCAG 2.2 A and AA; or of contrast alone, where only the colours are others. */
+export async function expectAccessible(page: Page, of: 'all' | 'contrast' = 'all'): Promise<void> {
+  const builder = new AxeBuilder({ page });
+  const { violations } = await (
+    of === 'contrast'
+      ? builder.withRules(['color-contrast'])
+      : builder.withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
+  ).analyze();
   const said = violations.map(
     ({ id, help, nodes }) => `${id}: ${help}\n  ${nodes.map((n) => n.html).join('\n  ')}`,
   );

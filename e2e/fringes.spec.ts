@@ -1,4 +1,4 @@
-import { expect, expectAccessible, setThemeCookie, test, THEMES } from './fixtures';
+import { expect, test } from './fixtures';
 
 const ADDRESS = '/sessions/ARC-031/fringes';
 
@@ -48,18 +48,3 @@ test('an operator has no part in a draft’s fringes', async ({ pageAs }) => {
   const response = await page.goto(ADDRESS);
   expect(response?.status()).toBe(403);
 });
-
-for (const theme of THEMES) {
-  test(`the fringes page is accessible by ${theme}`, async ({ pageAs, baseURL }) => {
-    const page = await pageAs('correlator');
-    await setThemeCookie(page, theme, baseURL ?? '');
-    await page.goto(ADDRESS);
-    const grid = page.getByRole('grid', { name: /^Expected fringes/ });
-    await expect(grid).toBeVisible();
-    // a few rows have every kind of cell; axe takes a second for each hundred
-    await page.getByLabel('Source', { exact: true }).selectOption({ label: 'J0738+1742' });
-    await grid.focus();
-    await page.keyboard.press('n');
-    await expectAccessible(page);
-  });
-}

@@ -1,4 +1,4 @@
-import { expect, expectAccessible, setThemeCookie, test, THEMES } from './fixtures';
+import { expect, test } from './fixtures';
 
 const ADDRESS = '/sessions/ARC-031/sky';
 
@@ -42,19 +42,3 @@ test('the sky is read as a table and saved as a file', async ({ pageAs }) => {
   await page.getByRole('button', { name: 'Export table' }).click();
   expect((await saving).suggestedFilename()).toBe('ARC-031-sky.csv');
 });
-
-for (const theme of THEMES) {
-  test(`the Sky page is accessible by ${theme}, and fits a phone`, async ({ pageAs, baseURL }) => {
-    const page = await pageAs('scheduler');
-    await setThemeCookie(page, theme, baseURL ?? '');
-    await page.goto(ADDRESS);
-    await expect(page.getByRole('listbox', { name: /^Sources/ })).toBeVisible();
-    await expectAccessible(page);
-    await page.getByRole('button', { name: 'As a table' }).click();
-    await expectAccessible(page);
-    await page.setViewportSize({ width: 390, height: 844 });
-    await page.getByRole('button', { name: 'As bars' }).click();
-    const width = await page.evaluate(() => document.documentElement.scrollWidth);
-    expect(width).toBe(390);
-  });
-}

@@ -173,8 +173,6 @@ test('a plan that leaves the hours of a yes asks again, and tells the others', a
 });
 
 const LOOKS = [
-  ['the board', 'scheduler', () => `/sessions/${code}/slots`, 'In part'],
-  ['the list', 'operatorAf', () => '/slots', null],
   // its page stands in a frame without scripts, where axe cannot go: the text is looked at
   ['the mailbox', 'admin', () => '/mail', 'Plain text'],
 ] as const;

@@ -1,5 +1,5 @@
 import type { Locator, Page } from '@playwright/test';
-import { expect, expectAccessible, setThemeCookie, test, THEMES } from './fixtures';
+import { expect, test } from './fixtures';
 
 const ADDRESS = '/sessions/ARC-031/timeline';
 
@@ -199,17 +199,6 @@ test('a correlator reads the draft and cannot change it', async ({ pageAs }) => 
   await expect(inspector.getByRole('heading', { name: 'Scan 1', exact: true })).toBeVisible();
 });
 
-for (const theme of THEMES) {
-  test(`the timeline is accessible by ${theme}`, async ({ pageAs, baseURL }) => {
-    const page = await pageAs('scheduler');
-    await setThemeCookie(page, theme, baseURL ?? '');
-    const { grid } = await openTimeline(page);
-    await grid.focus();
-    await page.keyboard.press('ArrowRight');
-    await expectAccessible(page);
-  });
-}
-
 test('a scan is edited by its form, errors stand beside the field', async ({ pageAs }) => {
   const page = await pageAs('scheduler');
   const { grid, inspector } = await openTimeline(page);
@@ -229,4 +218,27 @@ test('a scan is edited by its form, errors stand beside the field', async ({ pag
   await expect(inspector.getByText('8 min', { exact: true })).toBeVisible();
   await page.keyboard.press('Control+z');
   await expect(inspector.getByText('10 min', { exact: true })).toBeVisible();
+});
+
+test('removing a scan, and mending a problem, leave the focus on the grid', async ({ pageAs }) => {
+  const page = await pageAs('scheduler');
+  const { grid, inspector } = await openTimeline(page);
+  const before = await scanCount(page);
+  await grid.focus();
+  await page.keyboard.press('ArrowRight');
+  await inspector.getByRole('button', { name: 'Remove' }).focus();
+  await page.keyboard.press('Enter');
+  await expect(grid).toBeFocused();
+  await expect.poll(() => scanCount(page)).toBe(before - 1);
+  await page.keyboard.press('Control+z');
+  await expect.poll(() => scanCount(page)).toBe(before);
+
+  await page
+    .getByRole('button', { name: /^Leave Cf out/ })
+    .first()
+    .focus();
+  await page.keyboard.press('Enter');
+  await expect(grid).toBeFocused();
+  await page.keyboard.press('Control+z');
+  await expect(page.getByRole('button', { name: /^Leave Cf out/ }).first()).toBeVisible();
 });

@@ -1,6 +1,6 @@
 'use client';
 
-import type { ReactNode } from 'react';
+import { useEffect, useRef, type ReactNode } from 'react';
 import { writeBlock, type AnyBlock, type Block, type Values } from '@/src/exchange/catalogue/block';
 import { BlockForm, type Keep } from './block-form';
 
@@ -24,7 +24,15 @@ type Props<V, T> = {
 /** A block of an object's page with its own Edit; one at a time is open, the others stay readable. */
 export function ObjectBlock<V, T>({ name, block, value, editing, children }: Props<V, T>) {
   const { open, setOpen, can, keep } = editing;
-  if (open === name) {
+  const isOpen = open === name;
+  const edit = useRef<HTMLButtonElement>(null);
+  const wasOpen = useRef(false);
+  // the focus goes back to where the form was opened from
+  useEffect(() => {
+    if (wasOpen.current && !isOpen) edit.current?.focus();
+    wasOpen.current = isOpen;
+  }, [isOpen]);
+  if (isOpen) {
     return (
       <BlockForm
         name={name}
@@ -41,6 +49,7 @@ export function ObjectBlock<V, T>({ name, block, value, editing, children }: Pro
         <h2 id={`block-${name}`}>{block.title}</h2>
         {can(name) && (
           <button
+            ref={edit}
             type="button"
             className="link"
             aria-label={`Edit: ${block.title}`}

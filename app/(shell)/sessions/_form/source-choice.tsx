@@ -1,6 +1,6 @@
 'use client';
 
-import { useId, useState } from 'react';
+import { useId, useRef, useState } from 'react';
 import type { SessionChoices } from '@/src/data/session/choices';
 import type { Wrong } from '@/src/exchange/catalogue/block';
 
@@ -24,6 +24,7 @@ export function SourceChoice({ choices, chosen, wrong, onChoose }: Props) {
   const [name, setName] = useState('');
   const [problem, setProblem] = useState<string | null>(null);
   const id = useId();
+  const field = useRef<HTMLInputElement>(null);
   const left = choices.filter((choice) => !chosen.some((one) => one.id === choice.id) && !choice.isRetired);
   const error = problem ?? wrong.find(({ field }) => field === 'sources')?.message;
 
@@ -91,7 +92,10 @@ export function SourceChoice({ choices, chosen, wrong, onChoose }: Props) {
                     <button
                       type="button"
                       className="link min-h-[24px]"
-                      onClick={() => onChoose(chosen.filter((one) => one.id !== sourceId))}
+                      onClick={() => {
+                        onChoose(chosen.filter((one) => one.id !== sourceId));
+                        field.current?.focus();
+                      }}
                     >
                       Take out<span className="sr-only"> {choice?.name ?? sourceId}</span>
                     </button>
@@ -108,6 +112,7 @@ export function SourceChoice({ choices, chosen, wrong, onChoose }: Props) {
             Add a source by name
           </label>
           <input
+            ref={field}
             id={id}
             className="field h-field w-[240px]"
             list={`${id}-list`}

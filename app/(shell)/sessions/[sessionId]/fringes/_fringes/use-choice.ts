@@ -52,5 +52,7 @@ export function useChoice(rows: readonly Row[], columns: readonly Pair[]): Choic
     else return;
     event.preventDefault();
   };
-  return { scanId: place?.scanId ?? null, pairKey: place?.pairKey ?? null, choose, toNext, onKeyDown };
+  // what a filter has taken away is not chosen, and comes back with its row
+  const shown = row < 0 || column < 0 ? null : place;
+  return { scanId: shown?.scanId ?? null, pairKey: shown?.pairKey ?? null, choose, toNext, onKeyDown };
 }

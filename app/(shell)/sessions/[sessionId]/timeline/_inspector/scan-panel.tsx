@@ -10,6 +10,7 @@ import { dayOfYear } from '@/src/units/time';
 import { useActs } from '../_timeline/acts';
 import { useDerived } from '../_timeline/derived';
 import { useKeyPlacing } from '../_timeline/key-placing';
+import { focusGrid } from '../_timeline/places';
 import { ROLE_WORDS } from '../_timeline/said';
 import { useTimeline } from '../_timeline/store';
 import { ScanProblems } from './scan-problems';
@@ -97,7 +98,10 @@ function Actions({ scan }: { scan: Scan }) {
       <button
         type="button"
         className="btn btn-danger ml-auto"
-        onClick={() => dispatch((plan) => removeScan(plan, scan.id))}
+        onClick={() => {
+          dispatch((plan) => removeScan(plan, scan.id));
+          focusGrid();
+        }}
       >
         Remove
       </button>

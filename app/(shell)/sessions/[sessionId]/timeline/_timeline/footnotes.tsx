@@ -6,6 +6,7 @@ import type { problemMends } from '@/src/schedule/problem-mends';
 import { problemSentence } from '@/src/schedule/problem-words';
 import { useActs } from './acts';
 import { useDerived } from './derived';
+import { focusGrid } from './places';
 import { useTimeline, useTimelineStore } from './store';
 
 /** The problems of the plan in words, must-fix first, each with what would mend it. */
@@ -98,7 +99,11 @@ function Footnote({ problem, mendsOf, onLoud }: FootnoteProps) {
               key={label}
               type="button"
               className={`btn btn-sm ${index > 0 ? 'btn-quiet' : ''}`}
-              onClick={() => dispatch(command)}
+              onClick={() => {
+                dispatch(command);
+                // the button goes with its problem
+                focusGrid();
+              }}
             >
               {label}
             </button>
@@ -159,6 +164,7 @@ function NoticeBox() {
           onClick={() => {
             store.setState({ notice: null });
             dispatch(mine);
+            focusGrid();
           }}
         >
           Do mine again

@@ -9,7 +9,7 @@ import { useTimeline, useTimelineStore } from './store';
 
 export function ToolBar() {
   return (
-    <div className="min-h-bar flex flex-wrap items-stretch border-b border-rule text-table desk:h-bar desk:flex-nowrap">
+    <div className="min-h-bar flex flex-wrap items-stretch border-b border-rule text-table desk:h-bar desk:flex-nowrap print:hidden">
       <div className="flex h-bar w-tray items-center gap-2 px-3.5">
         <h2 className="text-lead">Sources</h2>
         <SourceCount />
