@@ -43,7 +43,7 @@ test('figure and table are saved as files that stand alone', async ({ pageAs }) 
     const download = await saving;
     return { name: download.suggestedFilename(), text: await readFile(await download.path(), 'utf8') };
   };
-  const figure = await saved('Export figure');
+  const figure = await saved('Export figures');
   expect(figure.name).toBe('ARC-031-J0751+3313-uv.svg');
   expect(figure.text).toMatch(/^<svg [^>]*xmlns="http:\/\/www\.w3\.org\/2000\/svg"/);
   expect(figure.text).not.toContain('var(');

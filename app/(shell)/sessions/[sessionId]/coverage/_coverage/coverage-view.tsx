@@ -13,7 +13,7 @@ import { liveKeys } from '@/app/_ui/live-keys';
 import RefreshOn from '@/app/_ui/refresh-on';
 import { uvCsv } from './csv';
 import { ElevationChart } from './elevation-chart';
-import { svgText } from './figure-file';
+import { svgText } from '@/app/_ui/figure-file';
 import { baselineRowsOf, MEGA, type Ends } from './model';
 import { NumbersPanel } from './numbers-panel';
 import { SkyDiscs } from './sky-discs';
@@ -63,17 +63,21 @@ function Shown({ sheet, shown }: ShownProps) {
   const rows = baselineRowsOf(coverage);
   const skies = inOrder(sheet, shown.skies);
   const name = `${sheet.session.code}-${shown.name}-uv`;
-  const saveFigure = () => {
-    const figure = box.current?.querySelector<SVGSVGElement>('svg[data-figure]');
-    if (figure) saveFile(`${name}.svg`, 'image/svg+xml', svgText(figure));
+  const saveFigures = () => {
+    for (const figure of box.current?.querySelectorAll<SVGSVGElement>('svg[data-figure]') ?? [])
+      saveFile(
+        `${sheet.session.code}-${shown.name}-${figure.dataset.figure ?? 'figure'}.svg`,
+        'image/svg+xml',
+        svgText(figure),
+      );
   };
   return (
     <>
       <div className="min-h-bar flex flex-wrap items-center gap-x-2 border-b border-rule px-3.5 text-table">
         <Choosers sheet={sheet} shown={shown} />
         <div className="ml-auto flex items-center gap-2 py-1">
-          <button type="button" className="btn" onClick={saveFigure}>
-            Export figure
+          <button type="button" className="btn" onClick={saveFigures}>
+            Export figures
           </button>
           <button
             type="button"
@@ -85,13 +89,16 @@ function Shown({ sheet, shown }: ShownProps) {
         </div>
       </div>
       <div className="grid min-h-0 flex-1 grid-cols-[minmax(0,1fr)] desk:grid-cols-[minmax(0,1fr)_308px] desk:overflow-hidden">
-        <div className="grid min-h-0 grid-cols-[minmax(0,1fr)] content-start bg-sheet desk:overflow-y-auto wide:grid-cols-[522px_minmax(0,1fr)] wide:content-stretch">
+        <div
+          ref={box}
+          className="grid min-h-0 grid-cols-[minmax(0,1fr)] content-start bg-sheet desk:overflow-y-auto wide:grid-cols-[522px_minmax(0,1fr)] wide:content-stretch"
+        >
           <section className="px-4.5 py-[12px]">
             <div className="mb-1.5 flex items-baseline justify-between gap-2">
               <h2>uv coverage</h2>
               <span className="help">rings: dashed</span>
             </div>
-            <div ref={box}>
+            <div>
               <UvPlot
                 tracks={coverage.tracks}
                 rows={rows}

@@ -39,6 +39,8 @@ export function Chart({ clock, fromMs }: { clock: StationClockDto; fromMs: numbe
         <svg
           width={Math.max(280, width)}
           height={HEIGHT}
+          viewBox={`0 0 ${Math.max(280, width)} ${HEIGHT}`}
+          data-figure="clock"
           role="img"
           aria-label={summaryOf(clock)}
           className="block"

@@ -2,9 +2,10 @@
 
 import type { Route } from 'next';
 import Link from 'next/link';
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { liveKeys } from '@/app/_ui/live-keys';
 import RefreshOn from '@/app/_ui/refresh-on';
+import { svgText } from '@/app/_ui/figure-file';
 import { saveFile } from '@/app/_ui/save-file';
 import { Segments } from '@/app/_ui/segments';
 import type { StationClockDto } from '@/src/data/clock/dto';
@@ -29,6 +30,7 @@ const DAY_MS = 86_400_000;
 export function ClockLog({ clock, codes }: { clock: StationClockDto; codes: readonly string[] }) {
   const [span, setSpan] = useState<Span>('14');
   const [isChanging, setIsChanging] = useState(false);
+  const plot = useRef<HTMLElement>(null);
   const { station, readings, nowMs } = clock;
   const oldest = readings.at(-1)?.atMs ?? nowMs - DAY_MS;
   const fromMs = span === 'all' ? oldest - DAY_MS / 2 : nowMs - Number(span) * DAY_MS;
@@ -63,6 +65,16 @@ export function ClockLog({ clock, codes }: { clock: StationClockDto; codes: read
           <button
             type="button"
             className="btn"
+            onClick={() => {
+              const figure = plot.current?.querySelector<SVGSVGElement>('svg[data-figure]');
+              if (figure) saveFile(`${station.code}-clock.svg`, 'image/svg+xml', svgText(figure));
+            }}
+          >
+            Export figure
+          </button>
+          <button
+            type="button"
+            className="btn"
             aria-disabled={readings.length === 0}
             onClick={() =>
               readings.length > 0 && saveFile(`${station.code}-clock.csv`, 'text/csv', clockCsv(clock))
@@ -73,7 +85,7 @@ export function ClockLog({ clock, codes }: { clock: StationClockDto; codes: read
         </div>
       </div>
       <div className="clk">
-        <section aria-label="Plot" className="clk-plot">
+        <section ref={plot} aria-label="Plot" className="clk-plot">
           <Chart clock={clock} fromMs={fromMs} />
         </section>
         <section aria-label="Readings" className="clk-table">
