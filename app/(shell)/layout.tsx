@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { KeepFocus } from '@/app/_ui/keep-focus';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { Toaster } from '@/app/_ui/toaster';
 import { currentViewer } from '@/src/viewer/current-viewer';
@@ -9,6 +10,7 @@ export default async function ShellLayout({ children }: { children: ReactNode })
     <>
       {children}
       <Toaster />
+      <KeepFocus />
     </>
   );
 }

@@ -4,6 +4,7 @@ import { Suspense } from 'react';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import type { SessionState } from '@/src/data/session/dto';
+import { readTimeline } from '@/src/data/plan/read';
 import { listSessions } from '@/src/data/session/read';
 import { listStations } from '@/src/data/station/read';
 import type { Viewer } from '@/src/access/policy';
@@ -60,10 +61,15 @@ async function Sessions({ viewer, now, find }: { viewer: Viewer; now: number; fi
         open.slice(-MOST_CHECKED).map(({ id, code }) => [
           id,
           <Suspense key={id} fallback={null}>
-            <Problems viewer={viewer} code={code} />
+            <Problems reading={timelineOf(viewer, code)} />
           </Suspense>,
         ]),
       )}
     />
   );
+}
+
+async function timelineOf(viewer: Viewer, code: string) {
+  const answer = await readTimeline(viewer, code);
+  return answer.ok ? answer.timeline : null;
 }

@@ -54,6 +54,7 @@ function Write({ sessionId }: { sessionId: string }) {
   const id = useRef<string | null>(null);
   const field = useId();
   const send = async () => {
+    if (isSending) return;
     if (text.trim() === '') return setError('The comment is empty. Write it first.');
     id.current ??= newId();
     setIsSending(true);
@@ -99,7 +100,7 @@ function Write({ sessionId }: { sessionId: string }) {
       )}
       <p className="help">Read by all who have a part in the session. It cannot be taken back.</p>
       <div>
-        <button type="submit" className="btn btn-primary" disabled={isSending}>
+        <button type="submit" className="btn btn-primary" aria-disabled={isSending}>
           {isSending ? 'Sending' : 'Send the comment'}
         </button>
       </div>

@@ -29,6 +29,7 @@ export function StateBox({ session }: { session: SessionHead }) {
   const [isSending, setIsSending] = useState(false);
   const isEnded = session.state === 'closed' || session.state === 'cancelled';
   const go = async (state: Ask | 'open') => {
+    if (isSending) return;
     setIsSending(true);
     const answer = await setState(session.id, state).finally(() => setIsSending(false));
     setAsked(null);
@@ -48,7 +49,7 @@ export function StateBox({ session }: { session: SessionHead }) {
       )}
       <div className="ml-auto flex gap-2">
         {isEnded ? (
-          <button type="button" className="btn" disabled={isSending} onClick={() => void go('open')}>
+          <button type="button" className="btn" aria-disabled={isSending} onClick={() => void go('open')}>
             Open it again
           </button>
         ) : (
@@ -74,7 +75,7 @@ export function StateBox({ session }: { session: SessionHead }) {
             <button
               type="button"
               className="btn btn-danger"
-              disabled={isSending}
+              aria-disabled={isSending}
               onClick={() => asked && void go(asked)}
             >
               {asked && WORDS[asked].button}

@@ -57,6 +57,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
   };
 
   const send = async () => {
+    if (isSending) return;
     const wrong: Record<string, string> = {};
     if (said === null) wrong.said = 'Choose one of the three.';
     if (said === 'partly' && !read.from.ok) wrong.from = read.from.message;
@@ -167,7 +168,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
       <button
         type="submit"
         className={`btn slots-send ${said === 'declined' ? 'btn-danger' : 'btn-primary'}`}
-        disabled={isSending}
+        aria-disabled={isSending}
       >
         {isSending ? 'Sending' : sendWords(said)}
       </button>

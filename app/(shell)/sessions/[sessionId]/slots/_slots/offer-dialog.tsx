@@ -24,6 +24,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
   const isHeld = toFix > 0 && !isTicked;
 
   const send = async () => {
+    if (isHeld || isSending) return;
     const by =
       answerBy.trim() === '' ? null : readTimeEntry(answerBy, Math.min(nowMs + 43_200_000, session.startMs));
     setTrouble(null);
@@ -64,7 +65,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
           <button
             type="button"
             className="btn btn-primary"
-            disabled={isHeld || isSending}
+            aria-disabled={isHeld || isSending}
             title={isHeld ? 'Tick the box first' : undefined}
             onClick={() => void send()}
           >

@@ -9,6 +9,7 @@ import { resend } from '../actions';
 export function Unsent({ sessionId, unsent }: { sessionId: string; unsent: SlotBoard['unsent'] }) {
   const [isSending, setIsSending] = useState(false);
   const again = async () => {
+    if (isSending) return;
     setIsSending(true);
     try {
       const answer = await resend(sessionId);
@@ -30,7 +31,7 @@ export function Unsent({ sessionId, unsent }: { sessionId: string; unsent: SlotB
         , to {unsent.map(({ to }) => to).join(', ')}. {first?.trouble || 'They wait to be sent.'} The slots
         stand on the desks all the same.
       </p>
-      <button type="button" className="btn btn-sm" disabled={isSending} onClick={() => void again()}>
+      <button type="button" className="btn btn-sm" aria-disabled={isSending} onClick={() => void again()}>
         {isSending ? 'Sending' : 'Send again'}
       </button>
     </div>

@@ -273,7 +273,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
           {trouble}
         </p>
       )}
-      <button type="submit" className="btn btn-primary clk-send" disabled={isSending}>
+      <button type="submit" className="btn btn-primary clk-send" aria-disabled={isSending}>
         {isSending ? 'Sending' : 'Send the reading'}
       </button>
     </form>

@@ -76,6 +76,7 @@ function Why({ scan, outcome, saying, onDone, onStop }: WhyProps) {
   const [isSending, setIsSending] = useState(false);
 
   const send = async () => {
+    if (isSending) return;
     const times = [readTimeEntry(from, scan.startMs), readTimeEntry(until, scan.stopMs)] as const;
     const wrong: Record<string, string> = {};
     if (outcome === 'partly' && !times[0].ok) wrong.from = times[0].message;
@@ -147,7 +148,7 @@ function Why({ scan, outcome, saying, onDone, onStop }: WhyProps) {
         maxLength={500}
       />
       <div className="flex gap-2">
-        <button type="submit" className="btn btn-primary desk-big" disabled={isSending}>
+        <button type="submit" className="btn btn-primary desk-big" aria-disabled={isSending}>
           {isSending ? 'Sending' : `Say scan ${scan.number} was ${outcome}`}
         </button>
         <button type="button" className="btn desk-big" onClick={onStop}>
