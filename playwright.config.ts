@@ -10,6 +10,9 @@ export default defineConfig({
   workers: 2,
   fullyParallel: true,
   forbidOnly: true,
+  // a machine may be busy with other work: slow is not wrong
+  timeout: 180_000,
+  expect: { timeout: 20_000 },
   reporter: report ? [['list'], ['json', { outputFile: report }]] : [['list']],
   use: {
     baseURL: address,
