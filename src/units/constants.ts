@@ -12,3 +12,6 @@ export const EARTH_ROTATION_RAD_PER_S = (2 * Math.PI * 1.00273781191135448) / 86
 
 /** m, exact. Source: IAU 2012 resolution B2. */
 export const ASTRONOMICAL_UNIT_M = 149_597_870_700;
+
+/** m³/s², nominal gravitational parameter of the Sun. Source: IAU 2015 resolution B3. */
+export const SOLAR_GM = 1.327_124_4e20;
