@@ -141,5 +141,5 @@ function sourceOfScan(number: number): string {
   return row[2];
 }
 
-export const chunks = <T>(items: readonly T[], size: number): T[][] =>
+const chunks = <T>(items: readonly T[], size: number): T[][] =>
   Array.from({ length: Math.ceil(items.length / size) }, (_, k) => items.slice(k * size, (k + 1) * size));

@@ -7,7 +7,7 @@ import { emailOf, type Visitor } from '../scripts/pages';
 
 export const PASSWORD = DEMO_PASSWORD;
 
-export type Person = Visitor;
+type Person = Visitor;
 export { emailOf };
 
 export async function signIn(page: Page, email: string, password = PASSWORD): Promise<void> {

@@ -10,6 +10,7 @@ const checks = [
   { name: 'lint', check: () => call(bin('eslint/bin/eslint.js'), '.', '--max-warnings', '0') },
   { name: 'types', check: checkTypes },
   { name: 'layers', check: checkLayers },
+  { name: 'nothing unused', check: () => call(bin('knip/bin/knip.js'), '--no-progress') },
   {
     name: 'format',
     check: () => call(bin('prettier/bin/prettier.cjs'), '--check', '--log-level', 'warn', '.'),

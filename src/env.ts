@@ -42,7 +42,7 @@ export type Env = {
   mailFrom: string;
 };
 
-export class EnvError extends Error {
+class EnvError extends Error {
   override name = 'EnvError';
 }
 

@@ -2,7 +2,7 @@ import { clockText } from '@/src/schedule/words';
 import { dayOfYear, utcParts } from '@/src/units/time';
 
 export const MINUS = '\u2212';
-export const THIN_SPACE = '\u2009';
+const THIN_SPACE = '\u2009';
 
 const padded = (value: number, width: number) => String(value).padStart(width, '0');
 

@@ -5,7 +5,7 @@ import { dayText } from './format';
 const ENGLISH = ['en-US', 'en-GB', 'en-ZA', 'en-AU'];
 
 /** "CET"; "GMT+9" where no English has a name for it. */
-export function zoneName(ms: number, timeZone: string): string {
+function zoneName(ms: number, timeZone: string): string {
   const names = ENGLISH.map((locale) =>
     new Intl.DateTimeFormat(locale, { timeZone, timeZoneName: 'short' })
       .formatToParts(ms)

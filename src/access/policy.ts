@@ -56,7 +56,7 @@ export type GeneralVerb = (typeof GENERAL_VERBS)[number];
 export type Verb = SessionVerb | StationVerb | GeneralVerb;
 
 /** 'own': an operator's stations take part; an investigator's session is this one. */
-export type Scope = 'any' | 'own';
+type Scope = 'any' | 'own';
 
 type Row = Readonly<Partial<Record<Role, Scope>>>;
 

@@ -58,7 +58,7 @@ export function fitPolynomial(
   };
 }
 
-export const powersOf = (t: number, degree: number): number[] =>
+const powersOf = (t: number, degree: number): number[] =>
   Array.from({ length: degree + 1 }, (_, power) => t ** power);
 
 export const valueOf = (coefficients: readonly number[], t: number): number =>

@@ -104,7 +104,7 @@ function placeOf([delay, rate]: readonly [number, number], delayAt3Sigma: number
 }
 
 /** Age of a clock's newest reading, ms, as it counts for a time; null where there is none. */
-export function readingAgeMs(readAtMs: number | null, at: { atMs: number; nowMs: number }): number | null {
+function readingAgeMs(readAtMs: number | null, at: { atMs: number; nowMs: number }): number | null {
   return readAtMs === null ? null : Math.max(0, Math.min(at.atMs, at.nowMs) - readAtMs);
 }
 

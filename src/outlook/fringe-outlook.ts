@@ -11,7 +11,7 @@ export type Verdict = 'strong' | 'fair' | 'doubtful' | 'none' | 'unknown' | 'not
  * Why, where the verdict is not by SNR alone: low, out, declined or mode for not-on; snr or clock for none; sefd, flux
  * or clock for unknown; clock where it holds a verdict down to doubtful.
  */
-export type Reason = 'low' | 'out' | 'declined' | 'mode' | 'snr' | 'sefd' | 'flux' | 'clock';
+type Reason = 'low' | 'out' | 'declined' | 'mode' | 'snr' | 'sefd' | 'flux' | 'clock';
 
 /** The outlook of one baseline in one scan, with the numbers behind it (null where not worked out). */
 export type OutlookCell = Signal & {

@@ -29,10 +29,10 @@ export type SlewValues = {
   impossible: string | null;
 };
 
-export type OverlapValues = { otherScanId: ScanId; overlapSeconds: number };
+type OverlapValues = { otherScanId: ScanId; overlapSeconds: number };
 
 /** How long the scan lies before the session's start and after its end. */
-export type OutsideValues = { beforeSeconds: number; afterSeconds: number };
+type OutsideValues = { beforeSeconds: number; afterSeconds: number };
 
 /** Hours in which the station is not there, and its scans that lie in them, whole or in part, by start. */
 export type AwayValues = {

@@ -17,7 +17,7 @@ export type Placement = {
   stations: 'all-up' | readonly (StationCode | ScanStation)[];
 };
 
-export type PlacementSlew = {
+type PlacementSlew = {
   station: StationCode;
   /** from the end of the scan before to the dish's arrival; null at the session's start */
   from: { startMs: number; stopMs: number; startElevationDeg: number; stopElevationDeg: number } | null;
@@ -40,7 +40,7 @@ export type Judgement = {
 };
 
 /** The scan's id in problems of a scan that does not exist yet. */
-export const NEW_SCAN_ID: ScanId = 'new';
+const NEW_SCAN_ID: ScanId = 'new';
 
 /**
  * Whether a scan could stand where it is held. Only the scan and its neighbours at each station are worked out.

@@ -73,7 +73,7 @@ export function changedSince(
  *
  * @param myRows  the person's rows in this session, in any order
  */
-export function undoCandidate<Row extends DecisionRow>(myRows: readonly Row[]): Row | null {
+function undoCandidate<Row extends DecisionRow>(myRows: readonly Row[]): Row | null {
   const latest = latestAbout(myRows);
   return newest(myRows.filter((row) => row.kind === 'do' && latest.get(row.seq)?.kind !== 'undo'));
 }
@@ -84,7 +84,7 @@ export function undoCandidate<Row extends DecisionRow>(myRows: readonly Row[]): 
  *
  * @param myRows  the person's rows in this session, in any order
  */
-export function redoCandidate<Row extends DecisionRow>(myRows: readonly Row[]): Row | null {
+function redoCandidate<Row extends DecisionRow>(myRows: readonly Row[]): Row | null {
   const latest = latestAbout(myRows);
   const lastDo = newest(myRows.filter((row) => row.kind === 'do'))?.seq ?? 0;
   const undo = newest([...latest.values()].filter((row) => row.kind === 'undo' && row.seq > lastDo));

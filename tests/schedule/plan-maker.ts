@@ -63,7 +63,7 @@ const membersArb = fc
     ),
   );
 
-export const scanArb: fc.Arbitrary<Scan> = fc
+const scanArb: fc.Arbitrary<Scan> = fc
   .record({
     id: fc.constantFrom(...SCAN_IDS),
     startMs: fc.integer({ min: 0, max: 500 }).map((n) => T0 + n * 1000),

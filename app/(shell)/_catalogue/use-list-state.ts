@@ -1,7 +1,7 @@
 import { useEffect, useState } from 'react';
 import type { Sort } from '@/app/_ui/data-table';
 
-export type Show = 'use' | 'retired';
+type Show = 'use' | 'retired';
 export type ListState = { find: string; show: Show; sort: Sort | null };
 export type Query = Readonly<Record<string, string | string[] | undefined>>;
 

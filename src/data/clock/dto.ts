@@ -1,7 +1,7 @@
 import type { ClockFit, ClockPrediction } from '../../clock/fit';
 import type { Pulse } from '../../clock/reading';
 
-export type ReadingState = 'used' | 'set-aside' | 'waiting';
+type ReadingState = 'used' | 'set-aside' | 'waiting';
 
 /** Station clock minus UTC, via GPS, positive = early. */
 export type ReadingDto = {
@@ -33,7 +33,7 @@ export type ChangeDto = {
   role: string;
 };
 
-export type ClockStation = {
+type ClockStation = {
   code: string;
   name: string;
   timeZone: string;

@@ -28,7 +28,7 @@ export type DeskScan = {
   mode: string;
 };
 
-export type DeskSlot = { sessionCode: string; title: string; startMs: number; endMs: number; answer: Answer };
+type DeskSlot = { sessionCode: string; title: string; startMs: number; endMs: number; answer: Answer };
 
 export type DeskDto = {
   station: { code: string; name: string; timeZone: string; longitudeDeg: number; minElevationDeg: number };

@@ -14,8 +14,8 @@ import type { SkyPosition } from '../../sky/types';
 import { horizonOf, readModes } from '../plan/context';
 import { readableBy } from './scope';
 
-export type StationChoice = ProspectStation & { name: string; isRetired: boolean };
-export type ModeChoice = PlanMode & { isRetired: boolean };
+type StationChoice = ProspectStation & { name: string; isRetired: boolean };
+type ModeChoice = PlanMode & { isRetired: boolean };
 
 export type SessionChoices = {
   stations: StationChoice[];

@@ -11,7 +11,7 @@ export type ModeValues = {
   toneSpacingHz: number | null;
 };
 
-export type Bits = '1' | '2';
+type Bits = '1' | '2';
 export type Channel = {
   edgeHz: number;
   sideband: 'upper' | 'lower';

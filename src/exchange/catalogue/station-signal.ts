@@ -14,7 +14,7 @@ import {
 } from './field';
 import { optionalTimeField } from './time-field';
 
-export type Feeds = 'circular' | 'linear';
+type Feeds = 'circular' | 'linear';
 export type GainPoint = readonly [elevationDeg: number, gain: number];
 export type StationBand = {
   band: string;

@@ -5,7 +5,7 @@ import { endsText, pathOf, rightEnds, uvScaleOf, type BaselineRow, type Ends } f
 const LEFT = 46;
 const TOP = 6;
 const SIDE = 404;
-export const UV_SIZE = { width: LEFT + SIDE + 36, height: TOP + SIDE + 48 };
+const UV_SIZE = { width: LEFT + SIDE + 36, height: TOP + SIDE + 48 };
 
 type Props = {
   tracks: readonly UvTrack[];

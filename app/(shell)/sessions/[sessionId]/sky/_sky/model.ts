@@ -4,7 +4,7 @@ import type { StationCode } from '@/src/schedule/plan';
 import { stationsUp, tableElevationDeg, type SkyTable } from '@/src/schedule/sky-table';
 
 export type Span = readonly [startMs: number, endMs: number];
-export type Step = { startMs: number; endMs: number; up: number };
+type Step = { startMs: number; endMs: number; up: number };
 export type Pair = { first: StationCode; second: StationCode };
 
 /** Which times a wash stands behind. */

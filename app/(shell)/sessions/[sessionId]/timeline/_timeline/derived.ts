@@ -23,7 +23,7 @@ export type Derived = {
   lateKeys: ReadonlySet<string>;
 };
 
-export function derive(plan: Plan, context: OutlookContext, known: ReadonlyMap<string, string>): Derived {
+function derive(plan: Plan, context: OutlookContext, known: ReadonlyMap<string, string>): Derived {
   const problems = checkPlan(plan, context);
   const outlook = new Map<ScanId, OutlookCell[]>();
   for (const cell of fringeOutlook(plan, context)) {

@@ -115,7 +115,7 @@ export function HatchPatterns() {
   );
 }
 
-export function countCells(cells: readonly OutlookCell[]) {
+function countCells(cells: readonly OutlookCell[]) {
   return {
     on: cells.filter(({ verdict }) => verdict !== 'not-on').length,
     good: cells.filter(isExpected).length,

@@ -168,6 +168,6 @@ function spanOf(frame: Frame, { startMs, stopMs }: { startMs: number; stopMs: nu
 }
 
 /** "0738" of J0738+1742; the first letters of a name that is no J-name. */
-export function shortName(name: string): string {
+function shortName(name: string): string {
   return /^J(\d{4})[+\-−]\d/.exec(name)?.[1] ?? name.slice(0, 5);
 }

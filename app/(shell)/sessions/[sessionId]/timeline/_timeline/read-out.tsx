@@ -36,7 +36,7 @@ export function ReadOut({ frame }: { frame: Frame }) {
   );
 }
 
-export function ReadOutRows({ judged }: { judged: Judged }) {
+function ReadOutRows({ judged }: { judged: Judged }) {
   const { placing, can, cannot, expected, possible, tightest } = judged;
   return (
     <dl className="grid grid-cols-[70px_1fr] gap-x-1.5 gap-y-px [&>dt]:text-ink2">
@@ -79,7 +79,7 @@ export function ReadOutRows({ judged }: { judged: Judged }) {
   );
 }
 
-export function Verdict({ judged }: { judged: Judged }) {
+function Verdict({ judged }: { judged: Judged }) {
   const tone = { fits: 'text-teal', note: 'text-ink', no: 'text-verm' }[judged.verdict];
   return (
     <div className={`mt-1 border-t border-rule pt-1 ${tone}`}>

@@ -128,7 +128,7 @@ export function StationsUpStrip({
   );
 }
 
-export const lastMs = (table: SkyTable) => {
+const lastMs = (table: SkyTable) => {
   const nodes = Object.values(Object.values(table.elevations)[0] ?? {})[0]?.length ?? 1;
   return table.startMs + (nodes - 1) * table.stepSeconds * 1000;
 };

@@ -231,7 +231,7 @@ export function createSender(store: TimelineStore) {
 }
 
 /** Whether a step is worth asking for; how far back steps that wait will go is the server's to say. */
-export function canStep(
+function canStep(
   { pending, steps }: Pick<TimelineState, 'pending' | 'steps'>,
   kind: 'undo' | 'redo',
 ): boolean {

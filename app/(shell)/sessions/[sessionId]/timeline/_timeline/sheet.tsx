@@ -96,6 +96,6 @@ export function RuledSheet({ frame, children }: { frame: Frame; children?: React
   );
 }
 
-export function useHasScans() {
+function useHasScans() {
   return useDerived((derived) => derived.plan.scans.length > 0);
 }

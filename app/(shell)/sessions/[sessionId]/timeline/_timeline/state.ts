@@ -34,7 +34,7 @@ export type Placing = {
   outStation: StationCode | null;
 };
 
-export type Notice = {
+type Notice = {
   message: string;
   /** offered when someone else changed the same thing meanwhile */
   mine: Command | null;

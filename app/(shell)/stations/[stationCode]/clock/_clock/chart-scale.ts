@@ -15,7 +15,7 @@ const NORMAL_95 = 1.96;
 export type Line = { atMs: number; offsetSeconds: number; halfSeconds: number }[];
 
 /** The fit in the shown span, one line for each stretch, and the part ahead of now apart. */
-export function fitLines(fit: ClockFit, fromMs: number, untilMs: number, nowMs: number) {
+function fitLines(fit: ClockFit, fromMs: number, untilMs: number, nowMs: number) {
   const edges = fit.segments.map(({ from, firstAt }) => from?.getTime() ?? firstAt.getTime());
   return fit.segments.flatMap((segment, index) => {
     const start = Math.max(fromMs, Math.min(edges[index] ?? fromMs, segment.firstAt.getTime()));

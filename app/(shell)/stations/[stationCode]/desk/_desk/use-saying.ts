@@ -9,12 +9,12 @@ import { serverNowMs } from '@/app/_ui/server-clock';
 import type { DeskDto, DeskScan } from '@/src/data/desk/dto';
 import type { OutcomeDto, Reason } from '@/src/data/outcome/read';
 
-export type Word =
+type Word =
   | { outcome: 'good'; text: string }
   | { outcome: 'partly'; lost: [number, number]; reason: Reason; text: string }
   | { outcome: 'lost'; reason: Reason; text: string };
 
-export type SayAnswer = { ok: true } | { ok: false; message: string; fields?: Record<string, string[]> };
+type SayAnswer = { ok: true } | { ok: false; message: string; fields?: Record<string, string[]> };
 
 export type Saying = {
   /** what was said last, one that is still to be sent included */
