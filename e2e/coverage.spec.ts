@@ -7,7 +7,7 @@ test('an investigator reads what the session gives a source, and lights a baseli
   const page = await pageAs('investigator');
   await page.goto(ADDRESS);
   const numbers = page.getByRole('complementary', { name: 'Numbers' });
-  await page.getByLabel('Source').selectOption({ label: 'J0751+3313, 22 GHz' });
+  await page.getByLabel('Source', { exact: true }).selectOption({ label: 'J0751+3313, 22 GHz' });
   await expect(numbers.getByRole('heading', { name: 'J0751+3313' })).toBeVisible();
   await expect(numbers.getByRole('row', { name: /^Longest Em–Cf, 11\s787 km 874 Mλ$/ })).toBeVisible();
   await expect(numbers.getByRole('row', { name: /^Image noise \d+ µJy\/beam$/ })).toBeVisible();
@@ -20,7 +20,7 @@ test('an investigator reads what the session gives a source, and lights a baseli
   await page.keyboard.press('Enter');
   await expect(baseline).toHaveAttribute('aria-pressed', 'true');
 
-  await page.getByLabel('Source').selectOption({ label: 'J0555+3948, 8.4 GHz' });
+  await page.getByLabel('Source', { exact: true }).selectOption({ label: 'J0555+3948, 8.4 GHz' });
   await expect(page).toHaveURL(/source=J0555%2B3948&band=8.4\+GHz/);
   await expect(numbers.getByText(/^The SEFD of Cf at 8.4 GHz is not known/)).toBeVisible();
 });
