@@ -1,4 +1,4 @@
-import { degToRad, radToDeg } from '../units/angle';
+import { angularSeparationDeg, degToRad, radToDeg } from '../units/angle';
 import { EARTH_ROTATION_RAD_PER_S, SPEED_OF_LIGHT, WGS84 } from '../units/constants';
 import type { Vector3 } from '../units/vector';
 import type { Geodetic, Itrf } from './types';
@@ -8,6 +8,8 @@ const F = WGS84.flattening;
 const E2 = F * (2 - F);
 /** Below this radius latitude and height lose their meaning; no station stands there. */
 const LEAST_RADIUS_M = 100_000;
+/** Mean radius (2a + b)/3 of WGS84. Source: Moritz, Geodetic Reference System 1980, J. Geodesy 74, 128 (2000). */
+export const MEAN_RADIUS_M = A * (1 - F / 3);
 
 /**
  * Earth-fixed Cartesian position of a geodetic place.
@@ -65,6 +67,37 @@ export function itrfToGeodetic(p: Itrf): Geodetic {
     longitudeDeg: axisDistance === 0 ? 0 : radToDeg(Math.atan2(p.y, p.x)),
     heightM,
   };
+}
+
+/**
+ * Great-circle distance of two places, on the sphere of the mean radius: heights and flattening are left out.
+ *
+ * @param a  geodetic place; its geodetic latitude is taken for the sphere's
+ * @param b  the other
+ * @returns metres [0, 20 015 115]
+ * @throws RangeError if an input is not finite or the latitude is out of range (programmer error)
+ *
+ * Error   ≤ 0.57 % of the geodesic on WGS84 (along a meridian at the equator), ≤ 0.12 % from 10 000 km on
+ *         (tests/sky/site.test.ts)
+ * Source  spherical trigonometry, arctangent form: no loss for near or opposite places
+ */
+export function greatCircleM(a: Geodetic, b: Geodetic): number {
+  checkSite(a);
+  checkSite(b);
+  return MEAN_RADIUS_M * degToRad(angularSeparationDeg(a, b));
+}
+
+/**
+ * Straight distance of two places through the Earth: the length of their baseline.
+ *
+ * @returns metres
+ * @throws RangeError if an input is not finite or the latitude is out of range (programmer error)
+ *
+ * Error   as geodeticToItrf
+ */
+export function chordM(a: Geodetic, b: Geodetic): number {
+  const [from, to] = [geodeticToItrf(a), geodeticToItrf(b)];
+  return Math.hypot(to.x - from.x, to.y - from.y, to.z - from.z);
 }
 
 /** A site made ready for many directions: its axes in the Earth-fixed frame and its speed of rotation. */
