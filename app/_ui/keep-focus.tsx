@@ -10,21 +10,29 @@ const TOASTS = '[data-sonner-toaster]';
 export function KeepFocus() {
   useEffect(() => {
     let had: Element | null = null;
+    /** from what has the focus outwards; of a dialog, on to what it was opened from */
     let way: readonly Element[] = [];
+    let opener: readonly Element[] = [];
     let frame = 0;
 
     const remember = ({ target }: FocusEvent) => {
       if (!(target instanceof Element)) return;
       had = target;
       // a toast ends by itself: from there the focus goes back to where it came from
-      if (!target.closest(TOASTS)) way = ancestorsOf(target);
+      if (target.closest(TOASTS)) return;
+      const dialog = target.closest('dialog');
+      if (!dialog) opener = outwards(target, document.body);
+      way = dialog ? [...outwards(target, dialog), ...opener] : opener;
     };
     const look = () => {
       frame = 0;
       if (!had || document.activeElement !== document.body) return;
       // left on purpose: a press beside everything
       if (isThere(had)) had = null;
-      else land(way.find((one, index) => isThere(one) && (index === 0 || one.matches(PARTS))));
+      else
+        land(
+          way.find((one, index) => isThere(one) && (index === 0 || one === opener[0] || one.matches(PARTS))),
+        );
     };
     const lookSoon = () => {
       frame ||= requestAnimationFrame(look);
@@ -44,9 +52,9 @@ export function KeepFocus() {
   return null;
 }
 
-function ancestorsOf(target: Element): Element[] {
+function outwards(from: Element, end: Element): Element[] {
   const parts: Element[] = [];
-  for (let at: Element | null = target; at && at !== document.body; at = at.parentElement) parts.push(at);
+  for (let at: Element | null = from; at && at !== end; at = at.parentElement) parts.push(at);
   return parts;
 }
 

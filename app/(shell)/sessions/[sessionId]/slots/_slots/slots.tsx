@@ -72,8 +72,9 @@ export function Slots({ board, codes, stamp, toFix, station }: Props) {
               <button
                 type="button"
                 className="btn btn-primary"
-                disabled={draft?.scans === 0}
-                onClick={() => setAsked('offer')}
+                aria-disabled={draft?.scans === 0}
+                title={draft?.scans === 0 ? 'The plan has no scan yet.' : undefined}
+                onClick={() => draft?.scans !== 0 && setAsked('offer')}
               >
                 Offer {session.code} to its stations
               </button>

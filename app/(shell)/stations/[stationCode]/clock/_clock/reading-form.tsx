@@ -72,6 +72,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
   };
 
   const send = async (isSure: boolean, over: Partial<Draft> = {}) => {
+    if (isSending) return;
     const held = { ...draft, ...over };
     const entry = readSize(held.size, held.unit);
     const time =
