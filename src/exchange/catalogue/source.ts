@@ -160,7 +160,6 @@ const flux: Block<Record<never, never>, { bands: SourceBand; components: Compone
 
 /** A source's blocks by name, in the order of its page; a new one is asked both. */
 export const SOURCE_BLOCKS = { place, flux } as const;
-type SourceBlockName = keyof typeof SOURCE_BLOCKS;
 
 /** As it is best read, where that gives back the same place to 0.1 µas; else in degrees. */
 function rightAscensionOut(raDeg: number): string {

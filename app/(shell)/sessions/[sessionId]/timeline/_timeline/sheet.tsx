@@ -95,7 +95,3 @@ export function RuledSheet({ frame, children }: { frame: Frame; children?: React
     </div>
   );
 }
-
-function useHasScans() {
-  return useDerived((derived) => derived.plan.scans.length > 0);
-}
