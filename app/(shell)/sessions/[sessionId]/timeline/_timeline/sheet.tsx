@@ -3,7 +3,6 @@
 import type { SkyTable } from '@/src/schedule/sky-table';
 import { Away } from './away';
 import { Axis } from './axis';
-import { useDerived } from './derived';
 import { FringeStrip, HatchPatterns } from './fringe-strip';
 import { Ghost } from './ghost';
 import { ChosenBars, ChosenWash, Headings } from './headings';
