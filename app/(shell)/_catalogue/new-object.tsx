@@ -9,7 +9,8 @@ import type { Failure } from '@/src/data/errors';
 import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
 import type { Field as Entry } from '@/src/exchange/catalogue/field';
 import { BlockFields } from './block-fields';
-import { focusWrong, wrongOf, wrongText } from './wrong';
+import { NotKept } from './not-kept';
+import { focusWrong, wrongOf } from './wrong';
 import './object.css';
 
 type Whole = Readonly<Record<string, Typed | string>>;
@@ -80,16 +81,7 @@ export function NewObject({ title, list, label, blocks, code, note, add }: Props
         <h1>{title}</h1>
       </div>
       <div className="new-blocks">
-        {refusal !== null && (
-          <div role="alert" className="error-box">
-            {refusal}
-          </div>
-        )}
-        {wrong.length > 0 && (
-          <p role="status" className="error-box">
-            {wrongText(wrong.length)} Nothing is kept yet.
-          </p>
-        )}
+        <NotKept refusal={refusal} wrong={wrong.length} />
         {code && (
           <div className="new-code">
             <Field

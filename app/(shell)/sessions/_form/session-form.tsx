@@ -13,7 +13,8 @@ import type { SessionForm as FormDto } from '@/src/data/session/form';
 import type { AnyBlock, Typed, Wrong } from '@/src/exchange/catalogue/block';
 import { CODE_FIELD, readSession, RULES, WHAT, WHEN, type SessionTyped } from '@/src/exchange/session-form';
 import { BlockFields } from '../../_catalogue/block-fields';
-import { focusWrong, wrongOf, wrongText } from '../../_catalogue/wrong';
+import { NotKept } from '../../_catalogue/not-kept';
+import { focusWrong, wrongOf } from '../../_catalogue/wrong';
 import { SourceChoice } from './source-choice';
 import { StationChoice } from './station-choice';
 import '../../_catalogue/object.css';
@@ -88,16 +89,7 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
   return (
     <form ref={element} className="sform" noValidate onSubmit={submit} aria-label={label}>
       <div className="sform-parts">
-        {refusal !== null && (
-          <div role="alert" className="error-box">
-            {refusal}
-          </div>
-        )}
-        {wrong.length > 0 && (
-          <p role="status" className="error-box">
-            {wrongText(wrong.length)} Nothing is kept yet.
-          </p>
-        )}
+        <NotKept refusal={refusal} wrong={wrong.length} />
         <Part title="What it is" className="sform-what">
           <Field
             label={CODE_FIELD.label}

@@ -6,6 +6,8 @@ import { minuteText, spanText } from '@/app/_ui/format';
 import { Segments } from '@/app/_ui/segments';
 import { stationTime } from '@/app/_ui/station-time';
 import { showToast } from '@/app/_ui/toast';
+import { Trouble } from '@/app/_ui/trouble';
+import { useSending } from '@/app/_ui/use-sending';
 import type { SlotDto } from '@/src/data/slot/dto';
 import { hoursWithout, within, type Hours } from '@/src/schedule/slots';
 import { fullTimeText, listText } from '@/src/schedule/words';
@@ -16,7 +18,6 @@ import { useActId } from './use-act-id';
 
 const HALF_DAY_MS = 12 * 3_600_000;
 const NOTHING_SAID = 'Say why, so that the scheduler can plan around it.';
-const NO_LINE = 'There is no line. What you typed is kept: send it again when the line is back.';
 const REASONS = ['Antenna', 'Receiver', 'Recorder', 'Staff', 'Power', 'Other'] as const;
 const CHOICES = [
   { value: 'confirmed', label: 'Confirm' },
@@ -40,9 +41,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
   const [entered, setEntered] = useState<Entered>({ said: null, from: '', until: '' });
   const [why, setWhy] = useState<(typeof REASONS)[number] | null>(null);
   const [words, setWords] = useState('');
-  const [fields, setFields] = useState<Record<string, string>>({});
-  const [trouble, setTrouble] = useState<string | null>(null);
-  const [isSending, setIsSending] = useState(false);
+  const { fields, trouble, isSending, say, send: sendOff } = useSending();
   const actIdOf = useActId();
 
   const { said } = entered;
@@ -51,20 +50,17 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
   const change = (over: Partial<Entered>) => {
     const next = { ...entered, ...over };
     setEntered(next);
-    setFields({});
-    setTrouble(null);
+    say();
     onPreview(previewOf(slot, next));
   };
 
   const send = async () => {
-    if (isSending) return;
     const wrong: Record<string, string> = {};
     if (said === null) wrong.said = 'Choose one of the three.';
     if (said === 'partly' && !read.from.ok) wrong.from = read.from.message;
     if (said === 'partly' && !read.until.ok) wrong.until = read.until.message;
     if (said !== null && said !== 'confirmed' && reason === '') wrong.reason = NOTHING_SAID;
-    setFields(wrong);
-    setTrouble(null);
+    say(wrong);
     if (said === null || Object.keys(wrong).length > 0) return;
     const body = {
       offerId,
@@ -74,26 +70,13 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
         read.from.ok &&
         read.until.ok && { without: [read.from.value, read.until.value] }),
     };
-    setIsSending(true);
-    try {
-      const answer = await reply(sessionId, code, { ...body, actId: actIdOf(body) });
-      if (!answer.ok) {
-        const back = Object.entries(answer.fields ?? {}).map(([field, lines]) => [field, lines.join(' ')]);
-        if (back.length === 0) setTrouble(answer.message);
-        setFields(Object.fromEntries(back) as Record<string, string>);
-        return;
-      }
-      change({ said: null, from: '', until: '' });
-      setWhy(null);
-      setWords('');
-      onPreview(null);
-      showToast({ message: `Sent: ${code} ${said === 'partly' ? 'in part' : said}.` });
-    } catch (error) {
-      if (!(error instanceof TypeError)) throw error;
-      setTrouble(NO_LINE);
-    } finally {
-      setIsSending(false);
-    }
+    const answer = await sendOff(() => reply(sessionId, code, { ...body, actId: actIdOf(body) }));
+    if (!answer?.ok) return;
+    change({ said: null, from: '', until: '' });
+    setWhy(null);
+    setWords('');
+    onPreview(null);
+    showToast({ message: `Sent: ${code} ${said === 'partly' ? 'in part' : said}.` });
   };
 
   return (
@@ -160,11 +143,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
       {said === 'declined' && <Cost slot={slot} without={[[slot.startMs, slot.endMs]]} />}
       {said === 'partly' && read.without && <Cost slot={slot} without={[read.without]} />}
       <Outcome slot={slot} said={said} without={read.without} />
-      {trouble !== null && (
-        <p role="alert" className="error-box">
-          {trouble}
-        </p>
-      )}
+      <Trouble says={trouble} />
       <button
         type="submit"
         className={`btn slots-send ${said === 'declined' ? 'btn-danger' : 'btn-primary'}`}

@@ -4,6 +4,8 @@ import { useState } from 'react';
 import { Dialog } from '@/app/_ui/dialog';
 import { Field } from '@/app/_ui/field';
 import { showToast } from '@/app/_ui/toast';
+import { Trouble } from '@/app/_ui/trouble';
+import { useSending } from '@/app/_ui/use-sending';
 import type { SlotBoard } from '@/src/data/slot/dto';
 import { readTimeEntry } from '@/src/units/entry';
 import { offer } from '../actions';
@@ -17,38 +19,23 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
   const [note, setNote] = useState('');
   const [answerBy, setAnswerBy] = useState('');
   const [isTicked, setIsTicked] = useState(false);
-  const [fields, setFields] = useState<Record<string, string>>({});
-  const [trouble, setTrouble] = useState<string | null>(null);
-  const [isSending, setIsSending] = useState(false);
+  const { fields, trouble, isSending, say, send: sendOff } = useSending();
   const idOf = useActId();
   const isHeld = toFix > 0 && !isTicked;
 
   const send = async () => {
-    if (isHeld || isSending) return;
+    if (isHeld) return;
     const by =
       answerBy.trim() === '' ? null : readTimeEntry(answerBy, Math.min(nowMs + 43_200_000, session.startMs));
-    setTrouble(null);
-    if (by && !by.ok) return setFields({ answerByMs: by.message });
+    if (by && !by.ok) return say({ answerByMs: by.message });
     const body = { kind, note, answerByMs: by?.value ?? null };
-    setIsSending(true);
-    try {
-      const answer = await offer(session.id, { ...body, id: idOf(body) });
-      if (answer.ok) {
-        const word = kind === 'publish' ? 'Version' : 'Offer';
-        const told = `${answer.sent} ${answer.sent === 1 ? 'message' : 'messages'} sent`;
-        const left = answer.failed.length > 0 ? `, ${answer.failed.length} not sent` : '';
-        showToast({ message: `${word} ${answer.number} is out: ${told}${left}.` });
-        return onClose();
-      }
-      const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
-      if (back.length === 0) setTrouble(answer.message);
-      setFields(Object.fromEntries(back) as Record<string, string>);
-    } catch (error) {
-      if (!(error instanceof TypeError)) throw error;
-      setTrouble('There is no line. What you typed is kept: send it again when the line is back.');
-    } finally {
-      setIsSending(false);
-    }
+    const answer = await sendOff(() => offer(session.id, { ...body, id: idOf(body) }));
+    if (!answer?.ok) return;
+    const word = kind === 'publish' ? 'Version' : 'Offer';
+    const told = `${answer.sent} ${answer.sent === 1 ? 'message' : 'messages'} sent`;
+    const left = answer.failed.length > 0 ? `, ${answer.failed.length} not sent` : '';
+    showToast({ message: `${word} ${answer.number} is out: ${told}${left}.` });
+    onClose();
   };
 
   const problems = `${toFix} ${toFix === 1 ? 'problem' : 'problems'}`;
@@ -113,11 +100,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
           error={fields.note}
           onChange={(event) => setNote(event.target.value)}
         />
-        {trouble !== null && (
-          <p role="alert" className="error-box">
-            {trouble}
-          </p>
-        )}
+        <Trouble says={trouble} />
       </div>
     </Dialog>
   );

@@ -6,6 +6,8 @@ import { Field } from '@/app/_ui/field';
 import { newId } from '@/app/_ui/new-id';
 import { serverNowMs } from '@/app/_ui/server-clock';
 import { showToast } from '@/app/_ui/toast';
+import { Trouble } from '@/app/_ui/trouble';
+import { useSending } from '@/app/_ui/use-sending';
 import type { ChangeDto, StationClockDto } from '@/src/data/clock/dto';
 import { readTimeEntry } from '@/src/units/entry';
 import { change } from '../actions';
@@ -28,27 +30,21 @@ export function ChangeForm({
   const [kind, setKind] = useState<ChangeDto['kind']>('resync');
   const [time, setTime] = useState('');
   const [note, setNote] = useState('');
-  const [fields, setFields] = useState<Record<string, string>>({});
-  const [trouble, setTrouble] = useState<string | null>(null);
+  const { fields, trouble, isSending, say, send: sendOff } = useSending();
   const id = useRef<string | null>(null);
 
   const send = async () => {
     const at = readTimeEntry(time, serverNowMs());
-    setTrouble(null);
-    if (!at.ok) return setFields({ atMs: at.message });
+    if (!at.ok) return say({ atMs: at.message });
     id.current ??= newId();
-    const answer = await change(code, { id: id.current, kind, atMs: at.value, note });
-    if (answer.ok) {
-      id.current = null;
-      setTime('');
-      setNote('');
-      setFields({});
-      showToast({ message: `Stored: ${CHANGE_WORDS[kind]} at ${code}. The fit starts anew there.` });
-      return onClose();
-    }
-    const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
-    if (back.length === 0) setTrouble(answer.message);
-    setFields(Object.fromEntries(back) as Record<string, string>);
+    const body = { id: id.current, kind, atMs: at.value, note };
+    const answer = await sendOff(() => change(code, body));
+    if (!answer?.ok) return;
+    id.current = null;
+    setTime('');
+    setNote('');
+    showToast({ message: `Stored: ${CHANGE_WORDS[kind]} at ${code}. The fit starts anew there.` });
+    onClose();
   };
 
   return (
@@ -61,8 +57,13 @@ export function ChangeForm({
           <button type="button" className="btn" onClick={onClose}>
             Leave
           </button>
-          <button type="button" className="btn btn-primary" onClick={() => void send()}>
-            Store the change
+          <button
+            type="button"
+            className="btn btn-primary"
+            aria-disabled={isSending}
+            onClick={() => void send()}
+          >
+            {isSending ? 'Sending' : 'Store the change'}
           </button>
         </>
       }
@@ -100,11 +101,7 @@ export function ChangeForm({
           error={fields.note}
           onChange={(event) => setNote(event.target.value)}
         />
-        {trouble !== null && (
-          <p role="alert" className="error-box">
-            {trouble}
-          </p>
-        )}
+        <Trouble says={trouble} />
       </div>
     </Dialog>
   );

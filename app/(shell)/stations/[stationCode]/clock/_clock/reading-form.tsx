@@ -7,6 +7,8 @@ import { newId } from '@/app/_ui/new-id';
 import { Segments } from '@/app/_ui/segments';
 import { serverNowMs } from '@/app/_ui/server-clock';
 import { showToast } from '@/app/_ui/toast';
+import { Trouble } from '@/app/_ui/trouble';
+import { useSending } from '@/app/_ui/use-sending';
 import { predictClock, segmentAt } from '@/src/clock/fit';
 import { offsetFromWords, offsetWords, readSize, type SizeUnit, type Tick } from '@/src/clock/reading';
 import { allowedSeconds, type Slip } from '@/src/clock/slips';
@@ -48,16 +50,13 @@ const UNITS: readonly SizeUnit[] = ['µs', 'ns', 'ms', 's'];
 export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onChange: () => void }) {
   const { code } = clock.station;
   const [draft, setDraft] = useState<Draft>(EMPTY);
-  const [fields, setFields] = useState<Record<string, string>>({});
-  const [trouble, setTrouble] = useState<string | null>(null);
+  const { fields, trouble, isSending, say, send: sendOff } = useSending();
   const [slip, setSlip] = useState<Slip | null>(null);
-  const [isSending, setIsSending] = useState(false);
   const actId = useRef<string | null>(null);
   const unitId = useId();
   const set = (changed: Partial<Draft>) => {
     setDraft((before) => ({ ...before, ...changed }));
-    setFields({});
-    setTrouble(null);
+    say();
     setSlip(null);
   };
 
@@ -68,11 +67,10 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
     const entry = readSize(text, draft.unit);
     const isSigned = !entry.ok && entry.isSigned;
     set({ size: isSigned ? text.replace(/^\s*[-+\u2212]\s*/, '') : text, ...(isSigned && { tick: null }) });
-    if (isSigned) setFields({ size: entry.message });
+    if (isSigned) say({ size: entry.message });
   };
 
   const send = async (isSure: boolean, over: Partial<Draft> = {}) => {
-    if (isSending) return;
     const held = { ...draft, ...over };
     const entry = readSize(held.size, held.unit);
     const time =
@@ -86,39 +84,30 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
     if (held.secondCheck === null) wrong.secondCheck = 'Was the formatter’s second checked against UTC?';
     const isWhole = /^[-\u2212+]?\d{1,6}$/.test(held.secondOff.trim());
     if (held.secondCheck === 'off' && !isWhole) wrong.secondOff = 'Type whole seconds, for example 1.';
-    setFields(wrong);
+    say(wrong);
     if (Object.keys(wrong).length > 0 || !time.ok) return;
     actId.current ??= newId();
-    setIsSending(true);
-    try {
-      const answer = await report(code, {
-        actId: actId.current,
-        pulse: held.pulse,
-        atMs: time.value,
-        tick: held.tick,
-        size: held.size,
-        unit: held.unit,
-        secondCheck: held.secondCheck,
-        secondOff: held.secondCheck === 'off' ? Number(held.secondOff.trim().replace('\u2212', '-')) : null,
-        note: held.note,
-        isSure,
-      });
-      if (answer.ok) {
-        actId.current = null;
-        setDraft({ ...EMPTY, pulse: held.pulse, unit: held.unit });
-        setSlip(null);
-        showToast({ message: `Stored: ${code} clock is ${offsetWords(answer.offsetSeconds)}.` });
-        return;
-      }
-      if ('slip' in answer && answer.slip) return setSlip(answer.slip);
-      const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
-      if (back.length === 0) setTrouble(answer.message);
-      setFields(Object.fromEntries(back) as Record<string, string>);
-    } catch (error) {
-      if (!(error instanceof TypeError)) throw error;
-      setTrouble('There is no line. What you typed is kept: send it again when the line is back.');
-    } finally {
-      setIsSending(false);
+    const body = {
+      actId: actId.current,
+      pulse: held.pulse,
+      atMs: time.value,
+      tick: held.tick,
+      size: held.size,
+      unit: held.unit,
+      secondCheck: held.secondCheck,
+      secondOff: held.secondCheck === 'off' ? Number(held.secondOff.trim().replace('\u2212', '-')) : null,
+      note: held.note,
+      isSure,
+    };
+    const answer = await sendOff(() => report(code, body));
+    if (answer?.ok) {
+      actId.current = null;
+      setDraft({ ...EMPTY, pulse: held.pulse, unit: held.unit });
+      setSlip(null);
+      showToast({ message: `Stored: ${code} clock is ${offsetWords(answer.offsetSeconds)}.` });
+    } else if (answer && 'slip' in answer && answer.slip) {
+      say();
+      setSlip(answer.slip);
     }
   };
 
@@ -269,11 +258,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
           onChange={onChange}
         />
       )}
-      {trouble !== null && (
-        <p role="alert" className="error-box">
-          {trouble}
-        </p>
-      )}
+      <Trouble says={trouble} />
       <button type="submit" className="btn btn-primary clk-send" aria-disabled={isSending}>
         {isSending ? 'Sending' : 'Send the reading'}
       </button>

@@ -2,6 +2,7 @@
 
 import { useId, useState } from 'react';
 import { Field } from '@/app/_ui/field';
+import { fieldWords } from '@/app/_ui/use-sending';
 import type { DeskScan } from '@/src/data/desk/dto';
 import type { Reason } from '@/src/data/outcome/read';
 import { clockText } from '@/src/schedule/words';
@@ -94,8 +95,7 @@ function Why({ scan, outcome, saying, onDone, onStop }: WhyProps) {
     );
     setIsSending(false);
     if (answer.ok) return onDone();
-    const back = Object.entries(answer.fields ?? {}).map(([field, words]) => [field, words.join(' ')]);
-    setFields(Object.fromEntries(back) as Record<string, string>);
+    setFields(fieldWords(answer.fields));
   };
 
   return (

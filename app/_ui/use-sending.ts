@@ -1,0 +1,53 @@
+import { useRef, useState } from 'react';
+
+type Refusal = { ok: false; message: string; fields?: Record<string, string[] | undefined> };
+type Fields = Record<string, string>;
+
+const NO_LINE = 'There is no line. What you typed is kept: send it again when the line is back.';
+
+/** What a form says of its sending: what is wrong beside which field, what went wrong at all; one at a time. */
+export function useSending() {
+  const [fields, setFields] = useState<Fields>({});
+  const [trouble, setTrouble] = useState<string | null>(null);
+  const [isSending, setIsSending] = useState(false);
+  const isBusy = useRef(false);
+
+  const say = (wrong: Fields = {}) => {
+    setFields(wrong);
+    setTrouble(null);
+  };
+  /** Null where nothing came back: there is no line, or another sending is on its way. */
+  const send = async <Answer extends { ok: true } | Refusal>(
+    act: () => Promise<Answer>,
+  ): Promise<Answer | null> => {
+    if (isBusy.current) return null;
+    isBusy.current = true;
+    setIsSending(true);
+    say();
+    try {
+      const answer = await act();
+      const outcome: { ok: true } | Refusal = answer;
+      if (!outcome.ok) {
+        const back = fieldWords(outcome.fields);
+        setFields(back);
+        if (Object.keys(back).length === 0) setTrouble(outcome.message);
+      }
+      return answer;
+    } catch (error) {
+      if (!(error instanceof TypeError)) throw error;
+      setTrouble(NO_LINE);
+      return null;
+    } finally {
+      isBusy.current = false;
+      setIsSending(false);
+    }
+  };
+  return { fields, trouble, isSending, say, send };
+}
+
+/** What is wrong, by field, as one line each. */
+export function fieldWords(fields: Refusal['fields'] = {}): Fields {
+  return Object.fromEntries(
+    Object.entries(fields).flatMap(([field, words]) => (words ? [[field, words.join(' ')]] : [])),
+  );
+}
