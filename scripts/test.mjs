@@ -11,7 +11,7 @@ const report = (name) => path.join(folder, `${name}.json`);
 const steps = [
   {
     title: 'Verify',
-    args: ['scripts/verify.mjs'],
+    args: ['scripts/verify.mjs', '--fresh'],
     env: { VERIFY_REPORT: report('verify') },
     count: () => tally(read('verify').map(({ passed }) => passed)),
   },
