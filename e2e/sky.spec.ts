@@ -1,5 +1,7 @@
 import { expect, test } from './fixtures';
+import { addScan, DAY_50, makeOwnSession } from './own-session';
 
+const HOUR = 3_600_000;
 const ADDRESS = '/sessions/ARC-031/sky';
 
 test('a scheduler finds when all, some and two of the stations see a source', async ({ pageAs }) => {
@@ -41,4 +43,41 @@ test('the sky is read as a table and saved as a file', async ({ pageAs }) => {
   const saving = page.waitForEvent('download');
   await page.getByRole('button', { name: 'Export table' }).click();
   expect((await saving).suggestedFilename()).toBe('ARC-031-sky.csv');
+});
+
+test('the best start is weighed, chosen by keys, set, and taken back', async ({ pageAs }, info) => {
+  const code = `SKY-${100 + info.workerIndex}`;
+  const page = await pageAs('scheduler');
+  await makeOwnSession(page, code, 'When to start');
+  await addScan(page, code, DAY_50 + 18.5 * HOUR);
+  await page.goto(`/sessions/${code}/sky`);
+  const best = page.getByRole('region', { name: 'Best start' });
+  const slider = best.getByRole('slider', { name: 'Start to weigh, UT' });
+  await expect(slider).toHaveAttribute('aria-valuetext', /GMST \d\d:\d\d: \d+\.\d of 24 station-hours/);
+  const length = best.getByLabel('Length of the session, hours');
+  await length.fill('60');
+  await expect(best.getByRole('alert')).toHaveText('Type hours from 0.2 to 24.');
+  await length.fill('6');
+  await expect(slider).toHaveAttribute('aria-valuetext', /of 12 station-hours, .* of 6 baseline-hours$/);
+
+  await slider.focus();
+  await page.keyboard.press('Home');
+  await page.keyboard.press('PageUp');
+  await expect(slider).toHaveAttribute('aria-valuetext', /^Day 050 19:00:00/);
+  await best.getByRole('button', { name: 'Start at 19:00:00' }).click();
+  const dialog = page.getByRole('dialog', { name: 'Start at 19:00:00?' });
+  await expect(dialog.getByText(/1 scan stays where it is: 1 would be outside its hours/)).toBeVisible();
+  await dialog.getByRole('button', { name: 'Start at 19:00:00' }).click();
+  await expect(page.getByText(`${code} starts on day 050 at 19:00:00, for 6 h.`)).toBeVisible();
+  await expect(page.getByText('6 h from 2027 day 050, 19:00 UT')).toBeVisible();
+  await page.getByRole('button', { name: 'Undo' }).click();
+  await expect(page.getByText('12 h from 2027 day 050, 18:00 UT')).toBeVisible();
+});
+
+test('who may not move a session still reads the best start', async ({ pageAs }) => {
+  const page = await pageAs('investigator');
+  await page.goto(ADDRESS);
+  const best = page.getByRole('region', { name: 'Best start' });
+  await expect(best.getByText(/^\d+\.\d station-hours$/)).toBeVisible();
+  await expect(best.getByRole('button', { name: /^Start at/ })).toHaveCount(0);
 });

@@ -1,42 +1,12 @@
-import { createHash } from 'node:crypto';
 import type { Page } from '@playwright/test';
-import { idOf } from '../src/schedule/plan-ids';
 import { expect, expectAccessible, setThemeCookie, test, THEMES } from './fixtures';
+import { addScan, DAY_50, makeOwnSession } from './own-session';
 
 /** A session of its own, from its first scan to an answer that is asked again: the steps follow each other. */
 test.describe.configure({ mode: 'serial' });
 
 let code = '';
-const DAY_50 = Date.UTC(2027, 1, 19);
 const HOUR = 3_600_000;
-
-/** As the demo names its rows. */
-const seedId = (name: string) => idOf(createHash('sha256').update(name).digest());
-const MODE = seedId('mode:22 GHz');
-
-/** Adds a scan of Af and Fn, as the timeline would. */
-async function addScan(page: Page, startMs: number): Promise<void> {
-  const scan = {
-    id: seedId(`${code} scan ${startMs}`),
-    sourceId: seedId('source:J0827+5217'),
-    modeId: MODE,
-    startMs,
-    lengthSeconds: 600,
-    stations: ['Af', 'Fn'].map((station) => ({ station, lateSeconds: 0, earlySeconds: 0 })),
-    groupId: null,
-    leg: null,
-    comment: '',
-  };
-  const command = { verb: 'add-scan', edits: [{ kind: 'add-scan', scan }] };
-  const status = await page.evaluate(
-    async ([address, body]) => (await fetch(address, { method: 'POST', body })).status,
-    [
-      `/api/sessions/${code}/commands`,
-      JSON.stringify({ kind: 'do', actId: seedId(`${code} act ${startMs}`), command, seen: {} }),
-    ] as const,
-  );
-  expect(status).toBe(200);
-}
 
 const offerAnew = async (page: Page, button: string) => {
   await page.getByRole('button', { name: button }).click();
@@ -50,23 +20,12 @@ test('nothing is offered before there is a scan, and nobody at a station sees th
 }, info) => {
   code = `SLT-${100 + info.workerIndex}`;
   const page = await pageAs('scheduler');
-  await page.goto('/sessions/new');
-  await page.getByLabel('Code').fill(code);
-  await page.getByLabel('Title').fill('Two antennas');
-  await page.getByLabel('Start, UT').fill('2027-050 18:00');
-  await page.getByLabel('Length').fill('12 h');
-  await page.getByRole('checkbox', { name: /^Af/ }).check();
-  await page.getByRole('checkbox', { name: /^Fn/ }).check();
-  await page.getByLabel('Add a source by name').fill('J0827+5217');
-  await page.getByRole('button', { name: 'Add the source' }).click();
-  await page.getByLabel('Mode that new scans').selectOption(MODE);
-  await page.getByRole('button', { name: 'Make the session' }).click();
-  await expect(page).toHaveURL(new RegExp(`/sessions/${code}/timeline$`));
+  await makeOwnSession(page, code, 'Two antennas');
 
   await page.goto(`/sessions/${code}/slots`);
   await expect(page.getByRole('heading', { name: 'Nothing is offered yet' })).toBeVisible();
   await expect(page.getByRole('button', { name: `Offer ${code} to its stations` })).toBeDisabled();
-  await addScan(page, DAY_50 + 22 * HOUR);
+  await addScan(page, code, DAY_50 + 22 * HOUR);
   await page.reload();
   await expect(page.getByRole('button', { name: `Offer ${code} to its stations` })).toBeEnabled();
 
@@ -153,7 +112,7 @@ test('a scheduler answers for a station in part, and that is marked', async ({ p
 test('a plan that leaves the hours of a yes asks again, and tells the others', async ({ pageAs }) => {
   const page = await pageAs('scheduler');
   await page.goto(`/sessions/${code}/slots`);
-  await addScan(page, DAY_50 + 23 * HOUR);
+  await addScan(page, code, DAY_50 + 23 * HOUR);
   await expect(page.getByText('the draft has moved on since')).toBeVisible({ timeout: 15_000 });
   const operator = await pageAs('operatorAf');
   await operator.goto(`/sessions/${code}/slots`);

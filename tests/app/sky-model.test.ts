@@ -31,6 +31,7 @@ const sheet: SkySheet = {
   stations,
   sources: sources.map((source) => ({ ...source, fluxJy: 1, sunDeg: 100, moonDeg: 50 })),
   table: skyTable(stations, sources, makeContext().settings, span),
+  starts: { windows: [], areTargets: true, longestSeconds: 86_400, move: null },
   nowMs: startMs,
 };
 const scale = { startMs, endMs: startMs + DAY, gmstStartHours: sheet.gmstStartHours, width: 808 };

@@ -1,4 +1,5 @@
 import type { PlanSource, PlanStation } from '../../schedule/context';
+import type { StationCode } from '../../schedule/plan';
 import type { SkyTable } from '../../schedule/sky-table';
 import type { SessionHead } from '../session/dto';
 
@@ -8,6 +9,19 @@ export type SkySource = Pick<PlanSource, 'id' | 'name' | 'role' | 'position'> & 
   /** distance from the centres of Sun and Moon in the middle of the session, seen from the geocentre */
   sunDeg: number;
   moonDeg: number;
+};
+
+type Span = readonly [startMs: number, endMs: number];
+
+/** What the best start of a session is weighed from. */
+export type StartSheet = {
+  /** of the targets, or of all sources where none is a target; long enough for every start of a sidereal day */
+  windows: readonly Readonly<Record<StationCode, readonly Span[]>>[];
+  areTargets: boolean;
+  /** lengths up to here can be weighed */
+  longestSeconds: number;
+  /** revision of the session's hours, and the scans that stand in them; null where the viewer may not move them */
+  move: { spanRev: number; scans: readonly Span[] } | null;
 };
 
 export type SkySheet = {
@@ -20,5 +34,6 @@ export type SkySheet = {
   stations: Pick<PlanStation, 'code' | 'name' | 'site'>[];
   sources: SkySource[];
   table: SkyTable;
+  starts: StartSheet;
   nowMs: number;
 };

@@ -1,17 +1,24 @@
 import 'server-only';
+import { and, eq, sql } from 'drizzle-orm';
 import { db } from '../../../db/client';
+import { scans } from '../../../db/schema/scans';
+import { subjects } from '../../../db/schema/subjects';
 import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
-import type { PlanMode, PlanSource } from '../../schedule/context';
-import { skyTable, type SkyTable } from '../../schedule/sky-table';
+import { startsEndMs } from '../../schedule/best-start';
+import { SPAN_SUBJECT } from '../../schedule/commands';
+import type { PlanMode, PlanSource, PlanStation } from '../../schedule/context';
+import { skyStation, skyTable, type SkyTable } from '../../schedule/sky-table';
 import { gmstHours, moonSeparationDeg, sunSeparationDeg } from '../../sky/position';
+import { spansOf } from '../../sky/interval-set';
+import { windowsFor } from '../../sky/windows';
 import type { Interval } from '../../units/time';
 import { answer, forbiddenFor, type Failure } from '../errors';
 import { readModes, readSources, readStations } from '../plan/context';
 import { fluxOf } from '../plan/flux';
 import { headOf } from '../session/head';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
-import type { SkySheet, SkySource } from './dto';
+import type { SkySheet, SkySource, StartSheet } from './dto';
 
 /** Elevations, windows and common windows of a session's sources over its span. */
 export const readSky = (viewer: Viewer, key: string): Promise<{ ok: true; table: SkyTable } | Failure> =>
@@ -38,6 +45,7 @@ export const readSkySheet = (viewer: Viewer, key: string): Promise<{ ok: true; s
         stations: stations.map(({ code, name, site }) => ({ code, name, site })),
         sources: sources.map((source) => skySource(source, mode, middle)),
         table,
+        starts: await startsOf(viewer, session, { stations, sources }),
         nowMs: now,
       },
     };
@@ -54,6 +62,54 @@ async function skyOf({ id, startMs, lengthSeconds, minElevationDeg, stations: co
   const sources = await readSources(db(), id);
   const stations = await readStations(db(), codes);
   return { span, sources, stations, table: skyTable(stations, sources, { minElevationDeg }, span) };
+}
+
+/** Windows over as long as a start a sidereal day later would need, and what may be moved. */
+async function startsOf(
+  viewer: Viewer,
+  session: SessionRow,
+  { stations, sources }: { stations: readonly PlanStation[]; sources: readonly PlanSource[] },
+): Promise<StartSheet> {
+  const { startMs, lengthSeconds, minElevationDeg } = session;
+  const longestSeconds = Math.max(lengthSeconds, 86_400);
+  const span = { start: new Date(startMs), end: new Date(startsEndMs(startMs, longestSeconds * 1000)) };
+  const targets = sources.filter(({ role }) => role === 'target');
+  const weighed = targets.length > 0 ? targets : sources;
+  const windows = windowsFor(
+    weighed.map(({ position }) => position),
+    stations.map((station) => skyStation(station, { minElevationDeg })),
+    span,
+  );
+  return {
+    windows: windows.map((byStation) =>
+      Object.fromEntries(stations.map(({ code }, index) => [code, spansOf(byStation[index] ?? [])])),
+    ),
+    areTargets: targets.length > 0,
+    longestSeconds,
+    move: await moveOf(viewer, session),
+  };
+}
+
+async function moveOf(viewer: Viewer, session: SessionRow): Promise<StartSheet['move']> {
+  const isEnded = session.state === 'closed' || session.state === 'cancelled';
+  if (isEnded || !can(viewer, 'plan.edit', subjectOf(session))) return null;
+  // the legs of a nodding group stand as one, as on the timeline
+  const placed = await db()
+    .select({
+      startMs: sql<number>`min(${scans.startMs})`,
+      stopMs: sql<number>`max(${scans.startMs} + 1000 * ${scans.lengthSeconds})`,
+    })
+    .from(scans)
+    .where(eq(scans.sessionId, session.id))
+    .groupBy(sql`coalesce(${scans.groupId}, ${scans.id})`);
+  const [span] = await db()
+    .select({ rev: subjects.rev })
+    .from(subjects)
+    .where(and(eq(subjects.sessionId, session.id), eq(subjects.id, SPAN_SUBJECT)));
+  return {
+    spanRev: span?.rev ?? 0,
+    scans: placed.map((scan) => [scan.startMs, scan.stopMs] as const),
+  };
 }
 
 function skySource(source: PlanSource, mode: PlanMode | undefined, middle: Date): SkySource {

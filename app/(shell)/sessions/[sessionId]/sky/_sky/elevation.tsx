@@ -4,10 +4,10 @@ import type { StationCode } from '@/src/schedule/plan';
 import { tableElevationDeg, type SkyTable } from '@/src/schedule/sky-table';
 import { highestOf, pointsIn, windowsOf, type Point } from './model';
 import { ROW } from './row-grid';
-import { crisp, gmstAt, hourTicks, xOf, type Scale } from './scale';
+import { crisp, gmstAt, gmstText, hourTicks, xOf, type Scale } from './scale';
 
 const DASHES = ['', '7 3', '2 2.5', '9 3 2 3', '4 2', '1 3'] as const;
-const HEIGHT = 150;
+const HEIGHT = 128;
 const TOP = 8;
 const BASE = HEIGHT - 8;
 
@@ -29,10 +29,7 @@ export function Elevation({ sheet, source, codes, scale, atMs }: Props) {
     null,
   );
   return (
-    <section
-      className={`${ROW} border-b border-rule bg-sheet py-2 desk:sticky desk:bottom-0`}
-      aria-label="Elevation"
-    >
+    <section className={`${ROW} border-b border-rule bg-sheet py-1`} aria-label="Elevation">
       <div className="min-w-0 desk:pl-[16px] desk:pr-[30px]">
         <h2 className="text-lead">Elevation</h2>
         <p className="text-small font-head text-teal">{source.name}</p>
@@ -186,9 +183,4 @@ function said(
   const isUp = windowsOf(table, sourceId, code).some(([from, to]) => from <= atMs && atMs < to);
   const elevation = isUp ? tableElevationDeg(table, sourceId, code, atMs) : null;
   return elevation === null ? 'not up' : angleText(elevation);
-}
-
-function gmstText(hours: number): string {
-  const minutes = Math.floor(hours * 60);
-  return `${String(Math.floor(minutes / 60)).padStart(2, '0')}:${String(minutes % 60).padStart(2, '0')}`;
 }

@@ -62,3 +62,9 @@ export function useWidth(): { boxRef: (box: HTMLElement | null) => (() => void) 
   }, []);
   return { boxRef, width };
 }
+
+/** "05:31" */
+export function gmstText(hours: number): string {
+  const minutes = Math.floor(hours * 60);
+  return `${String(Math.floor(minutes / 60)).padStart(2, '0')}:${String(minutes % 60).padStart(2, '0')}`;
+}

@@ -8,6 +8,7 @@ import type { SkySheet } from '@/src/data/sky/dto';
 import { liveKeys } from '@/app/_ui/live-keys';
 import RefreshOn from '@/app/_ui/refresh-on';
 import { Axis } from './axis';
+import { BestStart } from './best-start';
 import { windowsCsv } from './csv';
 import { Elevation } from './elevation';
 import { pairText, rowsOf, type Mark } from './model';
@@ -113,7 +114,10 @@ export function Sky({ sheet: read }: { sheet: SkySheet }) {
                 onChoose={setChosenId}
                 onKeyDown={onKeyDown}
               />
-              <Elevation sheet={sheet} source={source} codes={codes} scale={scale} atMs={atMs} />
+              <div className="bg-sheet desk:[@media(min-height:860px)]:sticky desk:[@media(min-height:860px)]:bottom-0">
+                <Elevation sheet={sheet} source={source} codes={codes} scale={scale} atMs={atMs} />
+                <BestStart sheet={sheet} codes={codes} />
+              </div>
               <Hairline x={atMs === null ? null : xOf(scale, atMs)} />
             </div>
             <p className="help px-[12px] py-2 desk:px-[16px]">
