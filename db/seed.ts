@@ -24,7 +24,7 @@ import { users } from './schema/users';
 import { ACCOUNTS, DEMO_PASSWORD } from './seed-data/accounts';
 import { BAND_22, BAND_8, MODES } from './seed-data/modes';
 import { SESSIONS } from './seed-data/session';
-import { SOURCES } from './seed-data/sources';
+import { OTHER_SOURCES, SOURCES } from './seed-data/sources';
 import { SEFDS, STATIONS } from './seed-data/stations';
 import { fillAnswers } from './seed-answers';
 import { fillClocks, fillCounters, fillEquipment } from './seed-clocks';
@@ -139,13 +139,12 @@ async function fillCatalogues(tx: Tx): Promise<void> {
         ...(at8 === null ? [] : [{ stationCode, band: BAND_8, sefdJy: at8 }]),
       ]),
     );
+  const all = [...SOURCES, ...OTHER_SOURCES];
   await tx
     .insert(sources)
-    .values(
-      SOURCES.map(([name, raDeg, decDeg, role]) => ({ id: sourceId(name), name, raDeg, decDeg, role })),
-    );
+    .values(all.map(([name, raDeg, decDeg, role]) => ({ id: sourceId(name), name, raDeg, decDeg, role })));
   await tx.insert(sourceBands).values(
-    SOURCES.flatMap(([name, , , , at22, at8]) => [
+    all.flatMap(([name, , , , at22, at8]) => [
       { sourceId: sourceId(name), band: BAND_22, fluxJy: at22[0], sizeMas: at22[1] },
       { sourceId: sourceId(name), band: BAND_8, fluxJy: at8[0], sizeMas: at8[1] },
     ]),

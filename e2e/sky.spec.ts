@@ -74,6 +74,26 @@ test('the best start is weighed, chosen by keys, set, and taken back', async ({ 
   await expect(page.getByText('12 h from 2027 day 050, 18:00 UT')).toBeVisible();
 });
 
+test('a calibrator near a source is found and taken into the session', async ({ pageAs }, info) => {
+  const code = `NEA-${100 + info.workerIndex}`;
+  const page = await pageAs('scheduler');
+  await makeOwnSession(page, code, 'What is near');
+  await page.goto(`/sessions/${code}/sky`);
+  const panel = page.getByRole('complementary', { name: 'Chosen source' });
+  const table = panel.getByRole('table', { name: 'Nearby calibrators' });
+  await expect(table.getByRole('row', { name: /^J0927\+3902 16.7° 137° 3.10 \d+%$/ })).toBeVisible();
+  const within = panel.getByLabel('Calibrators within so many degrees');
+  await within.fill('far');
+  await expect(panel.getByRole('alert')).toHaveText('Type degrees above 0, up to 180.');
+  await within.fill('2');
+  await expect(panel.getByText('The catalogue has no calibrator within 2° of J0827+5217.')).toBeVisible();
+  await within.fill('30');
+  await table.getByRole('button', { name: 'J0555+3948' }).click();
+  await panel.getByRole('button', { name: 'Add J0555+3948 to the session' }).click();
+  await expect(panel.getByText(`J0555+3948 is one of ${code}’s sources.`)).toBeVisible();
+  await expect(page.getByRole('listbox', { name: /^Sources/ }).getByRole('option')).toHaveCount(2);
+});
+
 test('who may not move a session still reads the best start', async ({ pageAs }) => {
   const page = await pageAs('investigator');
   await page.goto(ADDRESS);

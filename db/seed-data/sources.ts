@@ -27,3 +27,17 @@ export const SOURCES: readonly (readonly [
   ['J1058+0133', 164.6233550311, 1.5663399359, 'target', [0.74, 0.22], [1.2, 0.47], 5],
   ['J1159+2914', 179.8826412906, 29.245507465, 'target', [0.52, 0.22], [0.8, 0.46], 7],
 ];
+
+/** In the catalogue alone, around the targets: the first place as above, the others invented to 0.01°. */
+export const OTHER_SOURCES: readonly (readonly [
+  name: string,
+  raDeg: number,
+  decDeg: number,
+  role: SourceRole,
+  at22: Band,
+  at8: Band,
+])[] = [
+  ['J1217+3007', 184.4670083, 30.1168433, 'phase-ref', [0.47, 0.18], [0.55, 0.36]],
+  ['J1152+3307', 178.1, 33.12, 'phase-ref', [0.19, 0.17], [0.26, 0.35]],
+  ['J1146+2452', 176.55, 24.87, 'phase-ref', [0.55, 0.2], [0.61, 0.41]],
+];

@@ -126,7 +126,7 @@ type StoredComponent = {
 };
 
 /** The list of components stands for flux density and size where there is one. */
-function componentsOf(band: typeof sourceBands.$inferSelect): GaussianComponent[] {
+export function componentsOf(band: typeof sourceBands.$inferSelect): GaussianComponent[] {
   const stored = JSON.parse(band.components) as StoredComponent[];
   if (stored.length === 0) return [roundGaussian(band.fluxJy, band.sizeMas ?? 0)];
   return stored.map((one) => ({

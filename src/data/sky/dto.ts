@@ -37,3 +37,27 @@ export type SkySheet = {
   starts: StartSheet;
   nowMs: number;
 };
+
+/** A catalogue source that could serve as calibrator of a session's source. */
+export type NearbySource = {
+  id: string;
+  name: string;
+  role: PlanSource['role'];
+  /** in the band of the session's mode; null where it is not known */
+  fluxJy: number | null;
+  separationDeg: number;
+  /** from north through east */
+  positionAngleDeg: number;
+  /** part of the source's station-hours in the session in which this one is up as well; null where it has none */
+  upToo: number | null;
+  isInSession: boolean;
+};
+
+export type Nearby = {
+  withinDeg: number;
+  /** the nearest first, at most NEARBY_MOST */
+  sources: NearbySource[];
+  /** how many more there are */
+  more: number;
+  canAdd: boolean;
+};

@@ -3,6 +3,7 @@
 import { revalidatePath } from 'next/cache';
 import type { Failure } from '@/src/data/errors';
 import { takeAct } from '@/src/data/plan/write';
+import { addSessionSource } from '@/src/data/session/add-source';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { asViewer } from '../../../_catalogue/as-viewer';
 
@@ -12,4 +13,16 @@ export async function moveHours(sessionId: string, body: object): Promise<{ ok: 
   if (!answer.ok) return answer;
   revalidatePath('/sessions', 'layout');
   return { ok: true };
+}
+
+/** Puts a source of the catalogue on the session's list. */
+export async function addSource(
+  sessionId: string,
+  body: object,
+): Promise<{ ok: true; name: string } | Failure> {
+  const answer = await asViewer<{ ok: true; name: string }>(await currentViewer(), (viewer) =>
+    addSessionSource(viewer, sessionId, body),
+  );
+  if (answer.ok) revalidatePath('/sessions', 'layout');
+  return answer;
 }

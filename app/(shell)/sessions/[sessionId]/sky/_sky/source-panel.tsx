@@ -3,6 +3,7 @@ import type { SkySheet, SkySource } from '@/src/data/sky/dto';
 import type { StationCode } from '@/src/schedule/plan';
 import { declinationText, rightAscensionText } from '@/src/units/sexagesimal';
 import { sourceWords } from '../../../_plan/source-words';
+import { Calibrators } from './calibrators';
 import { highestOf, markText, togetherIn, windowsOf, type Mark } from './model';
 import { hoursText, togetherSentence } from './words';
 import { Spans } from './spans';
@@ -81,6 +82,7 @@ export function SourcePanel({ sheet, source, codes, mark }: Props) {
           </Line>
         </dl>
       </section>
+      <Calibrators key={source.id} sheet={sheet} source={source} />
     </aside>
   );
 }
