@@ -194,3 +194,45 @@ for (const theme of THEMES) {
     await expectAccessible(page);
   });
 }
+
+test('a mask is taken from a file after a look, dragged, and left as it was; paths are drawn over it', async ({
+  pageAs,
+}) => {
+  const page = await pageAs('admin');
+  await page.goto('/stations/Dp');
+  await page.getByLabel('Path of', { exact: true }).selectOption({ label: 'J0827+5217' });
+  await expect(page.getByRole('button', { name: 'Take the path of J0827+5217 away' })).toBeVisible();
+
+  await page.getByRole('button', { name: 'Edit: Horizon mask' }).click();
+  const form = page.getByRole('form', { name: 'Horizon mask' });
+  const upload = (name: string, text: string) =>
+    form
+      .getByLabel('A file with two columns')
+      .setInputFiles({ name, mimeType: 'text/plain', buffer: Buffer.from(text) });
+  await upload('empty.txt', '# nothing yet\n');
+  await expect(form.getByRole('alert')).toHaveText(/“empty.txt” holds no corner/);
+  await upload('mask.txt', 'az el\n90 30\n0 30\n180 30\n200 high\n');
+  const dialog = page.getByRole('dialog', { name: 'The mask in mask.txt' });
+  await expect(dialog.getByText('3 corners in place of the 5 that stand now.')).toBeVisible();
+  await expect(dialog.getByText('Line 5, “200 high”: “high” is no elevation.')).toBeVisible();
+  await page.keyboard.press('Escape');
+  await expect(dialog).toHaveCount(0);
+  await expect(form.getByLabel('Azimuth, row 5')).toHaveValue('316');
+
+  await upload('mask.txt', 'az el\n90 30\n0 30\n180 30\n');
+  await dialog.getByRole('button', { name: 'Take 3 corners' }).click();
+  await expect(form.getByLabel('Azimuth, row 2')).toHaveValue('90');
+  await expect(form.getByLabel('Azimuth, row 4')).toHaveCount(0);
+  // the corner in the east, a third of the way in, is dragged half way to the middle
+  const drawing = form.locator('svg.mask-drawing');
+  const box = await drawing.boundingBox();
+  if (!box) throw new Error('no drawing');
+  const [x, y, rim] = [box.x + box.width / 2, box.y + box.height / 2, (97 / 232) * box.width];
+  await page.mouse.move(x + rim / 3, y);
+  await page.mouse.down();
+  await page.mouse.move(x + rim / 2, y, { steps: 4 });
+  await page.mouse.up();
+  await expect(form.getByLabel('Elevation, row 2')).toHaveValue('22.5');
+  await form.getByRole('button', { name: 'Leave as it was' }).click();
+  await expect(page.getByText('5 corners, straight lines between them')).toBeVisible();
+});

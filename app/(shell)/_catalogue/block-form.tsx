@@ -1,14 +1,34 @@
 'use client';
 
-import { useEffect, useRef, useState, useTransition, type FormEvent, type KeyboardEvent } from 'react';
+import {
+  useEffect,
+  useRef,
+  useState,
+  useTransition,
+  type FormEvent,
+  type KeyboardEvent,
+  type ReactNode,
+} from 'react';
 import { showToast } from '@/app/_ui/toast';
 import type { BlockAct } from '@/src/data/blocks';
 import type { Failure } from '@/src/data/errors';
-import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
+import {
+  readBlock,
+  type AnyBlock,
+  type Typed,
+  type TypedRow,
+  type Wrong,
+} from '@/src/exchange/catalogue/block';
 import { BlockFields } from './block-fields';
 import { focusWrong, wrongOf, wrongText } from './wrong';
 
 export type Keep = (act: BlockAct) => Promise<{ ok: true } | Failure>;
+
+/** More than fields: drawn from what is typed, and typing into it. */
+export type Aid = (
+  typed: Typed,
+  onType: (field: string, value: string | readonly TypedRow[]) => void,
+) => ReactNode;
 
 type Props = {
   name: string;
@@ -16,11 +36,12 @@ type Props = {
   /** as it is stored */
   stored: Typed;
   keep: Keep;
+  aid?: Aid;
   onLeave: () => void;
 };
 
 /** One block of an object in edit: the same parser here and on the server says what is wrong. */
-export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
+export function BlockForm({ name, block, stored, keep, aid, onLeave }: Props) {
   const [was] = useState(stored);
   const [typed, setTyped] = useState(stored);
   const [wrong, setWrong] = useState<readonly Wrong[]>([]);
@@ -31,7 +52,9 @@ export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
   const note = read.ok ? block.note?.(read.value) : null;
 
   useEffect(() => {
-    form.current?.querySelector<HTMLElement>('input, select, textarea, button')?.focus();
+    form.current
+      ?.querySelector<HTMLElement>(':is(input, select, textarea, button):not([tabindex="-1"])')
+      ?.focus();
   }, []);
   useEffect(() => {
     if (wrong.length > 0) focusWrong(form.current);
@@ -53,8 +76,14 @@ export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
       else setRefusal(answer.message);
     });
   };
+  const onType = (field: string, value: string | readonly TypedRow[]) => {
+    setTyped({ ...typed, [field]: value });
+    setWrong(wrong.filter((one) => one.field !== field && !one.field.startsWith(`${field}.`)));
+  };
   const onKeyDown = (event: KeyboardEvent) => {
-    if (event.key === 'Escape') onLeave();
+    // a dialog over the form closes by itself
+    const isOver = event.target instanceof Element && event.target.closest('dialog') !== null;
+    if (event.key === 'Escape' && !isOver) onLeave();
   };
 
   return (
@@ -75,15 +104,8 @@ export function BlockForm({ name, block, stored, keep, onLeave }: Props) {
           {refusal}
         </div>
       )}
-      <BlockFields
-        block={block}
-        typed={typed}
-        wrong={wrong}
-        onType={(field, value) => {
-          setTyped({ ...typed, [field]: value });
-          setWrong(wrong.filter((one) => one.field !== field && !one.field.startsWith(`${field}.`)));
-        }}
-      />
+      {aid?.(typed, onType)}
+      <BlockFields block={block} typed={typed} wrong={wrong} onType={onType} />
       {note != null && <p className="help mt-2">{note}</p>}
       <div className="block-acts">
         <button type="submit" className="btn btn-primary" aria-disabled={isPending}>

@@ -2,7 +2,7 @@
 
 import { useEffect, useRef, type ReactNode } from 'react';
 import { writeBlock, type AnyBlock, type Block, type Values } from '@/src/exchange/catalogue/block';
-import { BlockForm, type Keep } from './block-form';
+import { BlockForm, type Aid, type Keep } from './block-form';
 
 export type Editing = {
   /** the block that is open */
@@ -17,12 +17,14 @@ type Props<V, T> = {
   block: Block<V, T>;
   value: Values<V, T>;
   editing: Editing;
+  /** what stands above the fields in edit */
+  aid?: Aid;
   /** how it reads */
   children: ReactNode;
 };
 
 /** A block of an object's page with its own Edit; one at a time is open, the others stay readable. */
-export function ObjectBlock<V, T>({ name, block, value, editing, children }: Props<V, T>) {
+export function ObjectBlock<V, T>({ name, block, value, editing, aid, children }: Props<V, T>) {
   const { open, setOpen, can, keep } = editing;
   const isOpen = open === name;
   const edit = useRef<HTMLButtonElement>(null);
@@ -39,6 +41,7 @@ export function ObjectBlock<V, T>({ name, block, value, editing, children }: Pro
         block={block as unknown as AnyBlock}
         stored={writeBlock(block, value)}
         keep={keep}
+        aid={aid}
         onLeave={() => setOpen(null)}
       />
     );

@@ -28,6 +28,8 @@ export type StationDto = {
   recorderFreeAtMs: number | null;
   retiredAtMs: number | null;
   blocks: StationBlocks;
+  /** catalogue sources by name, and their apparent declination today: their paths over the sky are drawn */
+  skySources: readonly { id: string; name: string; decDeg: number }[];
   /** blocks that the viewer may change */
   canEdit: readonly StationBlockName[];
   canRetire: boolean;

@@ -3,17 +3,24 @@ import { and, asc, eq, gt, inArray, isNull, ne } from 'drizzle-orm';
 import { db } from '../../../db/client';
 import { sessionStations } from '../../../db/schema/session-stations';
 import { sessions } from '../../../db/schema/sessions';
+import { sources } from '../../../db/schema/sources';
 import { stationBands } from '../../../db/schema/station-bands';
 import { stationUnavailability } from '../../../db/schema/station-unavailability';
 import { stations } from '../../../db/schema/stations';
 import { can, type Viewer } from '../../access/policy';
 import { nowMs } from '../../env';
 import { OWN_BLOCKS, STATION_BLOCKS, type StationBlockName } from '../../exchange/catalogue/station';
+import { apparentOfDate } from '../../sky/direction';
+import { earthFrameAt } from '../../sky/engine';
 import { geodeticToItrf } from '../../sky/site';
+import { radToDeg } from '../../units/angle';
 import { answer, forbiddenFor, type Failure } from '../errors';
 import { readableBy } from '../session/scope';
 import type { StationDto, StationRow } from './dto';
 import { blocksOf, fetchStation } from './rows';
+
+/** A list to choose from stays one that can be read. */
+const MOST_SOURCES = 1000;
 
 export type StationListItem = { code: string; name: string; site: { longitudeDeg: number } };
 
@@ -100,6 +107,7 @@ export const readStation = (
         recorderFreeAtMs: row.recorderFreeAtMs,
         retiredAtMs: row.retiredAtMs,
         blocks: await blocksOf(db(), row),
+        skySources: await readSkySources(nowMs()),
         canEdit: editableBlocks(viewer, row.code),
         canRetire: can(viewer, 'station.write'),
         canReadDesk: can(viewer, 'desk.read', { stationCode: row.code }),
@@ -110,6 +118,20 @@ export const readStation = (
       },
     };
   });
+
+async function readSkySources(atMs: number): Promise<StationDto['skySources']> {
+  const rows = await db()
+    .select({ id: sources.id, name: sources.name, raDeg: sources.raDeg, decDeg: sources.decDeg })
+    .from(sources)
+    .where(isNull(sources.retiredAtMs))
+    .orderBy(asc(sources.name))
+    .limit(MOST_SOURCES);
+  const frame = earthFrameAt(atMs);
+  return rows.map(({ id, name, ...place }) => {
+    const [, , sinDec] = apparentOfDate(place, frame);
+    return { id, name, decDeg: radToDeg(Math.asin(Math.max(-1, Math.min(1, sinDec)))) };
+  });
+}
 
 function editableBlocks(viewer: Viewer, stationCode: string): StationBlockName[] {
   if (can(viewer, 'station.write')) return Object.keys(STATION_BLOCKS) as StationBlockName[];

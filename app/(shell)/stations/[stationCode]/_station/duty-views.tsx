@@ -1,46 +1,7 @@
 import { formatInTimeZone } from 'date-fns-tz';
-import { angleText, dayText, minuteText } from '@/app/_ui/format';
+import { dayText, minuteText } from '@/app/_ui/format';
 import type { Absence } from '@/src/exchange/catalogue/station';
-import type { Corner } from '@/src/exchange/catalogue/station-site';
-import { MaskDrawing } from './mask-drawing';
 import { Scroll } from '../../../_catalogue/scroll';
-
-export function HorizonView({ corners, lowestDeg }: { corners: readonly Corner[]; lowestDeg: number }) {
-  const lower = `The lowest elevation of ${angleText(lowestDeg, 1)} applies where the mask is lower.`;
-  if (corners.length === 0) return <p className="help">No mask: the horizon is free. {lower}</p>;
-  return (
-    <>
-      <div className="mask">
-        <MaskDrawing corners={corners} />
-        <Scroll label="Corners" className="mask-table">
-          <table className="tt">
-            <thead>
-              <tr>
-                <th scope="col" className="num">
-                  Az °
-                </th>
-                <th scope="col" className="num">
-                  El °
-                </th>
-              </tr>
-            </thead>
-            <tbody>
-              {corners.map(({ azimuthDeg, elevationDeg }, index) => (
-                <tr key={index}>
-                  <td className="num">{azimuthDeg}</td>
-                  <td className="num">{elevationDeg.toFixed(1)}</td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
-        </Scroll>
-      </div>
-      <p className="help mt-1">
-        {corners.length} corners, straight lines between them, closed at 360°. {lower}
-      </p>
-    </>
-  );
-}
 
 type AwayProps = { away: readonly Absence[]; timeZone: string; nowMs: number };
 

@@ -14,7 +14,9 @@ import { latitudeText, longitudeText } from '../../_place/place-text';
 import { keepBlock, retire } from '../actions';
 import { MountView, PositionView, WrapView } from './site-views';
 import { AllowancesView, BandsView, RecordingView, WiringView } from './signal-views';
-import { AwayView, ContactsView, HorizonView } from './duty-views';
+import { AwayView, ContactsView } from './duty-views';
+import { HorizonAid } from './horizon-aid';
+import { HorizonView } from './horizon-view';
 import '../../../_catalogue/object.css';
 import './station.css';
 
@@ -94,8 +96,20 @@ export function StationPage({ station, nowMs }: { station: StationDto; nowMs: nu
           </ObjectBlock>
         </div>
         <div className="object-column">
-          <ObjectBlock name="horizon" block={STATION_BLOCKS.horizon} value={blocks.horizon} editing={editing}>
-            <HorizonView corners={blocks.horizon.horizon} lowestDeg={blocks.mount.minElevationDeg} />
+          <ObjectBlock
+            name="horizon"
+            block={STATION_BLOCKS.horizon}
+            value={blocks.horizon}
+            editing={editing}
+            aid={(typed, onType) => (
+              <HorizonAid
+                station={station}
+                rows={typeof typed.horizon === 'object' ? typed.horizon : []}
+                onRows={(rows) => onType('horizon', rows)}
+              />
+            )}
+          >
+            <HorizonView station={station} />
           </ObjectBlock>
           <ObjectBlock name="away" block={STATION_BLOCKS.away} value={blocks.away} editing={editing}>
             <AwayView away={blocks.away.away} timeZone={zone} nowMs={nowMs} />
