@@ -32,3 +32,12 @@ report({
   },
   wanted: { atMost: 6, ratioAtLeast: 2000 },
 });
+
+const open = inventedStations(12, false);
+report({
+  name: 'windows-batch-open',
+  unit: 'ms',
+  n,
+  seconds: medianSeconds(() => windowsFor(sources, open, SPAN).length),
+  wanted: { atMost: 1 },
+});

@@ -44,6 +44,29 @@ export function apparentOfDate(source: SkyPosition, frame: EarthFrame): Vector3 
   return rotate(frame.icrsToDate, apparentIcrs(source, frame));
 }
 
+/**
+ * The same for loops over sources: of a catalogue direction, written into an array.
+ *
+ * @param direction  from catalogueDirection
+ * @param at         index at which the three components begin
+ *
+ * Error   as apparentOfDate, to rounding
+ */
+export function placeOfDate(direction: Vector3, frame: EarthFrame, into: Float64Array, at: number): void {
+  const [x, y, z] = direction;
+  const [vx, vy, vz] = frame.velocity;
+  const [first, second, third] = frame.icrsToDate;
+  const inverseGamma = Math.sqrt(1 - (vx * vx + vy * vy + vz * vz));
+  const byVelocity = 1 + (x * vx + y * vy + z * vz) / (1 + inverseGamma);
+  const ax = x * inverseGamma + vx * byVelocity;
+  const ay = y * inverseGamma + vy * byVelocity;
+  const az = z * inverseGamma + vz * byVelocity;
+  const shrink = 1 / Math.sqrt(ax * ax + ay * ay + az * az);
+  into[at] = shrink * (first[0] * ax + first[1] * ay + first[2] * az);
+  into[at + 1] = shrink * (second[0] * ax + second[1] * ay + second[2] * az);
+  into[at + 2] = shrink * (third[0] * ax + third[1] * ay + third[2] * az);
+}
+
 /** The same direction on Earth-fixed axes (no polar motion). */
 export function earthFixed(ofDate: Vector3, gastRad: number): Vector3 {
   return turnAboutZ(ofDate, gastRad);

@@ -6,10 +6,10 @@ import windows from '../reference/windows.json';
 
 // Truth: ERFA atco13, edges by bisection, printed to 0.1 s (reference/windows.json).
 const TOLERANCE = {
-  /** digits of the reference, 0.1″ of direction at a usual rate */
-  edgeSeconds: 1,
-  /** grazing edges: direction error (0.1″ = 0.00003°) along the limit; the reference allows twice 0.001° */
-  edgeShifts: 2,
+  /** digits of the reference and 0.1″ of direction at a usual rate */
+  edgeSeconds: 0.2,
+  /** grazing edges: direction error (0.1″ = 0.00003°) along the limit; once the reference’s 0.001° */
+  edgeShifts: 1,
   /** edges on whole milliseconds */
   ownMs: 1,
 };
