@@ -1,5 +1,6 @@
 import type { Page } from '@playwright/test';
 import { expect, test } from './fixtures';
+import { makeOwnSession } from './own-session';
 
 /** What has the focus, in words; "body" is nothing. */
 const focused = (page: Page) =>
@@ -114,4 +115,45 @@ test('in forced colours notes and marks take the text’s colour, and the chosen
     return `${outlineStyle} ${outlineWidth}`;
   });
   expect(outline).toBe('solid 2px');
+});
+
+test('what was typed is kept when the line is lost or the server fails', async ({ pageAs }) => {
+  const page = await pageAs('scheduler');
+  await page.goto('/stations/Cf');
+  await page.getByRole('button', { name: 'Edit: Contacts' }).click();
+  const block = page.getByRole('form', { name: 'Contacts' });
+  await block.getByRole('textbox').fill('Night desk: extension 99 (invented)');
+  let fails: 'line' | 'server' = 'line';
+  await page.route('**/*', (route) => {
+    if (route.request().method() !== 'POST') return route.fallback();
+    return fails === 'line' ? route.abort() : route.fulfill({ status: 500, body: 'no' });
+  });
+  await block.getByRole('button', { name: 'Keep contacts' }).click();
+  await expect(block.getByRole('alert')).toHaveText(/^There is no line\. What you typed is kept/);
+  fails = 'server';
+  await block.getByRole('button', { name: 'Keep contacts' }).click();
+  await expect(block.getByRole('alert')).toHaveText(
+    /^The server could not finish this\. What you typed is kept/,
+  );
+  await expect(block.getByRole('textbox')).toHaveValue('Night desk: extension 99 (invented)');
+
+  fails = 'line';
+  await page.goto('/sessions/ARC-031/settings');
+  await page.getByLabel('Title').fill('Another title');
+  await page.getByRole('button', { name: 'Keep the changes' }).click();
+  await expect(page.getByRole('alert').first()).toHaveText(/^There is no line/);
+  await expect(page.getByLabel('Title')).toHaveValue('Another title');
+  await page.getByRole('button', { name: 'Cancel the session' }).click();
+  await page.getByRole('button', { name: 'Cancel it' }).click();
+  await expect(page.getByRole('alert').first()).toHaveText(/^There is no line/);
+});
+
+test('a list shows what others did, without being asked', async ({ pageAs }, info) => {
+  const code = `LST-${100 + info.workerIndex}`;
+  const reader = await pageAs('correlator');
+  await reader.goto('/sessions');
+  await expect(reader.getByRole('heading', { name: 'Sessions' }).first()).toBeVisible();
+  const scheduler = await pageAs('scheduler');
+  await makeOwnSession(scheduler, code, 'Made meanwhile');
+  await expect(reader.getByRole('link', { name: new RegExp(code) }).first()).toBeVisible();
 });

@@ -2,6 +2,7 @@
 
 import { errorIdOf } from '@/src/error-id';
 import { CopyText } from './copy-text';
+import { digestOf } from './digest-of';
 import { EmptySheet } from './empty-sheet';
 
 /** An error nobody expected: with its id where the server has logged it. */
@@ -39,9 +40,4 @@ export function Broken({ error, retry }: { error: unknown; retry: () => void }) 
       )}
     </EmptySheet>
   );
-}
-
-function digestOf(error: unknown): string | null {
-  if (typeof error !== 'object' || error === null || !('digest' in error)) return null;
-  return typeof error.digest === 'string' ? error.digest : null;
 }

@@ -1,9 +1,8 @@
 import { useRef, useState } from 'react';
+import { reach, type Unreached } from './reach';
 
 type Refusal = { ok: false; message: string; fields?: Record<string, string[] | undefined> };
 type Fields = Record<string, string>;
-
-const NO_LINE = 'There is no line. What you typed is kept: send it again when the line is back.';
 
 /** What a form says of its sending: what is wrong beside which field, what went wrong at all; one at a time. */
 export function useSending() {
@@ -16,31 +15,24 @@ export function useSending() {
     setFields(wrong);
     setTrouble(null);
   };
-  /** Null where nothing came back: there is no line, or another sending is on its way. */
+  /** Null while another sending is on its way. */
   const send = async <Answer extends { ok: true } | Refusal>(
     act: () => Promise<Answer>,
-  ): Promise<Answer | null> => {
+  ): Promise<Answer | Unreached | null> => {
     if (isBusy.current) return null;
     isBusy.current = true;
     setIsSending(true);
     say();
-    try {
-      const answer = await act();
-      const outcome: { ok: true } | Refusal = answer;
-      if (!outcome.ok) {
-        const back = fieldWords(outcome.fields);
-        setFields(back);
-        if (Object.keys(back).length === 0) setTrouble(outcome.message);
-      }
-      return answer;
-    } catch (error) {
-      if (!(error instanceof TypeError)) throw error;
-      setTrouble(NO_LINE);
-      return null;
-    } finally {
-      isBusy.current = false;
-      setIsSending(false);
+    const answer = await reach(act);
+    isBusy.current = false;
+    setIsSending(false);
+    const outcome: { ok: true } | Refusal = answer;
+    if (!outcome.ok) {
+      const back = fieldWords(outcome.fields);
+      setFields(back);
+      if (Object.keys(back).length === 0) setTrouble(outcome.message);
     }
+    return answer;
   };
   return { fields, trouble, isSending, say, send };
 }

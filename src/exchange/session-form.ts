@@ -1,4 +1,3 @@
-import { readLengthEntry } from '../units/entry';
 import { readBlock, type Block, type Typed, type Wrong } from './catalogue/block';
 import {
   areaField,
@@ -29,20 +28,30 @@ export type RulesValues = {
 
 const LONGEST_SECONDS = 14 * 86_400;
 
-/** "24", "24 h", "7 h 30 min", "0:45" of a session: a number alone is hours. */
+/** Seconds of "24", "24 h", "2 d", "7 h 30 min", "7:30": a number alone is hours, figures with a colon hours and minutes. */
+function lengthIn(text: string): number | null {
+  const hours = numberIn(text);
+  if (hours !== null) return Math.round(hours * 3600);
+  const word = text.trim().toLowerCase();
+  const clock = /^(\d{1,3}):([0-5]\d)$/.exec(word);
+  if (clock) return Number(clock[1]) * 3600 + Number(clock[2]) * 60;
+  const parts = /^(?:(\d+)\s*d)?\s*(?:(\d+)\s*h)?\s*(?:(\d+)\s*(?:min|m))?\s*(?:(\d+)\s*s)?$/.exec(word);
+  if (word === '' || !parts) return null;
+  const [days = 0, whole = 0, minutes = 0, seconds = 0] = parts.slice(1).map((part) => Number(part ?? 0));
+  return days * 86_400 + whole * 3600 + minutes * 60 + seconds;
+}
+
 const lengthField = neededField<number>(
   { label: 'Length', help: 'For example 24 h, or 7 h 30 min.' },
   (text) => {
-    const hours = numberIn(text);
-    const entry =
-      hours === null ? readLengthEntry(text) : { ok: true as const, value: Math.round(hours * 3600) };
-    if (!entry.ok)
+    const seconds = lengthIn(text);
+    if (seconds === null)
       return { ok: false, message: `“${text.trim()}” is no length. Write it as 24 h, or as 7 h 30 min.` };
-    if (entry.value < 60)
+    if (seconds < 60)
       return { ok: false, message: 'A session lasts at least a minute. Give a longer length.' };
-    if (entry.value > LONGEST_SECONDS)
+    if (seconds > LONGEST_SECONDS)
       return { ok: false, message: 'A session lasts at most 14 days. Make several of it.' };
-    return entry;
+    return { ok: true, value: seconds };
   },
   (seconds) => {
     const parts = [

@@ -47,15 +47,16 @@ export function slotsOf(plan: Plan): Slot[] {
  * How a station's word stands to what is asked now.
  *
  * @returns stale where the slot leaves the hours that were confirmed (of a partial answer, the slot that was answered) or
- *          a mode came in; a station that declined has declined, whatever moved
+ *          its modes are others; a station that declined has declined, whatever moved
  */
 export function answerTo(slot: Pick<Slot, 'startMs' | 'endMs' | 'modeIds'>, reply: Reply | null): Answer {
   if (reply === null) return 'open';
   if (reply.reply === 'declined') return 'declined';
   const { asked } = reply;
-  const isNewMode = slot.modeIds.some((id) => !asked.modeIds.includes(id));
+  const isOtherMode =
+    slot.modeIds.length !== asked.modeIds.length || slot.modeIds.some((id) => !asked.modeIds.includes(id));
   const leaves = slot.startMs < asked.startMs || slot.endMs > asked.endMs;
-  return isNewMode || leaves ? 'stale' : reply.reply;
+  return isOtherMode || leaves ? 'stale' : reply.reply;
 }
 
 /**

@@ -3,6 +3,7 @@ import { takeAct } from '@/src/data/plan/write';
 import { readTimeline } from '@/src/data/plan/read';
 import { offerPlan } from '@/src/data/offer/write';
 import { replySlot } from '@/src/data/slot/write';
+import { readNetworkStamp } from '@/src/data/network/stamp';
 import { readStamp } from '@/src/data/session/stamp';
 import { makeScan, makeSession, makeViewer, newId, openDatabase } from '@/tests/helpers/database';
 
@@ -52,4 +53,22 @@ it('is not for strangers, and shows an operator nothing of the draft', async () 
   const stranger = await makeViewer('investigator', { sessionId: (await makeSession()).id });
   expect(await readStamp(stranger, id)).toMatchObject({ ok: false, code: 'not_found' });
   expect((await stampOf(await makeViewer('operator', { stationCode: 'Af' }), id)).plan).toBe('');
+});
+
+it('the stamp of the network changes with whatever its lists show', async () => {
+  const scheduler = await makeViewer('scheduler');
+  const seen = new Set([await readNetworkStamp()]);
+  const { id } = await makeSession();
+  seen.add(await readNetworkStamp());
+  const command = { verb: 'add-scan', edits: [{ kind: 'add-scan', scan: makeScan() }] };
+  await takeAct(scheduler, id, { kind: 'do', actId: newId(), command, seen: {} });
+  seen.add(await readNetworkStamp());
+  const offerId = newId();
+  await offerPlan(scheduler, id, { id: offerId, kind: 'offer' });
+  seen.add(await readNetworkStamp());
+  const body = { actId: newId(), offerId, reply: 'declined', reason: 'wind' };
+  await replySlot(await makeViewer('operator', { stationCode: 'Af' }), id, 'Af', body);
+  seen.add(await readNetworkStamp());
+  expect(seen.size).toBe(5);
+  expect(await readNetworkStamp()).toBe([...seen].at(-1));
 });

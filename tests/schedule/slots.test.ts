@@ -47,6 +47,8 @@ describe('a station’s word', () => {
     ['stale when the slot ends later', yes, { ...asked, endMs: T0 + 11 * HOUR }, 'stale'],
     ['stale when the slot starts earlier', yes, { ...asked, startMs: T0 - 1000 }, 'stale'],
     ['stale when a mode comes in', yes, { ...asked, modeIds: ['m', 'n'] }, 'stale'],
+    ['stale when a mode is another', yes, { ...asked, modeIds: ['n'] }, 'stale'],
+    ['stale when a mode goes out', yes, { ...asked, modeIds: [] }, 'stale'],
     ['partly while the slot is the one it answered', { ...yes, reply: 'partly' as const }, asked, 'partly'],
     [
       'declined whatever moves',

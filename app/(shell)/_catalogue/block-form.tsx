@@ -9,6 +9,7 @@ import {
   type KeyboardEvent,
   type ReactNode,
 } from 'react';
+import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
 import type { BlockAct } from '@/src/data/blocks';
 import type { Failure } from '@/src/data/errors';
@@ -67,7 +68,7 @@ export function BlockForm({ name, block, stored, keep, aid, onLeave }: Props) {
     if (!read.ok) return setWrong(read.wrong);
     setWrong([]);
     startTransition(async () => {
-      const answer = await keep({ block: name, typed, was });
+      const answer = await reach(() => keep({ block: name, typed, was }));
       if (answer.ok) {
         showToast({ message: `“${block.title}” is kept.` });
         return onLeave();

@@ -5,6 +5,7 @@ import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useEffect, useRef, useState, useTransition, type FormEvent } from 'react';
 import { Field } from '@/app/_ui/field';
+import { reach } from '@/app/_ui/reach';
 import type { Failure } from '@/src/data/errors';
 import { readBlock, type AnyBlock, type Typed, type Wrong } from '@/src/exchange/catalogue/block';
 import type { Field as Entry } from '@/src/exchange/catalogue/field';
@@ -62,7 +63,7 @@ export function NewObject({ title, list, label, blocks, code, note, add }: Props
     setWrong(found);
     if (found.length > 0) return;
     startTransition(async () => {
-      const answer = await add(typed);
+      const answer = await reach(() => add(typed));
       if (answer.ok) return router.push(answer.href);
       if (answer.fields) setWrong(wrongOf(answer.fields));
       else setRefusal(answer.message);

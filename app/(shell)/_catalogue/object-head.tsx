@@ -5,6 +5,7 @@ import Link from 'next/link';
 import { useState, useTransition, type ReactNode } from 'react';
 import { Chip } from '@/app/_ui/chip';
 import { Dialog } from '@/app/_ui/dialog';
+import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
 import type { Failure } from '@/src/data/errors';
 import { fullTimeText } from '@/src/schedule/words';
@@ -31,11 +32,11 @@ export function ObjectHead(props: Props) {
   const [isPending, startTransition] = useTransition();
   const change = (isRetired: boolean) =>
     startTransition(async () => {
-      const answer = await retire?.(isRetired);
-      if (!answer) return;
+      if (!retire) return;
+      const answer = await reach(() => retire(isRetired));
       setRefusal(answer.ok ? null : answer.message);
-      if (!answer.ok) return;
       setIsAsked(false);
+      if (!answer.ok) return;
       showToast({ message: isRetired ? `${name} is retired.` : `${name} is in use again.` });
     });
 

@@ -1,5 +1,5 @@
 import type { Route } from 'next';
-import { canSome, type Verb, type Viewer } from '@/src/access/policy';
+import { canSome, type Role, type Verb, type Viewer } from '@/src/access/policy';
 
 /** Where a page stands: beside the sessions, inside one, or at a station. */
 export type Place =
@@ -42,11 +42,19 @@ export function navFor(viewer: Viewer, place: Place): NavItem[] {
   return own ? [...pagesOf(viewer, { kind: 'station', stationCode: own }), ...items] : items;
 }
 
-const pagesOf = (viewer: Viewer, place: Place): NavItem[] =>
-  PAGES.filter((page) => page.kind === place.kind && canSome(viewer, page.verb)).map((page) => ({
-    label: page.label,
-    href: hrefOf(page, place),
-  }));
+const pagesOf = (viewer: Viewer, place: Place): NavItem[] => {
+  const first = firstOf(viewer);
+  return PAGES.filter((page) => page.kind === place.kind && canSome(viewer, page.verb))
+    .sort((a, b) => Number(b.label === first) - Number(a.label === first))
+    .map((page) => ({ label: page.label, href: hrefOf(page, place) }));
+};
+
+/** The page of a session that someone's work begins with, where it is not the plan. */
+function firstOf({ grants }: Viewer): string | null {
+  const has = (role: Role) => grants.some((grant) => grant.role === role);
+  if (has('admin') || has('scheduler')) return null;
+  return has('correlator') ? 'Fringes' : has('investigator') ? 'Coverage' : null;
+}
 
 function hrefOf(page: Page, place: Place): Route {
   if (page.kind === 'network') return page.path;

@@ -1,9 +1,12 @@
 import type { Metadata } from 'next';
 import { forbidden } from 'next/navigation';
 import { EmptySheet } from '@/app/_ui/empty-sheet';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { readMailbox } from '@/src/data/mail/read';
 import { nowMs } from '@/src/env';
+import { readNetworkStamp } from '@/src/data/network/stamp';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { PageFrame } from '../_masthead/page-frame';
 import { Mailbox } from './_mail/mailbox';
@@ -29,12 +32,14 @@ const WHY = {
 export default async function MailPage() {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
+  const known = await readNetworkStamp();
   const answer = await readMailbox(viewer);
   if (!answer.ok) {
     forbidden();
   }
   return (
     <PageFrame viewer={viewer} nowMs={nowMs()} place={{ kind: 'network' }}>
+      <RefreshOn address={liveKeys.network} known={known} />
       {answer.isUp ? (
         <Mailbox messages={answer.messages} />
       ) : (

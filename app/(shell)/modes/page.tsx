@@ -1,8 +1,11 @@
 import type { Metadata } from 'next';
 import { forbidden } from 'next/navigation';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { listModes } from '@/src/data/mode/read';
 import { nowMs } from '@/src/env';
+import { readNetworkStamp } from '@/src/data/network/stamp';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { PageFrame } from '../_masthead/page-frame';
 import { ModeList } from './_list/mode-list';
@@ -14,10 +17,12 @@ type SearchParams = Promise<Record<string, string | string[] | undefined>>;
 export default async function ModesPage({ searchParams }: { searchParams: SearchParams }) {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
+  const known = await readNetworkStamp();
   const answer = await listModes(viewer);
   if (!answer.ok) forbidden();
   return (
     <PageFrame viewer={viewer} nowMs={nowMs()} place={{ kind: 'network' }}>
+      <RefreshOn address={liveKeys.network} known={known} />
       <ModeList modes={answer.modes} canAdd={answer.canAdd} query={await searchParams} />
     </PageFrame>
   );

@@ -1,6 +1,8 @@
 import type { Metadata } from 'next';
 import { forbidden } from 'next/navigation';
 import { Suspense } from 'react';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import type { SessionState } from '@/src/data/session/dto';
@@ -9,6 +11,7 @@ import { listSessions } from '@/src/data/session/read';
 import { listStations } from '@/src/data/station/read';
 import type { Viewer } from '@/src/access/policy';
 import { nowMs } from '@/src/env';
+import { readNetworkStamp } from '@/src/data/network/stamp';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { PageFrame } from '../_masthead/page-frame';
 import { Listing } from './_list/listing';
@@ -29,9 +32,11 @@ export default async function SessionsPage({ searchParams }: { searchParams: Sea
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
   const { find } = await searchParams;
+  const known = await readNetworkStamp();
   const now = nowMs();
   return (
     <PageFrame viewer={viewer} nowMs={now} place={{ kind: 'network' }}>
+      <RefreshOn address={liveKeys.network} known={known} />
       <Suspense fallback={<Waiting />}>
         <Sessions viewer={viewer} now={now} find={typeof find === 'string' ? find : ''} />
       </Suspense>

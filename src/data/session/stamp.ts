@@ -39,3 +39,16 @@ export const readStamp = (viewer: Viewer, key: string): Promise<SessionStamp | F
       stations: `${state}.${rev}.${row.stations}`,
     };
   });
+
+/** As one text, for a page to know what it was made of; read before what it shows. Undefined where there is none. */
+export async function knownStamp(
+  viewer: Viewer,
+  key: string,
+  of: 'all' | 'stations',
+): Promise<string | undefined> {
+  const read = await readStamp(viewer, key);
+  return read.ok ? stampText(read, of) : undefined;
+}
+
+export const stampText = ({ plan, stations }: SessionStamp, of: 'all' | 'stations'): string =>
+  of === 'stations' ? stations : `${plan} ${stations}`;

@@ -6,8 +6,9 @@ import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useEffect, useId, useRef, useState, useTransition, type FormEvent, type ReactNode } from 'react';
 import { Field } from '@/app/_ui/field';
-import { newId } from '@/app/_ui/new-id';
+import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
+import { useActId } from '@/app/_ui/use-act-id';
 import type { Failure } from '@/src/data/errors';
 import type { SessionForm as FormDto } from '@/src/data/session/form';
 import type { AnyBlock, Typed, Wrong } from '@/src/exchange/catalogue/block';
@@ -41,7 +42,7 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
   const [refusal, setRefusal] = useState<string | null>(null);
   const [isPending, startTransition] = useTransition();
   const element = useRef<HTMLFormElement>(null);
-  const act = useRef<string | null>(null);
+  const act = useActId();
   const router = useRouter();
   const modeField = useId();
   const set = (changed: Partial<SessionTyped>) => setTyped((before) => ({ ...before, ...changed }));
@@ -58,13 +59,14 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
     const read = readSession(typed);
     setWrong(read.ok ? [] : read.wrong);
     if (!read.ok) return;
-    act.current ??= newId();
     const body: Body =
-      form.rev === null ? { id: act.current, typed } : { actId: act.current, rev: form.rev, typed };
+      form.rev === null
+        ? { id: act.idOf({ typed }), typed }
+        : { actId: act.idOf({ typed }), rev: form.rev, typed };
     startTransition(async () => {
-      const answer = await send(body);
+      const answer = await reach(() => send(body));
       if (answer.ok) {
-        act.current = null;
+        act.forget();
         showToast({ message: `${answer.code} is kept.` });
         router.push(`/sessions/${encodeURIComponent(answer.code)}/${next}` as Route);
         router.refresh();
@@ -151,7 +153,7 @@ export function SessionForm({ form, label, leave, send, next }: Props) {
       <footer className="sform-foot">
         <span className="help">
           {form.rev === null
-            ? 'Nobody is told yet: a draft is seen by planners only.'
+            ? 'Nobody is told yet: stations see that it is planned, and its scans once it is offered.'
             : 'The stations are told by the next offer.'}
         </span>
         <Link href={leave} className="btn ml-auto">

@@ -1,7 +1,10 @@
 import type { Metadata } from 'next';
 import { forbidden, notFound } from 'next/navigation';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { readCoverage } from '@/src/data/coverage/read';
+import { knownStamp } from '@/src/data/session/stamp';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { SessionFrame } from '../_head/session-frame';
 import { CoverageView } from './_coverage/coverage-view';
@@ -18,6 +21,7 @@ export default async function CoveragePage({ params, searchParams }: Props) {
   if (!viewer) return <ToSignIn />;
   const { sessionId } = await params;
   const asked = await searchParams;
+  const known = await knownStamp(viewer, sessionId, 'all');
   const answer = await readCoverage(viewer, sessionId, {
     source: oneOf(asked.source),
     band: oneOf(asked.band),
@@ -30,6 +34,7 @@ export default async function CoveragePage({ params, searchParams }: Props) {
   const { sheet } = answer;
   return (
     <SessionFrame viewer={viewer} session={sheet.session} nowMs={sheet.nowMs}>
+      <RefreshOn address={liveKeys.stamp(sheet.session.id)} known={known} />
       <CoverageView sheet={sheet} />
     </SessionFrame>
   );

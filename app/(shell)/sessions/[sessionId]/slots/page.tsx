@@ -3,7 +3,7 @@ import { forbidden, notFound } from 'next/navigation';
 import { staveOrder } from '@/app/_ui/stave-order';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { readTimeline } from '@/src/data/plan/read';
-import { readStamp } from '@/src/data/session/stamp';
+import { knownStamp } from '@/src/data/session/stamp';
 import { networkOf } from '@/src/data/station/read';
 import { readSlots } from '@/src/data/slot/read';
 import { checkPlan } from '@/src/schedule/checks';
@@ -26,7 +26,7 @@ export default async function SlotsPage({ params, searchParams }: Props) {
   if (!viewer) return <ToSignIn />;
   const { sessionId } = await params;
   // first, so that what changes while the page is made is not missed
-  const stamp = await readStamp(viewer, sessionId);
+  const stamp = await knownStamp(viewer, sessionId, 'all');
   const answer = await readSlots(viewer, sessionId);
   if (!answer.ok) {
     if (answer.code === 'forbidden') forbidden();
@@ -48,7 +48,7 @@ export default async function SlotsPage({ params, searchParams }: Props) {
       <Slots
         board={board}
         codes={codes}
-        stamp={stamp.ok ? `${stamp.plan} ${stamp.stations}` : undefined}
+        stamp={stamp}
         toFix={toFix}
         station={typeof station === 'string' ? station : null}
       />

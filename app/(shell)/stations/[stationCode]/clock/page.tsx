@@ -1,7 +1,10 @@
 import type { Metadata } from 'next';
 import { forbidden, notFound } from 'next/navigation';
+import { liveKeys } from '@/app/_ui/live-keys';
+import RefreshOn from '@/app/_ui/refresh-on';
 import { ToSignIn } from '@/app/_ui/to-sign-in';
 import { listClocks, readStationClock } from '@/src/data/clock/read';
+import { readClockStamp } from '@/src/data/clock/stamp';
 import { currentViewer } from '@/src/viewer/current-viewer';
 import { PageFrame } from '../../../_masthead/page-frame';
 import { ClockLog } from './_clock/clock-log';
@@ -12,7 +15,9 @@ export const metadata: Metadata = { title: 'Clock log' };
 export default async function ClockPage({ params }: { params: Promise<{ stationCode: string }> }) {
   const viewer = await currentViewer();
   if (!viewer) return <ToSignIn />;
-  const answer = await readStationClock(viewer, (await params).stationCode);
+  const { stationCode } = await params;
+  const stamp = await readClockStamp(viewer, stationCode);
+  const answer = await readStationClock(viewer, stationCode);
   if (!answer.ok) {
     if (answer.code === 'forbidden') forbidden();
     notFound();
@@ -29,6 +34,7 @@ export default async function ClockPage({ params }: { params: Promise<{ stationC
       title={`Clock log of ${name}`}
       sub="station clock minus UTC, via GPS, positive = early"
     >
+      <RefreshOn address={liveKeys.clockStamp(code)} known={stamp.ok ? stamp.stamp : undefined} />
       <ClockLog key={code} clock={clock} codes={codes} />
     </PageFrame>
   );

@@ -1,9 +1,8 @@
 'use client';
 
-import { useId, useRef, useState } from 'react';
-import { liveKeys } from '@/app/_ui/live-keys';
-import { newId } from '@/app/_ui/new-id';
-import RefreshOn from '@/app/_ui/refresh-on';
+import { useId, useState } from 'react';
+import { reach } from '@/app/_ui/reach';
+import { useActId } from '@/app/_ui/use-act-id';
 import type { CommentDto } from '@/src/data/comment/read';
 import type { SessionHead } from '@/src/data/session/dto';
 import { fullTimeText } from '@/src/schedule/words';
@@ -16,7 +15,6 @@ type Props = { session: SessionHead; comments: readonly CommentDto[]; canWrite: 
 export function Comments({ session, comments, canWrite }: Props) {
   return (
     <div className="comments">
-      <RefreshOn address={liveKeys.stationsStamp(session.id)} />
       <section aria-labelledby="comments-title" className="comments-said">
         <h1 id="comments-title">Comments</h1>
         {comments.length === 0 ? (
@@ -51,25 +49,18 @@ function Write({ sessionId }: { sessionId: string }) {
   const [text, setText] = useState('');
   const [error, setError] = useState<string | null>(null);
   const [isSending, setIsSending] = useState(false);
-  const id = useRef<string | null>(null);
+  const act = useActId();
   const field = useId();
   const send = async () => {
     if (isSending) return;
     if (text.trim() === '') return setError('The comment is empty. Write it first.');
-    id.current ??= newId();
     setIsSending(true);
-    try {
-      const answer = await say(sessionId, { id: id.current, text });
-      if (!answer.ok) return setError(answer.fields?.text?.join(' ') ?? answer.message);
-      id.current = null;
-      setText('');
-      setError(null);
-    } catch (failure) {
-      if (!(failure instanceof TypeError)) throw failure;
-      setError('There is no line. What you wrote is kept: send it again when the line is back.');
-    } finally {
-      setIsSending(false);
-    }
+    const answer = await reach(() => say(sessionId, { id: act.idOf({ text }), text }));
+    setIsSending(false);
+    if (!answer.ok) return setError(answer.fields?.text?.join(' ') ?? answer.message);
+    act.forget();
+    setText('');
+    setError(null);
   };
   return (
     <form

@@ -9,8 +9,6 @@ import { longTimeText, numberText } from '@/app/_ui/format';
 import { saveFile } from '@/app/_ui/save-file';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { CoverageSheet, CoverageVersion, Observed } from '@/src/data/coverage/dto';
-import { liveKeys } from '@/app/_ui/live-keys';
-import RefreshOn from '@/app/_ui/refresh-on';
 import { uvCsv } from './csv';
 import { ElevationChart } from './elevation-chart';
 import { svgText } from '@/app/_ui/figure-file';
@@ -25,7 +23,6 @@ export function CoverageView({ sheet }: { sheet: CoverageSheet }) {
   const { session, shown, refused } = sheet;
   return (
     <>
-      <RefreshOn address={liveKeys.stamp(session.id)} />
       {refused !== null && (
         <p role="status" className="error-box">
           {refused}

@@ -1,8 +1,6 @@
 'use client';
 
 import { useEffect, useMemo, useState } from 'react';
-import { liveKeys } from '@/app/_ui/live-keys';
-import RefreshOn from '@/app/_ui/refresh-on';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
@@ -41,7 +39,6 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
 
   return (
     <>
-      <RefreshOn address={liveKeys.stamp(timeline.session.id)} />
       <div className="min-h-bar flex flex-wrap items-center gap-x-3.5 border-b border-rule text-table">
         <div className="no-print flex h-bar w-tray items-center justify-between px-3.5">
           <h2 className="text-lead">Filter</h2>

@@ -3,6 +3,7 @@
 import { useState } from 'react';
 import { Chip } from '@/app/_ui/chip';
 import { Dialog } from '@/app/_ui/dialog';
+import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
 import type { SessionHead } from '@/src/data/session/dto';
 import { setState } from '../actions';
@@ -31,7 +32,8 @@ export function StateBox({ session }: { session: SessionHead }) {
   const go = async (state: Ask | 'open') => {
     if (isSending) return;
     setIsSending(true);
-    const answer = await setState(session.id, state).finally(() => setIsSending(false));
+    const answer = await reach(() => setState(session.id, state));
+    setIsSending(false);
     setAsked(null);
     setTrouble(answer.ok ? null : answer.message);
     if (answer.ok) showToast({ message: `${session.code} is ${state === 'open' ? 'open again' : state}.` });

@@ -5,8 +5,6 @@ import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { saveFile } from '@/app/_ui/save-file';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { SkySheet } from '@/src/data/sky/dto';
-import { liveKeys } from '@/app/_ui/live-keys';
-import RefreshOn from '@/app/_ui/refresh-on';
 import { Axis } from './axis';
 import { BestStart } from './best-start';
 import { windowsCsv } from './csv';
@@ -67,7 +65,6 @@ export function Sky({ sheet: read }: { sheet: SkySheet }) {
 
   return (
     <>
-      <RefreshOn address={liveKeys.stationsStamp(session.id)} />
       <div className="min-h-bar flex flex-wrap items-center border-b border-rule text-table">
         <ToolBar
           stations={stations}

@@ -7,6 +7,7 @@ import { Segments } from '@/app/_ui/segments';
 import { stationTime } from '@/app/_ui/station-time';
 import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
+import { useActId } from '@/app/_ui/use-act-id';
 import { useSending } from '@/app/_ui/use-sending';
 import type { SlotDto } from '@/src/data/slot/dto';
 import { hoursWithout, within, type Hours } from '@/src/schedule/slots';
@@ -14,7 +15,6 @@ import { fullTimeText, listText } from '@/src/schedule/words';
 import { readTimeEntry } from '@/src/units/entry';
 import { reply } from '../actions';
 import { Cost } from './cost';
-import { useActId } from './use-act-id';
 
 const HALF_DAY_MS = 12 * 3_600_000;
 const NOTHING_SAID = 'Say why, so that the scheduler can plan around it.';
@@ -42,7 +42,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
   const [why, setWhy] = useState<(typeof REASONS)[number] | null>(null);
   const [words, setWords] = useState('');
   const { fields, trouble, isSending, say, send: sendOff } = useSending();
-  const actIdOf = useActId();
+  const act = useActId();
 
   const { said } = entered;
   const read = readHours(slot, entered);
@@ -70,8 +70,9 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
         read.from.ok &&
         read.until.ok && { without: [read.from.value, read.until.value] }),
     };
-    const answer = await sendOff(() => reply(sessionId, code, { ...body, actId: actIdOf(body) }));
+    const answer = await sendOff(() => reply(sessionId, code, { ...body, actId: act.idOf(body) }));
     if (!answer?.ok) return;
+    act.forget();
     change({ said: null, from: '', until: '' });
     setWhy(null);
     setWords('');

@@ -5,11 +5,11 @@ import { Dialog } from '@/app/_ui/dialog';
 import { Field } from '@/app/_ui/field';
 import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
+import { useActId } from '@/app/_ui/use-act-id';
 import { useSending } from '@/app/_ui/use-sending';
 import type { SlotBoard } from '@/src/data/slot/dto';
 import { readTimeEntry } from '@/src/units/entry';
 import { offer } from '../actions';
-import { useActId } from './use-act-id';
 
 type Props = { board: SlotBoard; kind: 'offer' | 'publish' | null; toFix: number; onClose: () => void };
 
@@ -20,7 +20,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
   const [answerBy, setAnswerBy] = useState('');
   const [isTicked, setIsTicked] = useState(false);
   const { fields, trouble, isSending, say, send: sendOff } = useSending();
-  const idOf = useActId();
+  const act = useActId();
   const isHeld = toFix > 0 && !isTicked;
 
   const send = async () => {
@@ -29,8 +29,9 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
       answerBy.trim() === '' ? null : readTimeEntry(answerBy, Math.min(nowMs + 43_200_000, session.startMs));
     if (by && !by.ok) return say({ answerByMs: by.message });
     const body = { kind, note, answerByMs: by?.value ?? null };
-    const answer = await sendOff(() => offer(session.id, { ...body, id: idOf(body) }));
+    const answer = await sendOff(() => offer(session.id, { ...body, id: act.idOf(body) }));
     if (!answer?.ok) return;
+    act.forget();
     const word = kind === 'publish' ? 'Version' : 'Offer';
     const told = `${answer.sent} ${answer.sent === 1 ? 'message' : 'messages'} sent`;
     const left = answer.failed.length > 0 ? `, ${answer.failed.length} not sent` : '';

@@ -1,6 +1,7 @@
 'use client';
 
 import { useState } from 'react';
+import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
 import type { SlotBoard } from '@/src/data/slot/dto';
 import { resend } from '../actions';
@@ -11,15 +12,9 @@ export function Unsent({ sessionId, unsent }: { sessionId: string; unsent: SlotB
   const again = async () => {
     if (isSending) return;
     setIsSending(true);
-    try {
-      const answer = await resend(sessionId);
-      showToast({ message: answer.ok ? `${answer.sent} of ${unsent.length} sent now.` : answer.message });
-    } catch (error) {
-      if (!(error instanceof TypeError)) throw error;
-      showToast({ message: 'There is no line. Send again when it is back.' });
-    } finally {
-      setIsSending(false);
-    }
+    const answer = await reach(() => resend(sessionId));
+    setIsSending(false);
+    showToast({ message: answer.ok ? `${answer.sent} of ${unsent.length} sent now.` : answer.message });
   };
   const [first] = unsent;
   return (

@@ -15,10 +15,11 @@ import { ToolBar } from './tool-bar';
 import { Tray } from './tray';
 import { useSky } from './use-sky';
 
-type Props = { timeline: TimelineDto; chosenScanId: string | null };
+/** known: the stamp of the stations' word that the timeline was read after */
+type Props = { timeline: TimelineDto; known: string | undefined; chosenScanId: string | null };
 
 /** The sheet of a session: tool bar, tray, staves, notes, inspector. */
-export function Timeline({ timeline, chosenScanId }: Props) {
+export function Timeline({ timeline, known, chosenScanId }: Props) {
   const [store] = useState(() => createTimelineStore(timeline, chosenScanId));
   const [sender] = useState(() => createSender(store));
   const [acts] = useState(() => ({
@@ -58,7 +59,7 @@ export function Timeline({ timeline, chosenScanId }: Props) {
       <ActsProvider value={acts}>
         <WithDerived>
           <Frame />
-          <LiveWhenReady sender={sender} />
+          <LiveWhenReady sender={sender} known={known} />
         </WithDerived>
       </ActsProvider>
     </TimelineProvider>
@@ -71,7 +72,7 @@ const RefreshOn = lazy(() => import('@/app/_ui/refresh-on'));
 const LIVE_AFTER_MS = 2000;
 
 /** Loaded when the sheet has long been drawn: the first catch-up is made without it. */
-function LiveWhenReady({ sender }: { sender: Sender }) {
+function LiveWhenReady({ sender, known }: { sender: Sender; known: string | undefined }) {
   const sessionId = useTimeline((state) => state.session.id);
   const [isDue, setIsDue] = useState(false);
   useEffect(() => {
@@ -82,7 +83,7 @@ function LiveWhenReady({ sender }: { sender: Sender }) {
   return (
     <Suspense>
       <Live sessionId={sessionId} sender={sender} />
-      <RefreshOn address={liveKeys.stationsStamp(sessionId)} />
+      <RefreshOn address={liveKeys.stationsStamp(sessionId)} known={known} />
     </Suspense>
   );
 }

@@ -1,12 +1,12 @@
 'use client';
 
-import { useId, useRef, useState } from 'react';
+import { useId, useState } from 'react';
 import { Dialog } from '@/app/_ui/dialog';
 import { Field } from '@/app/_ui/field';
-import { newId } from '@/app/_ui/new-id';
 import { serverNowMs } from '@/app/_ui/server-clock';
 import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
+import { useActId } from '@/app/_ui/use-act-id';
 import { useSending } from '@/app/_ui/use-sending';
 import type { ChangeDto, StationClockDto } from '@/src/data/clock/dto';
 import { readTimeEntry } from '@/src/units/entry';
@@ -31,16 +31,16 @@ export function ChangeForm({
   const [time, setTime] = useState('');
   const [note, setNote] = useState('');
   const { fields, trouble, isSending, say, send: sendOff } = useSending();
-  const id = useRef<string | null>(null);
+  const act = useActId();
 
   const send = async () => {
     const at = readTimeEntry(time, serverNowMs());
     if (!at.ok) return say({ atMs: at.message });
-    id.current ??= newId();
-    const body = { id: id.current, kind, atMs: at.value, note };
+    const words = { kind, atMs: at.value, note };
+    const body = { ...words, id: act.idOf(words) };
     const answer = await sendOff(() => change(code, body));
     if (!answer?.ok) return;
-    id.current = null;
+    act.forget();
     setTime('');
     setNote('');
     showToast({ message: `Stored: ${CHANGE_WORDS[kind]} at ${code}. The fit starts anew there.` });

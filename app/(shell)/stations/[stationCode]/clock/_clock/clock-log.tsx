@@ -3,8 +3,6 @@
 import type { Route } from 'next';
 import Link from 'next/link';
 import { useRef, useState } from 'react';
-import { liveKeys } from '@/app/_ui/live-keys';
-import RefreshOn from '@/app/_ui/refresh-on';
 import { svgText } from '@/app/_ui/figure-file';
 import { saveFile } from '@/app/_ui/save-file';
 import { Segments } from '@/app/_ui/segments';
@@ -37,7 +35,6 @@ export function ClockLog({ clock, codes }: { clock: StationClockDto; codes: read
   const shown = readings.filter(({ atMs }) => atMs >= fromMs);
   return (
     <>
-      <RefreshOn address={liveKeys.clockStamp(station.code)} />
       <div className="clk-bar">
         {codes.length > 1 && (
           <nav aria-label="Stations" className="seg">

@@ -1,13 +1,13 @@
 'use client';
 
-import { useId, useRef, useState } from 'react';
+import { useId, useState } from 'react';
 import { Field } from '@/app/_ui/field';
 import { dayText, minuteText, numberText } from '@/app/_ui/format';
-import { newId } from '@/app/_ui/new-id';
 import { Segments } from '@/app/_ui/segments';
 import { serverNowMs } from '@/app/_ui/server-clock';
 import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
+import { useActId } from '@/app/_ui/use-act-id';
 import { useSending } from '@/app/_ui/use-sending';
 import { predictClock, segmentAt } from '@/src/clock/fit';
 import { offsetFromWords, offsetWords, readSize, type SizeUnit, type Tick } from '@/src/clock/reading';
@@ -52,7 +52,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
   const [draft, setDraft] = useState<Draft>(EMPTY);
   const { fields, trouble, isSending, say, send: sendOff } = useSending();
   const [slip, setSlip] = useState<Slip | null>(null);
-  const actId = useRef<string | null>(null);
+  const act = useActId();
   const unitId = useId();
   const set = (changed: Partial<Draft>) => {
     setDraft((before) => ({ ...before, ...changed }));
@@ -61,6 +61,8 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
   };
 
   const size = readSize(draft.size, draft.unit);
+  const typedTime = draft.time === null ? null : readTimeEntry(draft.time, clock.nowMs);
+  const readAtMs = typedTime?.ok ? typedTime.value : clock.nowMs;
   const offsetSeconds = draft.tick !== null && size.ok ? offsetFromWords(draft.tick, size.seconds) : null;
 
   const onSize = (text: string) => {
@@ -86,9 +88,8 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
     if (held.secondCheck === 'off' && !isWhole) wrong.secondOff = 'Type whole seconds, for example 1.';
     say(wrong);
     if (Object.keys(wrong).length > 0 || !time.ok) return;
-    actId.current ??= newId();
     const body = {
-      actId: actId.current,
+      actId: act.idOf(held),
       pulse: held.pulse,
       atMs: time.value,
       tick: held.tick,
@@ -101,7 +102,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
     };
     const answer = await sendOff(() => report(code, body));
     if (answer?.ok) {
-      actId.current = null;
+      act.forget();
       setDraft({ ...EMPTY, pulse: held.pulse, unit: held.unit });
       setSlip(null);
       showToast({ message: `Stored: ${code} clock is ${offsetWords(answer.offsetSeconds)}.` });
@@ -244,7 +245,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
         onChange={(event) => set({ note: event.target.value })}
       />
       {offsetSeconds !== null && draft.pulse === 'formatter' && (
-        <Expected clock={clock} offsetSeconds={offsetSeconds} />
+        <Expected clock={clock} offsetSeconds={offsetSeconds} atMs={readAtMs} />
       )}
       {slip && (
         <Question
@@ -304,10 +305,12 @@ function Question({
 }
 
 /** Only after the tick and the size are given: the person is not led. */
-function Expected({ clock, offsetSeconds }: { clock: StationClockDto; offsetSeconds: number }) {
-  const { fit, nowMs, readings } = clock;
-  const before = readings.filter(({ state }) => state === 'used').slice(0, 2);
-  const at = new Date(nowMs);
+type ExpectedProps = { clock: StationClockDto; offsetSeconds: number; /** when it was read */ atMs: number };
+
+function Expected({ clock, offsetSeconds, atMs }: ExpectedProps) {
+  const { fit, readings } = clock;
+  const before = readings.filter((one) => one.state === 'used' && one.atMs < atMs).slice(0, 2);
+  const at = new Date(atMs);
   const expected = fit && predictClock(fit, at);
   const scatter = (fit && segmentAt(fit, at)?.scatterSeconds) ?? 0;
   const allowed = expected && allowedSeconds(expected, scatter);

@@ -106,8 +106,9 @@ async function post(sessionId: string, station: string, body: object): Promise<S
     });
     return (await response.json()) as SayAnswer;
   } catch (error) {
-    if (!(error instanceof TypeError)) throw error;
+    if (!(error instanceof TypeError || error instanceof SyntaxError)) throw error;
     const at = new Date(serverNowMs()).toISOString().slice(11, 19);
-    return { ok: false, message: `There was no line at ${at}. Nothing was lost: say it again.` };
+    const why = error instanceof TypeError ? 'There was no line' : 'The server gave no answer';
+    return { ok: false, message: `${why} at ${at}. Nothing was lost: say it again.` };
   }
 }
