@@ -1,4 +1,4 @@
-import { prepareSite, trackElevationDeg, tracksOf } from '../sky/track';
+import { azElBatch } from '../sky/az-el-batch';
 import type { Interval, SkyStation } from '../sky/types';
 import { overlap, windowsFor } from '../sky/windows';
 import type { PlanSettings, PlanSource, PlanStation } from './context';
@@ -39,27 +39,27 @@ export function skyTable(
   const startMs = span.start.getTime();
   const steps = Math.ceil((span.end.getTime() - startMs) / (STEP_SECONDS * 1000)) + 1;
   const places = sources.map((source) => source.position);
-  const tracks = tracksOf(places, span);
-  const sites = stations.map((station) => prepareSite(station.site));
   const windows = windowsFor(
     places,
     stations.map((station) => skyStation(station, settings)),
     span,
   );
-  const elevationsOf = (track: (typeof tracks)[number]) =>
+  const { elevationDeg } = azElBatch(
+    places,
+    stations.map((station) => station.site),
+    Array.from({ length: steps }, (_, step) => startMs + step * STEP_SECONDS * 1000),
+  );
+  const elevationsOf = (source: number) =>
     stations.map((station, index): [StationCode, number[]] => {
-      const site = sites[index] ?? station.site;
-      const at = (step: number) => trackElevationDeg(track, site, startMs + step * STEP_SECONDS * 1000);
-      return [station.code, Array.from({ length: steps }, (_, step) => Math.round(at(step) * 100))];
+      const from = (source * stations.length + index) * steps;
+      const own = elevationDeg.subarray(from, from + steps);
+      return [station.code, Array.from(own, (deg) => Math.round(deg * 100))];
     });
   return {
     startMs,
     stepSeconds: STEP_SECONDS,
     elevations: Object.fromEntries(
-      sources.map((source, index) => {
-        const track = tracks[index];
-        return [source.id, track ? Object.fromEntries(elevationsOf(track)) : {}];
-      }),
+      sources.map((source, index) => [source.id, Object.fromEntries(elevationsOf(index))]),
     ),
     windows: Object.fromEntries(
       sources.map((source, index) => [
