@@ -1,7 +1,9 @@
 import { sql } from 'drizzle-orm';
 import { check, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 
-/** Axis 1 turns about the fixed axis (azimuth of an az–el mount), axis 2 rides on it (elevation). */
+/**
+ * Axis 1 turns about a fixed line (azimuth, hour angle, X), axis 2 rides on it (elevation, declination, Y).
+ */
 export const stations = sqliteTable(
   'stations',
   {
@@ -25,7 +27,7 @@ export const stations = sqliteTable(
     maxElevationDeg: real('max_elevation_deg').notNull(),
     /** [[azimuthDeg, elevationDeg], …] by azimuth */
     horizon: text('horizon').notNull().default('[]'),
-    mountKind: text('mount_kind', { enum: ['az-el'] }).notNull(),
+    mountKind: text('mount_kind', { enum: ['az-el', 'ha-dec', 'xy-ns', 'xy-ew'] }).notNull(),
     axis1MinDeg: real('axis1_min_deg').notNull(),
     axis1MaxDeg: real('axis1_max_deg').notNull(),
     axis1RateDegPerS: real('axis1_rate_deg_per_s').notNull(),
@@ -82,7 +84,7 @@ export const stations = sqliteTable(
       sql`${t.minElevationDeg} >= 0 AND ${t.minElevationDeg} < ${t.maxElevationDeg} AND ${t.maxElevationDeg} <= 90`,
     ),
     check('stations_horizon', sql`json_valid(${t.horizon})`),
-    check('stations_mount', sql`${t.mountKind} IN ('az-el')`),
+    check('stations_mount', sql`${t.mountKind} IN ('az-el', 'ha-dec', 'xy-ns', 'xy-ew')`),
     check('stations_axis1', sql`${t.axis1MinDeg} < ${t.axis1MaxDeg}`),
     check('stations_axis2', sql`${t.axis2MinDeg} < ${t.axis2MaxDeg}`),
     check(

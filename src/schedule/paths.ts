@@ -1,5 +1,5 @@
 import { firstPointing, slewBetween, startPointing } from '../sky/slew';
-import { scanPath } from '../sky/cable';
+import { firstAxis, secondAxis } from '../sky/axes';
 import { prepareSite, trackAzEl } from '../sky/track';
 import type { AzEl, Interval, Pointing } from '../sky/types';
 import type { PlanContext, PlanSource, PlanStation } from './context';
@@ -12,7 +12,7 @@ import {
   type ScanStation,
   type StationCode,
 } from './plan';
-import { sightOf, trackNear, type Sight } from './sight';
+import { axisPath, sightOf, trackNear, type Sight } from './sight';
 
 /** One scan at one station, and the way there from the scan before. */
 export type PathLeg = {
@@ -223,16 +223,16 @@ function impossible(
   sight: Sight,
   previous: PathLeg | null,
   gapSeconds: number | null,
-  why: { impossible: string; limit: 'azimuth' | 'elevation' },
+  why: { impossible: string; limit: 'first' | 'second' },
 ): Way {
-  const start = startPointing(station.mount, sight.startAzEl);
+  const start = startPointing(station, sight.startAzEl);
   const motorDeg =
     'impossible' in start ? (previous?.motorStopDeg ?? middleOf(station)) : start.motorAzimuthDeg;
   return {
     ...still({ ...sight.startAzEl, motorAzimuthDeg: motorDeg }, sight),
     gapSeconds,
     impossible: why.impossible,
-    isElevationOnly: why.limit === 'elevation',
+    isElevationOnly: why.limit === 'second' && station.mount.kind === 'az-el',
   };
 }
 
@@ -249,18 +249,18 @@ function staysOn(
   if (on.startMs <= previous.stopMs) return on.startMs === previous.stopMs;
   const frame = prepareSite(station.site);
   const track = trackNear(source, previous.stopMs);
-  const gap = { start: new Date(previous.stopMs), end: new Date(on.startMs) };
-  const path = scanPath((atMs) => trackAzEl(track, frame, atMs), gap);
-  const { minDeg, maxDeg } = station.mount.elevation;
+  const path = axisPath(station, (atMs) => trackAzEl(track, frame, atMs), previous.stopMs, on.startMs);
+  const { minDeg, maxDeg } = secondAxis(station.mount);
   return (
     Math.abs(from.motorAzimuthDeg + path.endTurnDeg - reached.motorAzimuthDeg) < SAME_PLACE_DEG &&
-    path.leavesElevationsAt(minDeg, maxDeg) === null &&
+    path.leavesSecondAt(minDeg, maxDeg) === null &&
     path.leavesRangeAtMs(station.mount, from.motorAzimuthDeg) === null
   );
 }
 
 function middleOf(station: PlanStation): number {
-  return (station.mount.azimuth.minDeg + station.mount.azimuth.maxDeg) / 2;
+  const { minDeg, maxDeg } = firstAxis(station.mount);
+  return (minDeg + maxDeg) / 2;
 }
 
 type Cached = {

@@ -1,10 +1,11 @@
+import { axisAngles } from '../sky/axes';
 import { scanPath, type ScanPath } from '../sky/cable';
 import { horizonElevationDeg, prepareHorizon, type Horizon } from '../sky/horizon';
 import { prepareSite, trackAzEl, trackOf, type Track } from '../sky/track';
 import type { AzEl, Geodetic, Interval } from '../sky/types';
 import { trackWindows } from '../sky/windows';
 import type { PlanContext, PlanSource, PlanStation } from './context';
-import { skyStation } from './sky-table';
+import { elevationsOf, skyStation } from './sky-table';
 
 /** How near a station comes to its limits while it follows a source. */
 export type Sight = {
@@ -48,7 +49,7 @@ export function sightOf(
 ): Sight {
   const at = directionAt(station, source, startMs);
   const limits = limitsOf(station, settings);
-  const path = scanPath(at, { start: new Date(startMs), end: new Date(stopMs) });
+  const path = axisPath(station, at, startMs, stopMs);
   let worst: Sight['worst'] | null = null;
   let minElevationDeg = Infinity;
   let outFromMs: number | null = null;
@@ -60,7 +61,7 @@ export function sightOf(
     minElevationDeg = Math.min(minElevationDeg, direction.elevationDeg);
   }
   if (!worst) throw new RangeError('A view has a length');
-  return { startAzEl: path.start, stopAzEl: path.end, minElevationDeg, worst, outFromMs, path };
+  return { startAzEl: at(startMs), stopAzEl: at(stopMs), minElevationDeg, worst, outFromMs, path };
 }
 
 /**
@@ -78,14 +79,23 @@ export function upWithin(
   stopMs: number,
 ): Interval[] {
   const span = { start: new Date(startMs), end: new Date(stopMs) };
-  const own = skyStation(station, settings);
-  const { minDeg, maxDeg } = station.mount.elevation;
-  const limits = {
-    ...own,
-    minElevationDeg: Math.max(own.minElevationDeg, minDeg),
-    maxElevationDeg: Math.min(own.maxElevationDeg ?? 90, maxDeg),
-  };
-  return trackWindows(trackNear(source, startMs), source.position, limits, span);
+  return trackWindows(trackNear(source, startMs), source.position, skyStation(station, settings), span);
+}
+
+/**
+ * The way of a station's axes while it follows a direction.
+ *
+ * @param at  azimuth and elevation at an instant
+ * @throws RangeError if the span is empty (programmer error)
+ */
+export function axisPath(
+  { mount, site }: PlanStation,
+  at: (atMs: number) => AzEl,
+  startMs: number,
+  stopMs: number,
+): ScanPath {
+  const angles = (atMs: number) => axisAngles(mount.kind, site.latitudeDeg, at(atMs));
+  return scanPath(angles, { start: new Date(startMs), end: new Date(stopMs) });
 }
 
 /**
@@ -121,10 +131,10 @@ type Limits = { lowestDeg: number; highestDeg: number; horizon: Horizon | null }
 function limitsOf(station: PlanStation, settings: PlanContext['settings']): Limits {
   const known = horizons.get(station) ?? { horizon: prepareHorizon(station.horizon) };
   horizons.set(station, known);
-  const { minDeg, maxDeg } = station.mount.elevation;
+  const { minElevationDeg, maxElevationDeg } = elevationsOf(station);
   return {
-    lowestDeg: Math.max(station.minElevationDeg, settings.minElevationDeg, minDeg),
-    highestDeg: Math.min(station.maxElevationDeg, maxDeg),
+    lowestDeg: Math.max(minElevationDeg, settings.minElevationDeg),
+    highestDeg: maxElevationDeg,
     horizon: known.horizon,
   };
 }

@@ -85,12 +85,23 @@ export function skyStation(
   station: PlanStation,
   settings: Pick<PlanSettings, 'minElevationDeg'>,
 ): SkyStation {
-  const { minDeg, maxDeg } = station.mount.elevation;
+  const { minElevationDeg, maxElevationDeg } = elevationsOf(station);
   return {
     site: station.site,
-    minElevationDeg: Math.max(station.minElevationDeg, settings.minElevationDeg, minDeg),
-    maxElevationDeg: Math.min(station.maxElevationDeg, maxDeg),
+    minElevationDeg: Math.max(minElevationDeg, settings.minElevationDeg),
+    maxElevationDeg,
     horizon: station.horizon,
+    mount: station.mount,
+  };
+}
+
+/** What a station's own limits and an az–el mount leave of the elevations. */
+export function elevationsOf({ minElevationDeg, maxElevationDeg, mount }: PlanStation) {
+  if (mount.kind !== 'az-el') return { minElevationDeg, maxElevationDeg };
+  const { minDeg, maxDeg } = mount.elevation;
+  return {
+    minElevationDeg: Math.max(minElevationDeg, minDeg),
+    maxElevationDeg: Math.min(maxElevationDeg, maxDeg),
   };
 }
 

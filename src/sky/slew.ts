@@ -1,4 +1,5 @@
 import { normalise180 } from '../units/angle';
+import { AXIS_WORDS, axisAngles, firstAxis, secondAxis, type AxisAngles } from './axes';
 import { utcParts } from '../units/time';
 import type { Interval } from '../units/time';
 import { trackAzEl, trackOf } from './track';
@@ -6,10 +7,10 @@ import type { Track } from './track';
 import { scanPath, turnsFor } from './cable';
 import type { ScanPath } from './cable';
 import { siteFrame } from './site';
-import type { AzEl, Axis, Geodetic, Mount, Pointing, SkyPosition } from './types';
+import type { Axis, AzEl, AzElMount, Geodetic, Mount, Pointing, SkyPosition } from './types';
 
-/** Why a dish cannot do it; the sentence goes on after the station's name. */
-export type Impossible = { impossible: string; limit: 'azimuth' | 'elevation'; atMs: number | null };
+/** Why a dish cannot do it, and which of its axes; the sentence goes on after the station's name. */
+export type Impossible = { impossible: string; limit: 'first' | 'second'; atMs: number | null };
 
 export type SlewStation = { site: Geodetic; mount: Mount };
 
@@ -39,7 +40,7 @@ export function axisSeconds(distanceDeg: number, axis: Axis): number {
 }
 
 /**
- * Quickest legal motion from one pointing to a direction.
+ * Quickest legal motion of an az–el mount from one pointing to a direction.
  *
  * @param mount  limits inclusive; settleSeconds is added when anything moves
  * @param from   where the dish points, its cable's turn in motorAzimuthDeg
@@ -52,14 +53,20 @@ export function axisSeconds(distanceDeg: number, axis: Axis): number {
  * Source  both axes start together, each as axisSeconds; azimuth moves monotonically, so no limit is passed
  */
 export function slewMotion(
-  mount: Mount,
+  mount: AzElMount,
   from: Pointing,
   to: AzEl,
 ): { seconds: number; motorAzimuthDeg: number } | Impossible {
-  const blocked = elevationOutside(mount, to.elevationDeg);
+  const [held, wanted] = [from, to].map((direction) => axisAngles(mount.kind, 0, direction));
+  if (!held || !wanted) throw new RangeError('A motion has two ends');
+  const blocked = secondOutside(mount, wanted.secondDeg);
   if (blocked) return blocked;
-  const turns = turnsFor(mount, to.azimuthDeg);
-  return quickest(mount, from, to.elevationDeg, turns) ?? deadZone(to.azimuthDeg);
+  const turns = turnsFor(mount, wanted.firstDeg);
+  const start = { motorDeg: from.motorAzimuthDeg, secondDeg: held.secondDeg };
+  const motion = quickest(mount, start, wanted.secondDeg, turns);
+  return motion
+    ? { seconds: motion.seconds, motorAzimuthDeg: motion.motorDeg }
+    : deadZone(mount, wanted.firstDeg);
 }
 
 /**
@@ -80,14 +87,17 @@ export function slewBetween(
   from: Pointing,
   to: SlewTarget,
 ): { seconds: number; pointing: Pointing } | Impossible {
-  const path = pathOf(station, to);
-  const blocked = elevationAlong(station.mount, path);
+  const { mount } = station;
+  const { path, start } = wayOf(station, to);
+  const blocked = secondAlong(mount, path);
   if (blocked) return blocked;
-  const turns = turnsFor(station.mount, path.start.azimuthDeg);
-  const whole = turns.filter((turn) => path.leavesRangeAtMs(station.mount, turn) === null);
-  const motion = quickest(station.mount, from, path.start.elevationDeg, whole);
-  if (!motion) return noTurn(station.mount, path, turns);
-  return { seconds: motion.seconds, pointing: { ...path.start, motorAzimuthDeg: motion.motorAzimuthDeg } };
+  const turns = turnsFor(mount, path.start.firstDeg);
+  const whole = turns.filter((turn) => path.leavesRangeAtMs(mount, turn) === null);
+  const { secondDeg } = axisAngles(mount.kind, station.site.latitudeDeg, from);
+  const held = { motorDeg: from.motorAzimuthDeg, secondDeg };
+  const motion = quickest(mount, held, path.start.secondDeg, whole);
+  if (!motion) return noTurn(mount, path, turns);
+  return { seconds: motion.seconds, pointing: { ...start, motorAzimuthDeg: motion.motorDeg } };
 }
 
 /**
@@ -97,8 +107,8 @@ export function slewBetween(
  * @throws RangeError if an input is not finite or the scan is empty (programmer error)
  */
 export function pointingAtEnd(station: SlewStation, start: Pointing, to: SlewTarget): Pointing {
-  const path = pathOf(station, to);
-  return { ...path.end, motorAzimuthDeg: start.motorAzimuthDeg + path.endTurnDeg };
+  const { path, end } = wayOf(station, to);
+  return { ...end, motorAzimuthDeg: start.motorAzimuthDeg + path.endTurnDeg };
 }
 
 /**
@@ -107,11 +117,12 @@ export function pointingAtEnd(station: SlewStation, start: Pointing, to: SlewTar
  * @returns the pointing, or why the mount cannot point there
  * @throws RangeError if an input is not finite (programmer error)
  */
-export function startPointing(mount: Mount, direction: AzEl): Pointing | Impossible {
-  const blocked = elevationOutside(mount, direction.elevationDeg);
+export function startPointing({ mount, site }: SlewStation, direction: AzEl): Pointing | Impossible {
+  const { firstDeg, secondDeg } = axisAngles(mount.kind, site.latitudeDeg, direction);
+  const blocked = secondOutside(mount, secondDeg);
   if (blocked) return blocked;
-  const turn = turnsFor(mount, direction.azimuthDeg)[0];
-  if (turn === undefined) return deadZone(direction.azimuthDeg);
+  const turn = turnsFor(mount, firstDeg)[0];
+  if (turn === undefined) return deadZone(mount, firstDeg);
   return { ...direction, motorAzimuthDeg: turn };
 }
 
@@ -122,67 +133,81 @@ export function startPointing(mount: Mount, direction: AzEl): Pointing | Impossi
  * @throws RangeError if an input is not finite or the scan is empty (programmer error)
  */
 export function firstPointing(station: SlewStation, to: SlewTarget): Pointing | Impossible {
-  const path = pathOf(station, to);
-  const blocked = elevationAlong(station.mount, path);
+  const { mount } = station;
+  const { path, start } = wayOf(station, to);
+  const blocked = secondAlong(mount, path);
   if (blocked) return blocked;
-  const turns = turnsFor(station.mount, path.start.azimuthDeg);
-  const turn = turns.find((candidate) => path.leavesRangeAtMs(station.mount, candidate) === null);
-  if (turn === undefined) return noTurn(station.mount, path, turns);
-  return { ...path.start, motorAzimuthDeg: turn };
+  const turns = turnsFor(mount, path.start.firstDeg);
+  const turn = turns.find((candidate) => path.leavesRangeAtMs(mount, candidate) === null);
+  if (turn === undefined) return noTurn(mount, path, turns);
+  return { ...start, motorAzimuthDeg: turn };
 }
 
-function pathOf(station: SlewStation, to: SlewTarget): ScanPath {
+function wayOf({ site, mount }: SlewStation, to: SlewTarget): { path: ScanPath; start: AzEl; end: AzEl } {
   const track = to.track ?? trackOf(to.source, to.scan);
-  const site = siteFrame(station.site);
-  return scanPath((atMs) => trackAzEl(track, site, atMs), to.scan);
+  const frame = siteFrame(site);
+  const seen = (atMs: number) => trackAzEl(track, frame, atMs);
+  const path = scanPath((atMs) => axisAngles(mount.kind, site.latitudeDeg, seen(atMs)), to.scan);
+  return { path, start: seen(to.scan.start.getTime()), end: seen(to.scan.end.getTime()) };
 }
+
+type Motion = { seconds: number; motorDeg: number };
 
 /** Turns come nearest to mid-range first, and a later one must be truly quicker. */
 function quickest(
   mount: Mount,
-  from: Pointing,
-  elevationDeg: number,
+  from: { motorDeg: number; secondDeg: number },
+  secondDeg: number,
   turns: readonly number[],
-): { seconds: number; motorAzimuthDeg: number } | null {
-  const elevationSeconds = axisSeconds(elevationDeg - from.elevationDeg, mount.elevation);
-  let best: { seconds: number; motorAzimuthDeg: number } | null = null;
+): Motion | null {
+  const secondSeconds = axisSeconds(secondDeg - from.secondDeg, secondAxis(mount));
+  let best: Motion | null = null;
   for (const turn of turns) {
-    const moving = Math.max(axisSeconds(turn - from.motorAzimuthDeg, mount.azimuth), elevationSeconds);
+    const moving = Math.max(axisSeconds(turn - from.motorDeg, firstAxis(mount)), secondSeconds);
     const seconds = moving > 0 ? moving + mount.settleSeconds : 0;
-    if (!best || seconds < best.seconds - TIE_SECONDS) best = { seconds, motorAzimuthDeg: turn };
+    if (!best || seconds < best.seconds - TIE_SECONDS) best = { seconds, motorDeg: turn };
   }
   return best;
 }
 
-function elevationOutside(mount: Mount, elevationDeg: number, atMs: number | null = null): Impossible | null {
-  const { minDeg, maxDeg } = mount.elevation;
+function secondOutside(
+  mount: Mount,
+  secondDeg: AxisAngles['secondDeg'],
+  atMs: number | null = null,
+): Impossible | null {
+  const { minDeg, maxDeg } = secondAxis(mount);
+  if (!Number.isFinite(secondDeg)) throw new RangeError(`Not an angle: ${secondDeg}`);
+  if (secondDeg >= minDeg && secondDeg <= maxDeg) return null;
+  const isLow = secondDeg < minDeg;
   const when = atMs === null ? '' : ` at ${clock(atMs)}`;
-  if (!Number.isFinite(elevationDeg)) throw new RangeError(`Not an elevation: ${elevationDeg}`);
-  if (elevationDeg < minDeg) {
-    return { impossible: `would be below the mount’s lowest ${minDeg}°${when}`, limit: 'elevation', atMs };
-  }
-  if (elevationDeg > maxDeg) {
-    return { impossible: `would be above the mount’s highest ${maxDeg}°${when}`, limit: 'elevation', atMs };
-  }
-  return null;
+  const what = mount.kind === 'az-el' ? '' : ` of ${AXIS_WORDS[mount.kind].second}`;
+  const side = isLow ? `below the mount’s lowest ${minDeg}°` : `above the mount’s highest ${maxDeg}°`;
+  return { impossible: `would be ${side}${what}${when}`.replace('-', '\u2212'), limit: 'second', atMs };
 }
 
-function elevationAlong(mount: Mount, path: ScanPath): Impossible | null {
-  const { minDeg, maxDeg } = mount.elevation;
-  const outside = path.leavesElevationsAt(minDeg, maxDeg);
-  return outside && elevationOutside(mount, outside.elevationDeg, outside.atMs);
+function secondAlong(mount: Mount, path: ScanPath): Impossible | null {
+  const { minDeg, maxDeg } = secondAxis(mount);
+  const outside = path.leavesSecondAt(minDeg, maxDeg);
+  return outside && secondOutside(mount, outside.secondDeg, outside.atMs);
 }
 
 function noTurn(mount: Mount, path: ScanPath, turns: readonly number[]): Impossible {
   const ends = turns.map((turn) => path.leavesRangeAtMs(mount, turn)).filter((ms) => ms !== null);
-  if (ends.length === 0) return deadZone(path.start.azimuthDeg);
+  if (ends.length === 0) return deadZone(mount, path.start.firstDeg);
   const atMs = Math.max(...ends);
-  return { impossible: `would run into the azimuth limit at ${clock(atMs)}`, limit: 'azimuth', atMs };
+  const { first } = AXIS_WORDS[mount.kind];
+  return { impossible: `would run into the ${first} limit at ${clock(atMs)}`, limit: 'first', atMs };
 }
 
-function deadZone(azimuthDeg: number): Impossible {
-  const shown = Math.round(normalise180(azimuthDeg) + 360) % 360;
-  return { impossible: `cannot turn to azimuth ${shown}°`, limit: 'azimuth', atMs: null };
+function deadZone(mount: Mount, firstDeg: number): Impossible {
+  const turned = Math.round(normalise180(firstDeg));
+  const shown = mount.kind === 'az-el' ? (turned + 360) % 360 : turned;
+  const text = `${Math.abs(shown)}°`;
+  return {
+    impossible: `cannot turn to ${AXIS_WORDS[mount.kind].first} ${shown < 0 ? '\u2212' : ''}${text}`,
+    limit: 'first',
+    atMs: null,
+  };
 }
 
 function clock(ms: number): string {

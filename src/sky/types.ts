@@ -39,17 +39,31 @@ export type MountLimits =
   | { kind: 'ha-dec'; hourAngle?: AngleRange; declination?: AngleRange; keyholeDeg?: number }
   | { kind: 'xy-ns' | 'xy-ew'; x?: AngleRange; y?: AngleRange; keyholeDeg?: number };
 
+/** An axis with its drive and what it reaches. */
+export type DrivenAxis = Axis & AngleRange;
+
 /** Az–el mount; the azimuth range is that of the cable, so it may exceed one turn. */
 export type AzElMount = {
   kind: 'az-el';
-  azimuth: Axis & { minDeg: number; maxDeg: number };
-  elevation: Axis & { minDeg: number; maxDeg: number };
+  azimuth: DrivenAxis;
+  elevation: DrivenAxis;
   settleSeconds: number;
 };
 
-export type Mount = AzElMount;
+/** Equatorial mount; hour angle in degrees, positive west of the meridian. */
+export type HaDecMount = {
+  kind: 'ha-dec';
+  hourAngle: DrivenAxis;
+  declination: DrivenAxis;
+  settleSeconds: number;
+};
 
-/** Where a dish points and which turn of the cable it is on. */
+/** X–Y mount; angles as MountLimits has them. */
+export type XyMount = { kind: 'xy-ns' | 'xy-ew'; x: DrivenAxis; y: DrivenAxis; settleSeconds: number };
+
+export type Mount = AzElMount | HaDecMount | XyMount;
+
+/** Where a dish points, and the angle of the motor that turns its first axis: of az–el, the turn of the cable. */
 export type Pointing = AzEl & { motorAzimuthDeg: number };
 
 /** A station as the windows see it: limits in degrees of geometric elevation, both ends within. */

@@ -44,6 +44,7 @@ const NEW = {
     heightM: '120',
   },
   mount: {
+    mountKind: 'az-el',
     dishM: '25',
     axisOffsetM: '0',
     axis1MinDeg: '-270',
@@ -129,6 +130,20 @@ describe('a new station', () => {
     ],
     ['no name', { position: { ...NEW.position, name: ' ' } }, 'position.name'],
     ['a zone that is none', { position: { ...NEW.position, timeZone: 'Mars/Base' } }, 'position.timeZone'],
+    [
+      'a declination beyond the pole',
+      {
+        mount: {
+          ...NEW.mount,
+          mountKind: 'ha-dec',
+          axis1MinDeg: '-90',
+          axis1MaxDeg: '90',
+          axis2MaxDeg: '95',
+        },
+      },
+      'mount.axis2MaxDeg',
+    ],
+    ['a mount of no kind', { mount: { ...NEW.mount, mountKind: 'alt-alt' } }, 'mount.mountKind'],
     ['a range the wrong way round', { mount: { ...NEW.mount, axis1MaxDeg: '-300' } }, 'mount.axis1MaxDeg'],
     ['no text at all', { position: 7 as unknown as typeof NEW.position }, undefined],
   ])('says beside the field what is wrong with %s', async (_, change, field) => {

@@ -6,7 +6,7 @@ import type { Plan, Scan } from '@/src/schedule/plan';
 import { problemMends } from '@/src/schedule/problem-mends';
 import { problemSentence } from '@/src/schedule/problem-words';
 import { visibilityWindows } from '@/src/sky/windows';
-import { makeContext, SOURCES, STATIONS, withStation } from './context-maker';
+import { makeContext, MOUNT, SOURCES, STATIONS, withStation } from './context-maker';
 import { makePlan, makeScan, member, T0 } from './plan-maker';
 
 const af: Partial<Scan> = { stations: [member('Af')] };
@@ -116,10 +116,8 @@ describe('a slew', () => {
   });
 
   it('that no turn of the cable allows says so', () => {
-    const base = STATIONS.Af;
-    if (!base) throw new Error('no Af');
-    const azimuth = { ...base.mount.azimuth, minDeg: 100, maxDeg: 234 };
-    const context = withStation('Af', { mount: { ...base.mount, azimuth } });
+    const azimuth = { ...MOUNT.azimuth, minDeg: 100, maxDeg: 234 };
+    const context = withStation('Af', { mount: { ...MOUNT, azimuth } });
     const plan = makePlan([makeScan('a', af)]);
     const problem = only(plan, 'slew', context);
     expect(problem.severity).toBe('fix');

@@ -1,4 +1,5 @@
 import type { PlanContext, PlanMode, PlanSource, PlanStation } from '@/src/schedule/context';
+import type { AzElMount } from '@/src/sky/types';
 
 const point = (fluxJy: number) => ({
   fluxJy,
@@ -9,6 +10,13 @@ const point = (fluxJy: number) => ({
   northRad: 0,
 });
 
+export const MOUNT: AzElMount = {
+  kind: 'az-el',
+  azimuth: { minDeg: -90, maxDeg: 450, rateDegPerS: 0.5, accelDegPerS2: 0.1 },
+  elevation: { minDeg: 3, maxDeg: 89, rateDegPerS: 0.4, accelDegPerS2: 0.1 },
+  settleSeconds: 6,
+};
+
 /** Invented stations: places of the demo's network, drives of our own. */
 function makeStation(code: string, latitudeDeg: number, longitudeDeg: number): PlanStation {
   return {
@@ -18,12 +26,7 @@ function makeStation(code: string, latitudeDeg: number, longitudeDeg: number): P
     minElevationDeg: 8,
     maxElevationDeg: 88,
     horizon: [],
-    mount: {
-      kind: 'az-el',
-      azimuth: { minDeg: -90, maxDeg: 450, rateDegPerS: 0.5, accelDegPerS2: 0.1 },
-      elevation: { minDeg: 3, maxDeg: 89, rateDegPerS: 0.4, accelDegPerS2: 0.1 },
-      settleSeconds: 6,
-    },
+    mount: MOUNT,
     bits: 2,
     sefdJy: { '8.4 GHz': 800, '22 GHz': 1200 },
   };

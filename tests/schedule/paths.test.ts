@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { stationPaths, type PathLeg } from '@/src/schedule/paths';
 import type { Plan, Scan } from '@/src/schedule/plan';
 import { azEl } from '@/src/sky/position';
-import { makeContext, SOURCES, STATIONS, withStation } from './context-maker';
+import { makeContext, MOUNT, SOURCES, STATIONS, withStation } from './context-maker';
 import { makePlan, makeScan, member, T0 } from './plan-maker';
 
 /** Time of one axis by the formula of uniform acceleration, written again for the test. */
@@ -57,11 +57,9 @@ describe('the path of a dish', () => {
 
   it('begins the session on the turn nearest to mid-range', () => {
     const scan = makeScan('a', { sourceId: 'src-a', stations: [member('Em')] });
-    const base = STATIONS.Em;
-    if (!base) throw new Error('no Em');
     const turned = (minDeg: number, maxDeg: number) => {
-      const azimuth = { ...base.mount.azimuth, minDeg, maxDeg };
-      const context = withStation('Em', { mount: { ...base.mount, azimuth } });
+      const azimuth = { ...MOUNT.azimuth, minDeg, maxDeg };
+      const context = withStation('Em', { mount: { ...MOUNT, azimuth } });
       return legsOf(makePlan([scan]), 'Em', context)[0]?.motorStartDeg;
     };
     const azimuth = at('src-a', 'Em', T0).azimuthDeg;
@@ -89,9 +87,7 @@ describe('the path of a dish', () => {
 
   it('says why where no turn of the cable lets the whole scan be tracked', () => {
     const azimuth = { minDeg: 100, maxDeg: 234, rateDegPerS: 0.5, accelDegPerS2: 0.1 };
-    const base = STATIONS.Af;
-    if (!base) throw new Error('no Af');
-    const context = withStation('Af', { mount: { ...base.mount, azimuth } });
+    const context = withStation('Af', { mount: { ...MOUNT, azimuth } });
     const [leg] = legsOf(makePlan([makeScan('a', inAf)]), 'Af', context);
     expect(leg?.impossible).toMatch(/azimuth limit at 01:0\d:\d\d/);
     expect(leg?.slewSeconds).toBeNull();

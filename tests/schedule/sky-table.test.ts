@@ -3,6 +3,7 @@ import type { PlanSource, PlanStation } from '@/src/schedule/context';
 import { skyStation, skyTable, stationsUp, tableElevationDeg } from '@/src/schedule/sky-table';
 import { azEl } from '@/src/sky/position';
 import { visibilityWindows } from '@/src/sky/windows';
+import { MOUNT } from './context-maker';
 
 // Truth: azEl and visibilityWindows of this project, themselves checked against ERFA in tests/sky.
 const TOLERANCE = {
@@ -125,16 +126,15 @@ describe('skyTable', () => {
 
 describe('skyStation', () => {
   it('takes the stricter of station, session and mount', () => {
-    const mount = STATIONS[0]?.mount ?? station('We', 0, 0).mount;
     const limitsOf = (own: Partial<PlanStation>, minElevationDeg: number) => {
       const found = skyStation(station('We', 45, -110, own), { minElevationDeg });
       return [found.minElevationDeg, found.maxElevationDeg];
     };
     expect(limitsOf({}, 5)).toEqual([8, 88]);
     expect(limitsOf({}, 15)).toEqual([15, 88]);
-    const elevation = { ...mount.elevation, minDeg: 12, maxDeg: 80 };
-    expect(limitsOf({ mount: { ...mount, elevation } }, 5)).toEqual([12, 80]);
-    expect(limitsOf({ mount: { ...mount, elevation } }, 15)).toEqual([15, 80]);
+    const elevation = { ...MOUNT.elevation, minDeg: 12, maxDeg: 80 };
+    expect(limitsOf({ mount: { ...MOUNT, elevation } }, 5)).toEqual([12, 80]);
+    expect(limitsOf({ mount: { ...MOUNT, elevation } }, 15)).toEqual([15, 80]);
   });
 
   it('keeps the mask', () => {

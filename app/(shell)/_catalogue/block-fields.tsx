@@ -24,7 +24,10 @@ type Props = {
 /** Every field of a block, then its tables, then what follows from them. */
 export function BlockFields({ block, typed, wrong, onType }: Props) {
   const hidden = block.hides?.(typed) ?? [];
-  const fields = scalarsOf(block).filter(([name]) => !hidden.includes(name));
+  const labels = block.labels?.(typed) ?? {};
+  const fields = scalarsOf(block)
+    .filter(([name]) => !hidden.includes(name))
+    .map(([name, field]) => [name, { ...field, label: labels[name] ?? field.label }] as const);
   return (
     <>
       {fields.length > 0 && (

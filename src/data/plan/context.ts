@@ -11,7 +11,7 @@ import { stations } from '../../../db/schema/stations';
 import type { GaussianComponent } from '../../array/structure';
 import type { PlanMode } from '../../schedule/context';
 import { summaryOf } from '../../schedule/mode-channels';
-import type { HorizonPoint } from '../../sky/types';
+import type { HorizonPoint, Mount } from '../../sky/types';
 import { degToRad } from '../../units/angle';
 import type { TimelineSource, TimelineStation } from './dto';
 
@@ -37,22 +37,7 @@ export async function readStations(
     minElevationDeg: row.minElevationDeg,
     maxElevationDeg: row.maxElevationDeg,
     horizon: horizonOf(row.horizon),
-    mount: {
-      kind: row.mountKind,
-      azimuth: {
-        minDeg: row.axis1MinDeg,
-        maxDeg: row.axis1MaxDeg,
-        rateDegPerS: row.axis1RateDegPerS,
-        accelDegPerS2: row.axis1AccelDegPerS2,
-      },
-      elevation: {
-        minDeg: row.axis2MinDeg,
-        maxDeg: row.axis2MaxDeg,
-        rateDegPerS: row.axis2RateDegPerS,
-        accelDegPerS2: row.axis2AccelDegPerS2,
-      },
-      settleSeconds: row.settleSeconds,
-    },
+    mount: mountOf(row),
     bits: row.bits === 1 ? 1 : 2,
     sefdJy: Object.fromEntries(
       bands.filter((band) => band.stationCode === row.code).map((band) => [band.band, band.sefdJy]),
@@ -60,6 +45,31 @@ export async function readStations(
     timeZone: row.timeZone,
     dishM: row.dishM,
   }));
+}
+
+function mountOf(row: typeof stations.$inferSelect): Mount {
+  const first = {
+    minDeg: row.axis1MinDeg,
+    maxDeg: row.axis1MaxDeg,
+    rateDegPerS: row.axis1RateDegPerS,
+    accelDegPerS2: row.axis1AccelDegPerS2,
+  };
+  const second = {
+    minDeg: row.axis2MinDeg,
+    maxDeg: row.axis2MaxDeg,
+    rateDegPerS: row.axis2RateDegPerS,
+    accelDegPerS2: row.axis2AccelDegPerS2,
+  };
+  const { mountKind: kind, settleSeconds } = row;
+  switch (kind) {
+    case 'az-el':
+      return { kind, azimuth: first, elevation: second, settleSeconds };
+    case 'ha-dec':
+      return { kind, hourAngle: first, declination: second, settleSeconds };
+    case 'xy-ns':
+    case 'xy-ew':
+      return { kind, x: first, y: second, settleSeconds };
+  }
 }
 
 export async function readSources(from: Database | Tx, sessionId: string): Promise<TimelineSource[]> {

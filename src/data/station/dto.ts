@@ -1,3 +1,4 @@
+import type { MountKind } from '../../sky/types';
 import type {
   AllowanceValues,
   RecordingValues,
@@ -43,7 +44,7 @@ export type StationRow = {
   code: string;
   name: string;
   timeZone: string;
-  mountKind: 'az-el';
+  mountKind: MountKind;
   site: { latitudeDeg: number; longitudeDeg: number; heightM: number };
   dishM: number;
   sefdJy: Readonly<Record<string, number>>;

@@ -42,6 +42,7 @@ export async function blocksOf(from: Database | Tx, row: Row): Promise<StationBl
   return {
     position: positionOf(row),
     mount: {
+      mountKind: row.mountKind,
       dishM: row.dishM,
       axisOffsetM: row.axisOffsetM,
       axis1MinDeg: row.axis1MinDeg,

@@ -42,7 +42,6 @@ export const addStation = (viewer: Viewer, body: unknown): Promise<{ ok: true; c
       const recording = recordingColumns(valuesOf(STATION_BLOCKS.recording, typed.recording, 'recording.'));
       await tx.insert(stations).values({
         code,
-        mountKind: 'az-el',
         recorderFreeAtMs: recording.recorderFreeBytes === null ? null : nowMs(),
         ...positionColumns(valuesOf(STATION_BLOCKS.position, typed.position, 'position.')),
         ...valuesOf(STATION_BLOCKS.mount, typed.mount, 'mount.'),

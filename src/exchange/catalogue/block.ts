@@ -28,6 +28,8 @@ export type Block<V, T = Record<never, never>> = {
   keep: string;
   fields: FieldsOf<V>;
   rows: { readonly [K in keyof T & string]: RowsField<T[K]> };
+  /** labels that depend on what is typed, by field; the others are the fields' own */
+  labels?(typed: Typed): Readonly<Record<string, string>>;
   /** fields that another one makes meaningless; they are read as empty */
   hides?(typed: Typed): readonly string[];
   check?(value: Values<V, T>): readonly Wrong[];
@@ -48,13 +50,14 @@ export type BlockRead<V> = { ok: true; value: V } | { ok: false; wrong: Wrong[] 
 export function readBlock<V, T>(block: Block<V, T>, typed: unknown): BlockRead<Values<V, T>> {
   const text = textIn(typed);
   const hidden = block.hides?.(text) ?? [];
+  const labels = block.labels?.(text) ?? {};
   const wrong: Wrong[] = [];
   const value: Record<string, unknown> = {};
   for (const [name, field] of scalarsOf(block)) {
     const entry = text[name];
     const read = field.read(hidden.includes(name) || typeof entry !== 'string' ? '' : entry);
     if (read.ok) value[name] = read.value;
-    else wrong.push(wrongAt(name, read));
+    else wrong.push(relabelled(wrongAt(name, read), field.label, labels[name]));
   }
   for (const [name, table] of tablesOf(block)) {
     const entry = text[name];
@@ -147,3 +150,8 @@ function rowIn(row: unknown): TypedRow {
 
 const isRecord = (value: unknown): value is Record<string, unknown> =>
   typeof value === 'object' && value !== null && !Array.isArray(value);
+
+/** A message names its field as the form does. */
+function relabelled(wrong: Wrong, was: string, label: string | undefined): Wrong {
+  return label === undefined ? wrong : { ...wrong, message: wrong.message.replace(`“${was}”`, `“${label}”`) };
+}

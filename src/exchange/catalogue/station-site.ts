@@ -1,4 +1,5 @@
 import { geodeticToItrf, itrfToGeodetic } from '../../sky/site';
+import type { MountKind } from '../../sky/types';
 import type { Block, FieldsOf, Wrong } from './block';
 import { before } from './checks';
 import {
@@ -26,6 +27,7 @@ export type PositionValues = {
 };
 
 export type MountValues = {
+  mountKind: MountKind;
   dishM: number;
   axisOffsetM: number;
   axis1MinDeg: number;
@@ -98,35 +100,116 @@ export const position: Block<PositionValues> = {
   },
 };
 
-const axisFields = <A extends 1 | 2>(axis: A, name: string, limits: { min: number; max: number }) =>
+/** How a mount's kind and its axes are called; axis 1 turns about a fixed line, axis 2 rides on it. */
+export const MOUNT_WORDS: Readonly<
+  Record<MountKind, { kind: string; short: string; 1: string; 2: string; note: string | null }>
+> = {
+  'az-el': { kind: 'Az–el', short: 'az–el', 1: 'Azimuth', 2: 'Elevation axis', note: null },
+  'ha-dec': {
+    kind: 'HA–Dec (equatorial)',
+    short: 'equatorial',
+    1: 'Hour angle',
+    2: 'Declination',
+    note: 'Hour angle in degrees, 15° to the hour, positive west of the meridian.',
+  },
+  'xy-ns': {
+    kind: 'X–Y, lower axis north–south',
+    short: 'X–Y',
+    1: 'X',
+    2: 'Y',
+    note: 'Both are 0° at the zenith; X is positive toward east, Y toward north.',
+  },
+  'xy-ew': {
+    kind: 'X–Y, lower axis east–west',
+    short: 'X–Y',
+    1: 'X',
+    2: 'Y',
+    note: 'Both are 0° at the zenith; X is positive toward north, Y toward east.',
+  },
+};
+
+const kindIn = (typed: unknown): MountKind =>
+  typed === 'ha-dec' || typed === 'xy-ns' || typed === 'xy-ew' ? typed : 'az-el';
+
+/** An equatorial or X–Y mount has no more than half a turn of axis 2, and one turn of axis 1. */
+function reachProblems(value: MountValues): Wrong[] {
+  const { mountKind } = value;
+  if (mountKind === 'az-el') {
+    const message = 'The elevation axis goes from −10° to 180°.';
+    return value.axis2MinDeg < -10 ? [{ field: 'axis2MinDeg', message }] : [];
+  }
+  const words = MOUNT_WORDS[mountKind];
+  const beyond = (field: keyof MountValues, deg: number, most: number, name: string) =>
+    Math.abs(deg) > most ? [{ field, message: `${name} goes from −${most}° to ${most}°.` }] : [];
+  return [
+    ...beyond('axis1MinDeg', value.axis1MinDeg, 180, words[1]),
+    ...beyond('axis1MaxDeg', value.axis1MaxDeg, 180, words[1]),
+    ...beyond('axis2MinDeg', value.axis2MinDeg, 90, words[2]),
+    ...beyond('axis2MaxDeg', value.axis2MaxDeg, 90, words[2]),
+  ];
+}
+
+const axisFields = <A extends 1 | 2>(axis: A, limits: { min: number; max: number }) =>
   ({
-    [`axis${axis}MinDeg`]: numberField({ label: `${name} from`, unit: '°', ...limits }),
-    [`axis${axis}MaxDeg`]: numberField({ label: `${name} to`, unit: '°', ...limits }),
-    [`axis${axis}RateDegPerS`]: numberField({ label: `${name} rate`, unit: '°/s', above: 0, max: 20 }),
-    [`axis${axis}AccelDegPerS2`]: numberField({ label: `${name} start`, unit: '°/s²', above: 0, max: 20 }),
+    [`axis${axis}MinDeg`]: numberField({ label: `Axis ${axis} from`, unit: '°', ...limits }),
+    [`axis${axis}MaxDeg`]: numberField({ label: `Axis ${axis} to`, unit: '°', ...limits }),
+    [`axis${axis}RateDegPerS`]: numberField({ label: `Axis ${axis} rate`, unit: '°/s', above: 0, max: 20 }),
+    [`axis${axis}AccelDegPerS2`]: numberField({
+      label: `Axis ${axis} start`,
+      unit: '°/s²',
+      above: 0,
+      max: 20,
+    }),
   }) as FieldsOf<Pick<MountValues, `axis${A}${'MinDeg' | 'MaxDeg' | 'RateDegPerS' | 'AccelDegPerS2'}`>>;
 
 export const mount: Block<MountValues> = {
   title: 'Mount, limits and rates',
   keep: 'Keep mount',
   fields: {
+    mountKind: choiceField({
+      label: 'Kind of mount',
+      choices: [
+        { value: 'az-el', label: MOUNT_WORDS['az-el'].kind },
+        { value: 'ha-dec', label: MOUNT_WORDS['ha-dec'].kind },
+        { value: 'xy-ns', label: MOUNT_WORDS['xy-ns'].kind },
+        { value: 'xy-ew', label: MOUNT_WORDS['xy-ew'].kind },
+      ],
+    }),
     dishM: numberField({ label: 'Dish', unit: 'm', above: 0, max: 500 }),
     axisOffsetM: numberField({ label: 'Axis offset', unit: 'm', min: -50, max: 50 }),
-    ...axisFields(1, 'Azimuth', { min: -720, max: 720 }),
-    ...axisFields(2, 'Elevation axis', { min: -10, max: 180 }),
+    ...axisFields(1, { min: -720, max: 720 }),
+    ...axisFields(2, { min: -90, max: 180 }),
     settleSeconds: numberField({ label: 'Settling', unit: 's', min: 0, max: 600 }),
     minElevationDeg: numberField({ label: 'Lowest elevation', unit: '°', min: 0, max: 90 }),
     maxElevationDeg: numberField({ label: 'Highest elevation', unit: '°', min: 0, max: 90 }),
     sunLimitDeg: optionalNumberField({ label: 'Nearest to the Sun', unit: '°', min: 0, max: 180 }),
   },
   rows: {},
+  labels: (typed) => {
+    const words = MOUNT_WORDS[kindIn(typed.mountKind)];
+    return Object.fromEntries(
+      ([1, 2] as const).flatMap((axis) => [
+        [`axis${axis}MinDeg`, `${words[axis]} from`],
+        [`axis${axis}MaxDeg`, `${words[axis]} to`],
+        [`axis${axis}RateDegPerS`, `${words[axis]} rate`],
+        [`axis${axis}AccelDegPerS2`, `${words[axis]} start`],
+      ]),
+    );
+  },
+  note: ({ mountKind }) => MOUNT_WORDS[mountKind].note,
   check: (value) => [
-    ...before('axis1MaxDeg', value.axis1MinDeg, value.axis1MaxDeg, 'The azimuth ends before it begins.'),
+    ...reachProblems(value),
+    ...before(
+      'axis1MaxDeg',
+      value.axis1MinDeg,
+      value.axis1MaxDeg,
+      `${MOUNT_WORDS[value.mountKind][1]} ends before it begins.`,
+    ),
     ...before(
       'axis2MaxDeg',
       value.axis2MinDeg,
       value.axis2MaxDeg,
-      'The elevation axis ends before it begins.',
+      `${MOUNT_WORDS[value.mountKind][2]} ends before it begins.`,
     ),
     ...before(
       'maxElevationDeg',

@@ -9,6 +9,7 @@ import { dayText, minuteText, numberText, spanText } from '@/app/_ui/format';
 import { StationCode } from '@/app/_ui/station-code';
 import { offsetWords } from '@/src/clock/reading';
 import type { StationRow } from '@/src/data/station/dto';
+import { MOUNT_WORDS } from '@/src/exchange/catalogue/station-site';
 import { CatalogueList } from '../../_catalogue/catalogue-list';
 import type { Query } from '../../_catalogue/use-list-state';
 import { latitudeText, longitudeText } from '../_place/place-text';
@@ -101,9 +102,9 @@ function columnsOf(band: string, clocks: Props['clocks'], nowMs: number): readon
       id: 'dish',
       head: 'Dish, mount',
       value: ({ dishM }) => dishM,
-      cell: ({ dishM }) => (
+      cell: ({ dishM, mountKind }) => (
         <>
-          {numberText(dishM)} m<span className="cat-sub block">az–el</span>
+          {numberText(dishM)} m<span className="cat-sub block">{MOUNT_WORDS[mountKind].short}</span>
         </>
       ),
     },

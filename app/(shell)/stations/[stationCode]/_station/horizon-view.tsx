@@ -105,10 +105,11 @@ function PathChoice({ sources, chosen, onChoose }: ChoiceProps) {
 }
 
 export function limitsOf(mount: MountValues) {
+  const isAzEl = mount.mountKind === 'az-el';
   return {
-    lowestDeg: Math.max(mount.minElevationDeg, mount.axis2MinDeg),
-    highestDeg: Math.min(mount.maxElevationDeg, mount.axis2MaxDeg),
-    azimuthMinDeg: mount.axis1MinDeg,
-    azimuthMaxDeg: mount.axis1MaxDeg,
+    lowestDeg: isAzEl ? Math.max(mount.minElevationDeg, mount.axis2MinDeg) : mount.minElevationDeg,
+    highestDeg: isAzEl ? Math.min(mount.maxElevationDeg, mount.axis2MaxDeg) : mount.maxElevationDeg,
+    azimuthMinDeg: isAzEl ? mount.axis1MinDeg : 0,
+    azimuthMaxDeg: isAzEl ? mount.axis1MaxDeg : 360,
   };
 }

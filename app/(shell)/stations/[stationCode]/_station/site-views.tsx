@@ -1,6 +1,6 @@
 import { angleText, numberText } from '@/app/_ui/format';
 import type { StationDto } from '@/src/data/station/dto';
-import type { MountValues, Sector } from '@/src/exchange/catalogue/station-site';
+import { MOUNT_WORDS, type MountValues, type Sector } from '@/src/exchange/catalogue/station-site';
 import { Pairs } from '../../../_catalogue/pairs';
 import { latitudeText, longitudeText } from '../../_place/place-text';
 import { WrapSpiral } from './wrap-spiral';
@@ -35,13 +35,16 @@ export function PositionView({ station }: { station: StationDto }) {
 }
 
 export function MountView({ mount }: { mount: MountValues }) {
+  const words = MOUNT_WORDS[mount.mountKind];
   return (
     <>
       <Scroll label="Axes">
         <table className="tt">
           <thead>
             <tr>
-              <th scope="col">az–el, offset {numberText(mount.axisOffsetM, 2)} m</th>
+              <th scope="col">
+                {words.short}, offset {numberText(mount.axisOffsetM, 2)} m
+              </th>
               <th scope="col" className="num">
                 From
               </th>
@@ -62,14 +65,14 @@ export function MountView({ mount }: { mount: MountValues }) {
           </thead>
           <tbody>
             <AxisRow
-              name="Azimuth"
+              name={words[1]}
               fromDeg={mount.axis1MinDeg}
               toDeg={mount.axis1MaxDeg}
               rate={mount.axis1RateDegPerS}
               start={mount.axis1AccelDegPerS2}
             />
             <AxisRow
-              name="Elevation axis"
+              name={words[2]}
               fromDeg={mount.axis2MinDeg}
               toDeg={mount.axis2MaxDeg}
               rate={mount.axis2RateDegPerS}
@@ -92,9 +95,7 @@ export function MountView({ mount }: { mount: MountValues }) {
           ],
         ]}
       />
-      <p className="help mt-1">
-        Az–el is the only kind of mount so far; others come when the plan can judge their slews.
-      </p>
+      {words.note !== null && <p className="help mt-1">{words.note}</p>}
     </>
   );
 }
@@ -115,6 +116,13 @@ function AxisRow({ name, fromDeg, toDeg, rate, start }: AxisRowProps) {
 
 export function WrapView({ mount, sectors }: { mount: MountValues; sectors: readonly Sector[] }) {
   const { axis1MinDeg: minDeg, axis1MaxDeg: maxDeg } = mount;
+  if (mount.mountKind !== 'az-el')
+    return (
+      <p className="help">
+        {MOUNT_WORDS[mount.mountKind][1]} {angleText(minDeg)} to {angleText(maxDeg)}. The cable follows the
+        axis and never turns over: each direction is reached in one way.
+      </p>
+    );
   const overlapDeg = maxDeg - minDeg - 360;
   return (
     <>

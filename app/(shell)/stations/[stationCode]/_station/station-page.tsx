@@ -8,6 +8,7 @@ import { useState } from 'react';
 import { numberText } from '@/app/_ui/format';
 import type { StationDto } from '@/src/data/station/dto';
 import { STATION_BLOCKS } from '@/src/exchange/catalogue/station';
+import { MOUNT_WORDS } from '@/src/exchange/catalogue/station-site';
 import { ObjectBlock, type Editing } from '../../../_catalogue/object-block';
 import { ObjectHead } from '../../../_catalogue/object-head';
 import { latitudeText, longitudeText } from '../../_place/place-text';
@@ -37,7 +38,7 @@ export function StationPage({ station, nowMs }: { station: StationDto; nowMs: nu
         list={{ href: '/stations' as Route, label: 'Stations' }}
         name={blocks.position.name}
         mark={<span className="stn station-head-code">{code}</span>}
-        sub={`${numberText(blocks.mount.dishM)} m az–el · ${latitudeText(site.latitudeDeg)} ${longitudeText(site.longitudeDeg)} · ${zone}, now ${formatInTimeZone(nowMs, zone, 'HH:mm')}`}
+        sub={`${numberText(blocks.mount.dishM)} m ${MOUNT_WORDS[blocks.mount.mountKind].short} · ${latitudeText(site.latitudeDeg)} ${longitudeText(site.longitudeDeg)} · ${zone}, now ${formatInTimeZone(nowMs, zone, 'HH:mm')}`}
         noun="station"
         retiredAtMs={station.retiredAtMs}
         sessionsAhead={station.sessionsAhead}

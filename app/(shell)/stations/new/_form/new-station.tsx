@@ -9,7 +9,7 @@ import { add } from '../actions';
 
 const START: Readonly<Record<(typeof NEW_STATION_BLOCKS)[number], Typed>> = {
   position: { positionKind: 'geodetic' },
-  mount: { axisOffsetM: '0' },
+  mount: { mountKind: 'az-el', axisOffsetM: '0' },
   recording: { bits: '2', preScanSeconds: '0', calibrationSeconds: '0' },
 };
 
@@ -25,7 +25,7 @@ export function NewStation() {
         block: STATION_BLOCKS[name] as unknown as AnyBlock,
         start: START[name],
       }))}
-      note="The mount is az–el: hour-angle and X–Y mounts are not offered until the plan can judge their slews. Sensitivity, horizon mask, counter wiring and the rest follow on the station’s page."
+      note="Sensitivity, horizon mask, counter wiring and the rest follow on the station’s page."
       add={add}
     />
   );
