@@ -1,4 +1,5 @@
 import { predictClock, type ClockFit } from '../clock/fit';
+import type { SecondState } from '../clock/second';
 import { delayWindowSeconds, rateWindow, windowAmplitude } from '../clock/search-window';
 import type { PlanMode, PlanSettings } from '../schedule/context';
 import type { StationCode } from '../schedule/plan';
@@ -13,6 +14,8 @@ export type StationClock = {
   fit: ClockFit | null;
   /** from the pulse to the recorded signal; null is not known */
   instrument: { seconds: number; sigmaSeconds: number } | null;
+  /** of the formatter's whole second; null where the clock was never read */
+  second: SecondState | null;
 };
 
 export type ClockRules = PlanSettings['clockRules'];

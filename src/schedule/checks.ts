@@ -45,6 +45,9 @@ export type AwayValues = {
 /** Age of the newest clock reading; null where there is none. */
 export type ClockValues = { ageHours: number | null };
 
+/** The formatter's whole second: off by so many seconds (checked at atMs), or null where it was not checked since atMs. */
+export type SecondValues = { off: number | null; atMs: number | null };
+
 /** What is wrong, or near it; the sentence and its mends are made on demand. */
 export type Problem = Head &
   (
@@ -54,6 +57,7 @@ export type Problem = Head &
     | { kind: 'outside'; values: OutsideValues }
     | { kind: 'away'; values: AwayValues }
     | { kind: 'clock'; values: ClockValues }
+    | { kind: 'second'; values: SecondValues }
   );
 
 /** So near above a limit is told. */
@@ -75,7 +79,12 @@ export function checkPlan(plan: Plan, context: PlanContext): Problem[] {
   }
   for (const legs of stationPaths(plan, context).values()) {
     for (const leg of legs) problems.push(...legProblems(leg, context));
-    problems.push(...awayProblems(legs, context), ...clockProblem(legs[0], context));
+    const [first] = legs;
+    problems.push(
+      ...awayProblems(legs, context),
+      ...clockProblem(first, context),
+      ...secondProblem(first, context),
+    );
   }
   return sortProblems(problems);
 }
@@ -190,6 +199,21 @@ function clockProblem(
       key: `clock:*:${station}`,
       kind: 'clock',
       values: { ageHours },
+    },
+  ];
+}
+
+function secondProblem(first: PathLeg | undefined, { clockSecond }: PlanContext): Problem[] {
+  const state = first && clockSecond?.[first.station];
+  if (!first || !state || state.kind === 'checked') return [];
+  const { station, scanId, startMs } = first;
+  const isOff = state.kind === 'off';
+  return [
+    {
+      ...head('second', scanId, station, isOff ? 'fix' : 'note', startMs),
+      key: `second:*:${station}`,
+      kind: 'second',
+      values: isOff ? { off: state.seconds, atMs: state.atMs } : { off: null, atMs: state.sinceMs },
     },
   ];
 }

@@ -74,5 +74,9 @@ function shortly(problem: Problem, scanId: ScanId, plan: Plan): string {
       return `${who} is away: ${problem.values.why}`;
     case 'clock':
       return `${who} has no recent clock reading`;
+    case 'second':
+      return problem.values.off === null
+        ? `${who} has not checked its second`
+        : `${who} has its second off by ${problem.values.off} s`;
   }
 }

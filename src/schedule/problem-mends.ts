@@ -23,13 +23,13 @@ const ROUNDING_SHARE = 0.1;
  * note, because the edge of a window is near its limit.
  *
  * @param plan  the plan in which the problem was found
- * @returns at least one, but none for a clock: it is read at the station
+ * @returns at least one, but none for a clock and its second: they are looked after at the station
  */
 export function problemMends(problem: Problem, plan: Plan, context: PlanContext): Mend[] {
   const scan = plan.scans.find(({ id }) => id === problem.scanId);
   if (!scan) return [];
   const numberOf = (id: string) => scanNumbers(plan).get(id) ?? id;
-  if (problem.kind === 'clock') return [];
+  if (problem.kind === 'clock' || problem.kind === 'second') return [];
   if (problem.kind === 'outside') return insideMends(scan, plan, numberOf(scan.id));
   const { station } = problem;
   const leg = station === null ? undefined : stationPaths(plan, context).get(station)?.find(isOf(scan));

@@ -1,7 +1,8 @@
-import type { ClockValues, LimitValues, Problem, SlewValues } from './checks';
+import type { ClockValues, SecondValues, LimitValues, Problem, SlewValues } from './checks';
 import type { PlanContext } from './context';
 import type { Plan, ScanId } from './plan';
 import { scanNumbers } from './scan-numbers';
+import { dayOfYear } from '../units/time';
 import { clockText, lengthText } from './words';
 
 /** who with its point; what and shortfall without: "who what: shortfall." or "who what." */
@@ -43,6 +44,8 @@ export function problemSentence(problem: Problem, plan: Plan, context: PlanConte
     }
     case 'clock':
       return { who: `${problem.station ?? ''}.`, what: clockWords(problem.values), shortfall: null };
+    case 'second':
+      return { who: `${problem.station ?? ''}.`, what: secondWords(problem.values), shortfall: null };
   }
 }
 
@@ -96,6 +99,19 @@ function clockWords({ ageHours }: ClockValues): string {
   if (ageHours === null) return 'Its clock was never read';
   const age = ageHours < 48 ? `${Math.floor(ageHours)} h` : `${Math.floor(ageHours / 24)} days`;
   return `The newest reading of its clock is ${age} old`;
+}
+
+/** "041 at 12:10:00" */
+const dayText = (ms: number) => `${String(dayOfYear(ms)).padStart(3, '0')} at ${clockText(ms)}`;
+
+function secondWords({ off, atMs }: SecondValues): string {
+  if (off === null) {
+    const since = atMs === null ? '' : ` since it was re-synchronised on day ${dayText(atMs)}`;
+    return `The second of its formatter was not checked against UTC${since}`;
+  }
+  const count = `${off < 0 ? '\u2212' : ''}${Math.abs(off)} s`;
+  const at = atMs === null ? '' : `, checked on day ${dayText(atMs)}`;
+  return `The second of its formatter is off by ${count}${at}. Re-synchronise it and check again`;
 }
 
 function degrees(value: number): string {

@@ -19,7 +19,13 @@ const clockOf = (offsetSeconds: number, over: Partial<StationClock> = {}, ageHou
     at: new Date(readAtMs - k * 4 * HOUR_MS),
     offsetSeconds: offsetSeconds + (k % 2 === 0 ? 1e-9 : -1e-9),
   }));
-  return { readAtMs, fit: fitClock(readings), instrument: { seconds: 1e-6, sigmaSeconds: 1e-8 }, ...over };
+  return {
+    readAtMs,
+    fit: fitClock(readings),
+    instrument: { seconds: 1e-6, sigmaSeconds: 1e-8 },
+    second: { kind: 'checked' },
+    ...over,
+  };
 };
 const at = { atMs: NOW + 10 * HOUR_MS, nowMs: NOW };
 const place = (second: StationClock | undefined, modelled?: ModelledClock) =>

@@ -343,6 +343,42 @@ describe('a clock', () => {
   });
 });
 
+describe('the whole second of a formatter', () => {
+  const plan = makePlan([makeScan('a'), makeScan('b', { startMs: T0 + 3_600_000 })]);
+  const at = Date.UTC(2027, 1, 10, 12, 10);
+
+  it('that is off must be fixed, once for each station', () => {
+    const context = makeContext({ clockSecond: { Bm: { kind: 'off', seconds: -1, atMs: at } } });
+    const problem = only(plan, 'second', context);
+    expect(problem).toMatchObject({ key: 'second:*:Bm', severity: 'fix', scanId: 'a' });
+    expect(problemSentence(problem, plan, context)).toEqual({
+      who: 'Bm.',
+      what: 'The second of its formatter is off by −1 s, checked on day 041 at 12:10:00. Re-synchronise it and check again',
+      shortfall: null,
+    });
+    expect(problemMends(problem, plan, context)).toEqual([]);
+  });
+
+  it('that was not checked since a re-sync, or ever, is a note', () => {
+    const words = (sinceMs: number | null) => {
+      const context = makeContext({ clockSecond: { Bm: { kind: 'unchecked', sinceMs } } });
+      const problem = only(plan, 'second', context);
+      expect(problem.severity).toBe('note');
+      return problemSentence(problem, plan, context).what;
+    };
+    expect(words(at)).toBe(
+      'The second of its formatter was not checked against UTC since it was re-synchronised on day 041 at 12:10:00',
+    );
+    expect(words(null)).toBe('The second of its formatter was not checked against UTC');
+  });
+
+  it('that was checked is no problem, nor one of which nothing is known', () => {
+    const context = makeContext({ clockSecond: { Bm: { kind: 'checked' } } });
+    expect(checkPlan(plan, context).filter(({ kind }) => kind === 'second')).toEqual([]);
+    expect(checkPlan(plan, makeContext()).filter(({ kind }) => kind === 'second')).toEqual([]);
+  });
+});
+
 describe('the list of problems', () => {
   it('has what must be fixed first, then goes by time', () => {
     const plan = makePlan(

@@ -8,6 +8,7 @@ import { sessions } from '../../../db/schema/sessions';
 import { stations } from '../../../db/schema/stations';
 import { can, canSome, type Viewer } from '../../access/policy';
 import { fitClock, predictClock, type ClockFit } from '../../clock/fit';
+import { secondState } from '../../clock/second';
 import { nowMs } from '../../env';
 import type { StationClock } from '../../outlook/clock-place';
 import { answer, forbiddenFor, notFound, type Failure } from '../errors';
@@ -94,8 +95,21 @@ export async function clocksOf(
     .where(inArray(stations.code, [...codes]));
   const clocks: Record<string, StationClock> = {};
   for (const station of rows) {
-    const { fit, used } = await fitOf(from, station, 'formatter', atMs);
-    clocks[station.code] = { readAtMs: used[0]?.atMs ?? null, fit, instrument: instrumentOf(station) };
+    const { fit, used, rows: all } = await fitOf(from, station, 'formatter', atMs);
+    const resyncs = await from
+      .select({ atMs: clockEvents.atMs })
+      .from(clockEvents)
+      .where(and(eq(clockEvents.stationCode, station.code), eq(clockEvents.kind, 'resync')));
+    const checks = all.map((row) => ({ atMs: row.atMs, check: row.secondCheck, off: row.secondOff }));
+    clocks[station.code] = {
+      readAtMs: used[0]?.atMs ?? null,
+      fit,
+      instrument: instrumentOf(station),
+      second: secondState(
+        checks,
+        resyncs.map((event) => event.atMs),
+      ),
+    };
   }
   return clocks;
 }

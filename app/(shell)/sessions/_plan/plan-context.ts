@@ -25,6 +25,9 @@ export function planContextOf(timeline: Timeline): PageContext {
     clockReadAtMs: Object.fromEntries(
       Object.entries(clocks).map(([code, { readAtMs }]) => [code, readAtMs] as const),
     ),
+    clockSecond: Object.fromEntries(
+      Object.entries(clocks).flatMap(([code, { second }]) => (second ? [[code, second] as const] : [])),
+    ),
     nowMs,
     settings,
     judgeClock: clockJudge(clocks, nowMs, settings.clockRules),
