@@ -204,16 +204,15 @@ function clockProblem(
 }
 
 function secondProblem(first: PathLeg | undefined, { clockSecond }: PlanContext): Problem[] {
-  const state = first && clockSecond?.[first.station];
-  if (!first || !state || state.kind === 'checked') return [];
+  const values = first && clockSecond?.[first.station];
+  if (!first || !values) return [];
   const { station, scanId, startMs } = first;
-  const isOff = state.kind === 'off';
   return [
     {
-      ...head('second', scanId, station, isOff ? 'fix' : 'note', startMs),
+      ...head('second', scanId, station, values.off === null ? 'note' : 'fix', startMs),
       key: `second:*:${station}`,
       kind: 'second',
-      values: isOff ? { off: state.seconds, atMs: state.atMs } : { off: null, atMs: state.sinceMs },
+      values,
     },
   ];
 }

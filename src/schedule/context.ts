@@ -1,4 +1,3 @@
-import type { SecondState } from '../clock/second';
 import type { GaussianComponent } from '../array/structure';
 import type { Geodetic, HorizonPoint, Interval, Mount, SkyPosition } from '../sky/types';
 import type { StationCode } from './plan';
@@ -69,8 +68,8 @@ export type PlanContext = {
   away: Readonly<Record<StationCode, readonly (Interval & { why: string })[]>>;
   /** newest reading of each station's clock, null where it was never read; a station that is absent is not judged */
   clockReadAtMs: Readonly<Record<StationCode, number | null>>;
-  /** what is known of each formatter's whole second; a station that is absent is not judged */
-  clockSecond?: Readonly<Record<StationCode, SecondState>>;
+  /** formatters whose whole second is off by so many seconds (found at atMs), or null: not checked since atMs */
+  clockSecond?: Readonly<Record<StationCode, { off: number | null; atMs: number | null }>>;
   nowMs: number;
   settings: PlanSettings;
 };

@@ -348,7 +348,7 @@ describe('the whole second of a formatter', () => {
   const at = Date.UTC(2027, 1, 10, 12, 10);
 
   it('that is off must be fixed, once for each station', () => {
-    const context = makeContext({ clockSecond: { Bm: { kind: 'off', seconds: -1, atMs: at } } });
+    const context = makeContext({ clockSecond: { Bm: { off: -1, atMs: at } } });
     const problem = only(plan, 'second', context);
     expect(problem).toMatchObject({ key: 'second:*:Bm', severity: 'fix', scanId: 'a' });
     expect(problemSentence(problem, plan, context)).toEqual({
@@ -361,7 +361,7 @@ describe('the whole second of a formatter', () => {
 
   it('that was not checked since a re-sync, or ever, is a note', () => {
     const words = (sinceMs: number | null) => {
-      const context = makeContext({ clockSecond: { Bm: { kind: 'unchecked', sinceMs } } });
+      const context = makeContext({ clockSecond: { Bm: { off: null, atMs: sinceMs } } });
       const problem = only(plan, 'second', context);
       expect(problem.severity).toBe('note');
       return problemSentence(problem, plan, context).what;
@@ -372,8 +372,8 @@ describe('the whole second of a formatter', () => {
     expect(words(null)).toBe('The second of its formatter was not checked against UTC');
   });
 
-  it('that was checked is no problem, nor one of which nothing is known', () => {
-    const context = makeContext({ clockSecond: { Bm: { kind: 'checked' } } });
+  it('of which nothing is wrong is no problem', () => {
+    const context = makeContext({ clockSecond: {} });
     expect(checkPlan(plan, context).filter(({ kind }) => kind === 'second')).toEqual([]);
     expect(checkPlan(plan, makeContext()).filter(({ kind }) => kind === 'second')).toEqual([]);
   });

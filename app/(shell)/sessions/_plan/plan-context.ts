@@ -26,7 +26,13 @@ export function planContextOf(timeline: Timeline): PageContext {
       Object.entries(clocks).map(([code, { readAtMs }]) => [code, readAtMs] as const),
     ),
     clockSecond: Object.fromEntries(
-      Object.entries(clocks).flatMap(([code, { second }]) => (second ? [[code, second] as const] : [])),
+      Object.entries(clocks).flatMap(([code, { second }]) => {
+        if (second === null || second.kind === 'checked') return [];
+        const isOff = second.kind === 'off';
+        return [
+          [code, isOff ? { off: second.seconds, atMs: second.atMs } : { off: null, atMs: second.sinceMs }],
+        ];
+      }),
     ),
     nowMs,
     settings,
