@@ -157,3 +157,20 @@ test('a list shows what others did, without being asked', async ({ pageAs }, inf
   await makeOwnSession(scheduler, code, 'Made meanwhile');
   await expect(reader.getByRole('row', { name: new RegExp(code) })).toBeVisible();
 });
+
+test('an address without its page leads to the page where one’s work begins', async ({ pageAs }) => {
+  const ends = {
+    scheduler: 'timeline',
+    correlator: 'fringes',
+    investigator: 'coverage',
+    operatorAf: 'slots',
+  } as const;
+  for (const [person, end] of Object.entries(ends)) {
+    const page = await pageAs(person as keyof typeof ends);
+    await page.goto('/sessions/ARC-031');
+    await expect(page).toHaveURL(new RegExp(`/sessions/ARC-031/${end}$`));
+  }
+  const scheduler = await pageAs('scheduler');
+  await scheduler.goto('/sessions/ARC-777');
+  await expect(scheduler.getByRole('heading', { name: 'There is no session ARC-777' })).toBeVisible();
+});

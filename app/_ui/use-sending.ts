@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { reach, type Unreached } from './reach';
 
 type Refusal = { ok: false; message: string; fields?: Record<string, string[] | undefined> };
@@ -10,6 +10,12 @@ export function useSending() {
   const [trouble, setTrouble] = useState<string | null>(null);
   const [isSending, setIsSending] = useState(false);
   const isBusy = useRef(false);
+  const form = useRef<HTMLFormElement & HTMLDivElement>(null);
+  // the first field that is wrong has the focus
+  useEffect(() => {
+    if (Object.keys(fields).length > 0)
+      form.current?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
+  }, [fields]);
 
   const say = (wrong: Fields = {}) => {
     setFields(wrong);
@@ -34,7 +40,7 @@ export function useSending() {
     }
     return answer;
   };
-  return { fields, trouble, isSending, say, send };
+  return { form, fields, trouble, isSending, say, send };
 }
 
 /** What is wrong, by field, as one line each. */

@@ -42,6 +42,10 @@ export function navFor(viewer: Viewer, place: Place): NavItem[] {
   return own ? [...pagesOf(viewer, { kind: 'station', stationCode: own }), ...items] : items;
 }
 
+/** Where a trimmed address of a session leads: the page of it that someone's work begins with. */
+export const firstPageOf = (viewer: Viewer, place: Place): Route | null =>
+  pagesOf(viewer, place)[0]?.href ?? null;
+
 const pagesOf = (viewer: Viewer, place: Place): NavItem[] => {
   const first = firstOf(viewer);
   return PAGES.filter((page) => page.kind === place.kind && canSome(viewer, page.verb))

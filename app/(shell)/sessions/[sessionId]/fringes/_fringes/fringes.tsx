@@ -1,6 +1,9 @@
 'use client';
 
+import type { Route } from 'next';
+import Link from 'next/link';
 import { useEffect, useMemo, useState } from 'react';
+import { EmptySheet } from '@/app/_ui/empty-sheet';
 import { staveOrder } from '@/app/_ui/stave-order';
 import type { Timeline } from '@/src/data/plan/dto';
 import { unpackPlan } from '@/src/schedule/plan-rows';
@@ -37,6 +40,22 @@ export function Fringes({ timeline }: { timeline: Timeline }) {
   const chosenRow = rows.find(({ scan }) => scan.id === choice.scanId);
   const chosenCell = chosenRow?.cells.find((cell) => keyOf(cell) === choice.pairKey);
 
+  if (plan.scans.length === 0)
+    return (
+      <EmptySheet
+        heading="No scans yet"
+        codes={stations.map(({ code }) => code)}
+        actions={
+          <Link className="btn btn-primary" href={`/sessions/${timeline.session.code}/timeline` as Route}>
+            Open the timeline
+          </Link>
+        }
+      >
+        <p>
+          Which baselines will show fringes is worked out scan by scan. Scans are laid out on the timeline.
+        </p>
+      </EmptySheet>
+    );
   return (
     <>
       <div className="min-h-bar flex flex-wrap items-center gap-x-3.5 border-b border-rule text-table">

@@ -41,7 +41,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
   const [entered, setEntered] = useState<Entered>({ said: null, from: '', until: '' });
   const [why, setWhy] = useState<(typeof REASONS)[number] | null>(null);
   const [words, setWords] = useState('');
-  const { fields, trouble, isSending, say, send: sendOff } = useSending();
+  const { form, fields, trouble, isSending, say, send: sendOff } = useSending();
   const act = useActId();
 
   const { said } = entered;
@@ -82,6 +82,7 @@ export function AnswerForm({ sessionId, offerId, slot, onPreview }: Props) {
 
   return (
     <form
+      ref={form}
       className="slots-form"
       noValidate
       aria-label={isOwn ? 'Your answer' : `Answer for ${code}`}

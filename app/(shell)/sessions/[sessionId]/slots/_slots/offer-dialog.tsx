@@ -19,7 +19,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
   const [note, setNote] = useState('');
   const [answerBy, setAnswerBy] = useState('');
   const [isTicked, setIsTicked] = useState(false);
-  const { fields, trouble, isSending, say, send: sendOff } = useSending();
+  const { form, fields, trouble, isSending, say, send: sendOff } = useSending();
   const act = useActId();
   const isHeld = toFix > 0 && !isTicked;
 
@@ -63,7 +63,7 @@ export function OfferDialog({ board, kind, toFix, onClose }: Props) {
         </>
       }
     >
-      <div className="flex flex-col gap-2.5">
+      <div ref={form} className="flex flex-col gap-2.5">
         <p>
           {kind === 'publish'
             ? 'The plan as it stands now is stored as a version that never changes. Stations whose slot left the hours they gave are asked again, the others are told.'

@@ -30,7 +30,7 @@ export function ChangeForm({
   const [kind, setKind] = useState<ChangeDto['kind']>('resync');
   const [time, setTime] = useState('');
   const [note, setNote] = useState('');
-  const { fields, trouble, isSending, say, send: sendOff } = useSending();
+  const { form, fields, trouble, isSending, say, send: sendOff } = useSending();
   const act = useActId();
 
   const send = async () => {
@@ -68,7 +68,7 @@ export function ChangeForm({
         </>
       }
     >
-      <div className="flex flex-col gap-2.5">
+      <div ref={form} className="flex flex-col gap-2.5">
         <p className="help">Readings before and after it are fitted apart.</p>
         <div>
           <label className="label" htmlFor={kindId}>

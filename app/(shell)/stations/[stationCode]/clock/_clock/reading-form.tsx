@@ -50,7 +50,7 @@ const UNITS: readonly SizeUnit[] = ['µs', 'ns', 'ms', 's'];
 export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onChange: () => void }) {
   const { code } = clock.station;
   const [draft, setDraft] = useState<Draft>(EMPTY);
-  const { fields, trouble, isSending, say, send: sendOff } = useSending();
+  const { form, fields, trouble, isSending, say, send: sendOff } = useSending();
   const [slip, setSlip] = useState<Slip | null>(null);
   const act = useActId();
   const unitId = useId();
@@ -114,6 +114,7 @@ export function ReadingForm({ clock, onChange }: { clock: StationClockDto; onCha
 
   return (
     <form
+      ref={form}
       className="clk-card clk-form"
       aria-labelledby="reading-title"
       noValidate
