@@ -1,9 +1,9 @@
 import type { PlanSettings, PlanSource, PlanStation } from '../schedule/context';
 import { trackNear } from '../schedule/sight';
-import { skyStation } from '../schedule/sky-table';
+import { skyStation } from '../schedule/sky-station';
 import type { SiteFrame } from '../sky/site';
 import { prepareSite, trackElevationDeg, trackHourAngleDeg, type Track } from '../sky/track';
-import { trackWindows } from '../sky/windows';
+import { windowsBySearch } from '../sky/windows-by-search';
 import { normalise360 } from '../units/angle';
 import { SIDEREAL_DAY_SECONDS } from '../units/constants';
 
@@ -16,8 +16,9 @@ const MS_PER_HOUR_ANGLE_DEG = (SIDEREAL_DAY_SECONDS * 1000) / 360;
  * @param startMs   epoch ms, UTC; less than stopMs, by a day at most
  * @returns limits as `skyStation`, inclusive
  *
- * Error   as `visibilityWindows` (tests/outlook/in-view.test.ts); a few µs where no mask comes near
- * Source  elevation is lowest and highest at an end or a culmination; near a mask `trackWindows` decides
+ * Error   as `windowsBySearch` (tests/outlook/in-view.test.ts); a few µs where no mask comes near
+ * Source  elevation is lowest and highest at an end or a culmination; near a mask, or where the mount has limits of its
+ *         own, `windowsBySearch` decides
  */
 export function isInView(
   station: PlanStation,
@@ -30,10 +31,16 @@ export function isInView(
   const track = trackNear(source, startMs);
   const { lowestDeg, highestDeg } = elevationRange(track, prepareSite(station.site), startMs, stopMs);
   if (lowestDeg < limits.minElevationDeg || highestDeg > (limits.maxElevationDeg ?? 90)) return false;
-  if (station.horizon.every(({ elevationDeg }) => elevationDeg <= lowestDeg)) return true;
+  const isClear = station.horizon.every(({ elevationDeg }) => elevationDeg <= lowestDeg);
+  if (isClear && reachesAllRound(station)) return true;
   const span = { start: new Date(startMs), end: new Date(stopMs) };
-  const windows = trackWindows(track, source.position, limits, span);
+  const windows = windowsBySearch(track, limits, span);
   return windows.some(({ start, end }) => start.getTime() <= startMs && end.getTime() >= stopMs);
+}
+
+/** An az–el mount whose cable goes round: its elevations are all that limits it. */
+function reachesAllRound({ mount }: PlanStation): boolean {
+  return mount.kind === 'az-el' && mount.azimuth.maxDeg - mount.azimuth.minDeg >= 360;
 }
 
 function elevationRange(track: Track, site: SiteFrame, startMs: number, stopMs: number) {

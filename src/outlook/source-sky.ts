@@ -1,6 +1,6 @@
 import type { PlanContext } from '../schedule/context';
 import { stationOnMs, type Plan, type ScanId, type StationCode } from '../schedule/plan';
-import { skyStation } from '../schedule/sky-table';
+import { skyStation } from '../schedule/sky-station';
 import { horizonElevationDeg, prepareHorizon } from '../sky/horizon';
 import type { SkyStation } from '../sky/types';
 import { prepareSite, trackAzEl, trackElevationDeg, trackOf } from '../sky/track';

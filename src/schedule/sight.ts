@@ -3,9 +3,9 @@ import { scanPath, type ScanPath } from '../sky/cable';
 import { horizonElevationDeg, prepareHorizon, type Horizon } from '../sky/horizon';
 import { prepareSite, trackAzEl, trackOf, type Track } from '../sky/track';
 import type { AzEl, Geodetic, Interval } from '../sky/types';
-import { trackWindows } from '../sky/windows';
+import { windowsBySearch } from '../sky/windows-by-search';
 import type { PlanContext, PlanSource, PlanStation } from './context';
-import { elevationsOf, skyStation } from './sky-table';
+import { elevationsOf, skyStation } from './sky-station';
 
 /** How near a station comes to its limits while it follows a source. */
 export type Sight = {
@@ -69,7 +69,7 @@ export function sightOf(
  *
  * @returns sorted, disjoint, half-open
  *
- * Error   as `visibilityWindows`
+ * Error   as `windowsBySearch`
  */
 export function upWithin(
   station: PlanStation,
@@ -79,7 +79,7 @@ export function upWithin(
   stopMs: number,
 ): Interval[] {
   const span = { start: new Date(startMs), end: new Date(stopMs) };
-  return trackWindows(trackNear(source, startMs), source.position, skyStation(station, settings), span);
+  return windowsBySearch(trackNear(source, startMs), skyStation(station, settings), span);
 }
 
 /**

@@ -1,8 +1,9 @@
 import { azElBatch } from '../sky/az-el-batch';
-import type { Interval, SkyStation } from '../sky/types';
+import type { Interval } from '../sky/types';
 import { overlap, windowsFor } from '../sky/windows';
 import type { PlanSettings, PlanSource, PlanStation } from './context';
 import type { StationCode } from './plan';
+import { skyStation } from './sky-station';
 
 type Span = readonly [startMs: number, endMs: number];
 
@@ -75,33 +76,6 @@ export function skyTable(
         stations.map((_, least) => overlap(windows[index] ?? [], least + 1).map(spanOf)),
       ]),
     ),
-  };
-}
-
-/**
- * A station's limits for a session: its own, its mount's and the session's lowest elevation, by the stricter.
- */
-export function skyStation(
-  station: PlanStation,
-  settings: Pick<PlanSettings, 'minElevationDeg'>,
-): SkyStation {
-  const { minElevationDeg, maxElevationDeg } = elevationsOf(station);
-  return {
-    site: station.site,
-    minElevationDeg: Math.max(minElevationDeg, settings.minElevationDeg),
-    maxElevationDeg,
-    horizon: station.horizon,
-    mount: station.mount,
-  };
-}
-
-/** What a station's own limits and an az–el mount leave of the elevations. */
-export function elevationsOf({ minElevationDeg, maxElevationDeg, mount }: PlanStation) {
-  if (mount.kind !== 'az-el') return { minElevationDeg, maxElevationDeg };
-  const { minDeg, maxDeg } = mount.elevation;
-  return {
-    minElevationDeg: Math.max(minElevationDeg, minDeg),
-    maxElevationDeg: Math.min(maxElevationDeg, maxDeg),
   };
 }
 

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { isInView } from '@/src/outlook/in-view';
 import type { PlanSource, PlanStation } from '@/src/schedule/context';
-import { skyStation } from '@/src/schedule/sky-table';
+import { skyStation } from '@/src/schedule/sky-station';
 import { azEl } from '@/src/sky/position';
 import { visibilityWindows } from '@/src/sky/windows';
 import { SOURCES, STATIONS } from '../schedule/context-maker';

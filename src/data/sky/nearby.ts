@@ -6,7 +6,7 @@ import { sourceBands } from '../../../db/schema/source-bands';
 import { sources } from '../../../db/schema/sources';
 import { can, type Viewer } from '../../access/policy';
 import { nearby, sharedPart, type Near } from '../../schedule/nearby';
-import { skyStation } from '../../schedule/sky-table';
+import { skyStation } from '../../schedule/sky-station';
 import { spansOf } from '../../sky/interval-set';
 import { windowsFor } from '../../sky/windows';
 import { answer, forbiddenFor, notFound, type Failure } from '../errors';

@@ -4,7 +4,7 @@ import { angleText } from '@/app/_ui/format';
 import type { PlanSettings, PlanSource, PlanStation } from '@/src/schedule/context';
 import { scanStopMs, type PlanSpan, type Scan } from '@/src/schedule/plan';
 import { trackNear } from '@/src/schedule/sight';
-import { skyStation } from '@/src/schedule/sky-table';
+import { skyStation } from '@/src/schedule/sky-station';
 import { prepareSite, trackElevationDeg } from '@/src/sky/track';
 import { utcParts } from '@/src/units/time';
 
