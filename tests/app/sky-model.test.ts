@@ -4,7 +4,7 @@ import { highestOf, pointsIn, rowsOf, togetherIn } from '@/app/(shell)/sessions/
 import { gmstAt, gmstTicks, hourTicks } from '@/app/(shell)/sessions/[sessionId]/sky/_sky/scale';
 import { hoursText, spanTexts, togetherSentence } from '@/app/(shell)/sessions/[sessionId]/sky/_sky/words';
 import type { SkySheet } from '@/src/data/sky/dto';
-import { skyTable } from '@/src/schedule/sky-table';
+import { skyTable } from '@/src/schedule/make-sky-table';
 import { gmstHours } from '@/src/sky/position';
 import { overlap } from '@/src/sky/windows';
 import { makeContext, SOURCES, STATIONS } from '../schedule/context-maker';

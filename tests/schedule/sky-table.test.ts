@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import type { PlanSource, PlanStation } from '@/src/schedule/context';
 import { skyStation } from '@/src/schedule/sky-station';
-import { skyTable, stationsUp, tableElevationDeg } from '@/src/schedule/sky-table';
+import { skyTable } from '@/src/schedule/make-sky-table';
+import { stationsUp, tableElevationDeg } from '@/src/schedule/sky-table';
 import { azEl } from '@/src/sky/position';
 import { visibilityWindows } from '@/src/sky/windows';
 import { MOUNT } from './context-maker';
