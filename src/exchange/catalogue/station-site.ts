@@ -106,25 +106,25 @@ export const MOUNT_WORDS: Readonly<
 > = {
   'az-el': { kind: 'Az–el', short: 'az–el', 1: 'Azimuth', 2: 'Elevation axis', note: null },
   'ha-dec': {
-    kind: 'HA–Dec (equatorial)',
+    kind: 'HA–Dec',
     short: 'equatorial',
     1: 'Hour angle',
     2: 'Declination',
     note: 'Hour angle in degrees, 15° to the hour, positive west of the meridian.',
   },
   'xy-ns': {
-    kind: 'X–Y, lower axis north–south',
+    kind: 'X–Y, north–south',
     short: 'X–Y',
     1: 'X',
     2: 'Y',
-    note: 'Both are 0° at the zenith; X is positive toward east, Y toward north.',
+    note: 'The lower axis lies north–south. Both angles are 0° at the zenith; X is positive toward east, Y toward north.',
   },
   'xy-ew': {
-    kind: 'X–Y, lower axis east–west',
+    kind: 'X–Y, east–west',
     short: 'X–Y',
     1: 'X',
     2: 'Y',
-    note: 'Both are 0° at the zenith; X is positive toward north, Y toward east.',
+    note: 'The lower axis lies east–west. Both angles are 0° at the zenith; X is positive toward north, Y toward east.',
   },
 };
 
