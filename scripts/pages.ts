@@ -132,6 +132,16 @@ export const PAGES: readonly ShownPage[] = [
   },
   { name: 'sky', by: 'scheduler', address: '/sessions/ARC-031/sky', heading: /./ },
   {
+    name: 'sky-start',
+    by: 'scheduler',
+    address: '/sessions/ARC-031/sky',
+    heading: /./,
+    act: async (page) => {
+      await page.getByRole('button', { name: /^Start at/ }).click();
+      await page.getByRole('dialog').waitFor();
+    },
+  },
+  {
     name: 'sky-table',
     by: 'scheduler',
     address: '/sessions/ARC-031/sky',
@@ -205,6 +215,33 @@ export const PAGES: readonly ShownPage[] = [
     address: '/stations/Dp',
     heading: /^Drum Point$/,
     act: press('Retire'),
+  },
+  {
+    name: 'station-paths',
+    by: 'scheduler',
+    address: '/stations/Dp',
+    heading: /^Drum Point$/,
+    act: async (page) => {
+      const choice = page.getByLabel('Path of', { exact: true });
+      for (const label of ['J0530+1331', 'J0827+5217', 'J1058+0133']) await choice.selectOption({ label });
+    },
+  },
+  {
+    name: 'station-mask',
+    by: 'scheduler',
+    address: '/stations/Dp',
+    heading: /^Drum Point$/,
+    act: async (page) => {
+      await press('Edit: Horizon mask')(page);
+      await page
+        .getByLabel('A file with two columns')
+        .setInputFiles({
+          name: 'mask.txt',
+          mimeType: 'text/plain',
+          buffer: Buffer.from('0 12\n90 30\nx 1\n'),
+        });
+      await page.getByRole('dialog').waitFor();
+    },
   },
   { name: 'station-new', by: 'scheduler', address: '/stations/new', heading: /./ },
   { name: 'sources', by: 'scheduler', address: '/sources', heading: /^Sources$/ },

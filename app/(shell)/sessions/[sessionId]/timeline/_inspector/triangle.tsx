@@ -52,7 +52,7 @@ export function Triangle({ scan }: { scan: Scan }) {
       </dl>
       {missing.length > 0 && <p className="help mt-2">No data: {missing.join(', ')}.</p>}
       <p className="help mt-2">
-        From zenith SEFDs (no opacity or gain curve is entered), bandwidth, time, flux and source size
+        From zenith SEFDs, without opacity and gain curve; bandwidth, time, flux and source size
         {mode?.coherenceSeconds ? `, with ${mode.coherenceSeconds} s of coherence` : ''}; clocks from the log,
         against the correlator’s search window.
       </p>
