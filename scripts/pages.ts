@@ -233,13 +233,11 @@ export const PAGES: readonly ShownPage[] = [
     heading: /^Drum Point$/,
     act: async (page) => {
       await press('Edit: Horizon mask')(page);
-      await page
-        .getByLabel('A file with two columns')
-        .setInputFiles({
-          name: 'mask.txt',
-          mimeType: 'text/plain',
-          buffer: Buffer.from('0 12\n90 30\nx 1\n'),
-        });
+      await page.getByLabel('A file with two columns').setInputFiles({
+        name: 'mask.txt',
+        mimeType: 'text/plain',
+        buffer: Buffer.from('0 12\n90 30\nx 1\n'),
+      });
       await page.getByRole('dialog').waitFor();
     },
   },

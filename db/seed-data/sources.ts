@@ -1,20 +1,13 @@
 import type { SourceRole } from '../../src/schedule/context';
 
 type Band = readonly [fluxJy: number, sizeMas: number];
+type Row = readonly [name: string, raDeg: number, decDeg: number, role: SourceRole, at22: Band, at8: Band];
 
 /**
  * Places: ICRF2, in the public domain (USNO), as in tests/reference/sources.json. Roles, flux densities
  * and sizes are invented.
  */
-export const SOURCES: readonly (readonly [
-  name: string,
-  raDeg: number,
-  decDeg: number,
-  role: SourceRole,
-  at22: Band,
-  at8: Band,
-  wantedScans: number,
-])[] = [
+export const SOURCES: readonly (readonly [...Row, wantedScans: number])[] = [
   ['J0530+1331', 82.7350697775, 13.5319859792, 'finder', [1.3, 0.14], [2.2, 0.31], 4],
   ['J0555+3948', 88.8783567146, 39.8136569351, 'finder', [1.9, 0.16], [3.6, 0.35], 8],
   ['J0738+1742', 114.5308072819, 17.7052772862, 'target', [0.46, 0.22], [0.66, 0.46], 8],
@@ -29,14 +22,7 @@ export const SOURCES: readonly (readonly [
 ];
 
 /** In the catalogue alone, around the targets: the first place as above, the others invented to 0.01°. */
-export const OTHER_SOURCES: readonly (readonly [
-  name: string,
-  raDeg: number,
-  decDeg: number,
-  role: SourceRole,
-  at22: Band,
-  at8: Band,
-])[] = [
+export const OTHER_SOURCES: readonly Row[] = [
   ['J1217+3007', 184.4670083, 30.1168433, 'phase-ref', [0.47, 0.18], [0.55, 0.36]],
   ['J1152+3307', 178.1, 33.12, 'phase-ref', [0.19, 0.17], [0.26, 0.35]],
   ['J1146+2452', 176.55, 24.87, 'phase-ref', [0.55, 0.2], [0.61, 0.41]],

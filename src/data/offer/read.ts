@@ -5,6 +5,7 @@ import { offers } from '../../../db/schema/offers';
 import type { PlanMode, PlanSettings } from '../../schedule/context';
 import type { PlanRows } from '../../schedule/plan-rows';
 import type { TimelineSource, TimelineStation } from '../plan/dto';
+import type { OfferFacts } from '../slot/dto';
 
 /** The plan and all that it was judged by, as they were when it was offered. */
 export type StoredSnapshot = {
@@ -15,17 +16,12 @@ export type StoredSnapshot = {
   settings: PlanSettings;
 };
 
-export type Snapshot = StoredSnapshot & {
-  offerId: string;
-  number: number;
-  kind: 'offer' | 'publish';
-  madeAtMs: number;
-  answerByMs: number | null;
-  note: string;
-  checksum: string;
-  /** newest journal row that it holds */
-  seq: number;
-};
+export type Snapshot = StoredSnapshot &
+  OfferFacts & {
+    offerId: string;
+    /** newest journal row that it holds */
+    seq: number;
+  };
 
 /** What the stations were asked or told last; null before the first offer. */
 export async function newestSnapshot(from: Database | Tx, sessionId: string): Promise<Snapshot | null> {

@@ -11,6 +11,7 @@ import { stations } from '../../../db/schema/stations';
 import type { GaussianComponent } from '../../array/structure';
 import type { PlanMode } from '../../schedule/context';
 import { summaryOf } from '../../schedule/mode-channels';
+import type { Component } from '../../exchange/catalogue/source';
 import type { HorizonPoint, Mount } from '../../sky/types';
 import { degToRad } from '../../units/angle';
 import type { TimelineSource, TimelineStation } from './dto';
@@ -126,14 +127,7 @@ export function horizonOf(stored: string): HorizonPoint[] {
   return corners.map(([azimuthDeg, elevationDeg]) => ({ azimuthDeg, elevationDeg }));
 }
 
-type StoredComponent = {
-  fluxJy: number;
-  majorMas: number;
-  minorMas: number;
-  positionAngleDeg: number;
-  eastMas: number;
-  northMas: number;
-};
+type StoredComponent = Omit<Component, 'band'>;
 
 /** The list of components stands for flux density and size where there is one. */
 export function componentsOf(band: typeof sourceBands.$inferSelect): GaussianComponent[] {

@@ -4,26 +4,16 @@ import type { Database, Tx } from '../../../db/client';
 import { offers } from '../../../db/schema/offers';
 import { slotReplies } from '../../../db/schema/slot-replies';
 import { slots } from '../../../db/schema/slots';
-import { answerTo, hoursWithout, type Answer, type Hours } from '../../schedule/slots';
+import { answerTo, hoursWithout, type Hours } from '../../schedule/slots';
 import { oneOf } from '../plan/rows';
+import type { Answered } from './dto';
 
 /** The newest slot of a station and what it last said of it. */
-export type StationAnswer = {
+export type StationAnswer = Answered & {
   sessionId: string;
   station: string;
   offerId: string;
-  startMs: number;
-  endMs: number;
   modeIds: string[];
-  answer: Answer;
-  /** the hours it gave */
-  hours: Hours[];
-  /** the hours of its slot that it cannot */
-  without: Hours[];
-  reason: string;
-  answeredAtMs: number | null;
-  role: string | null;
-  isOnBehalf: boolean;
 };
 
 type Row = {

@@ -14,11 +14,8 @@ export type SlotWord = {
   isOnBehalf: boolean;
 };
 
-export type SlotDto = {
-  stationCode: string;
-  stationName: string;
-  timeZone: string;
-  longitudeDeg: number;
+/** A slot's hours, and how the station's newest word stands to it. */
+export type Answered = {
   startMs: number;
   endMs: number;
   answer: Answer;
@@ -30,6 +27,13 @@ export type SlotDto = {
   answeredAtMs: number | null;
   role: string | null;
   isOnBehalf: boolean;
+};
+
+export type SlotDto = Answered & {
+  stationCode: string;
+  stationName: string;
+  timeZone: string;
+  longitudeDeg: number;
   /** its scans in the offer: start, stop, number, source */
   scans: { startMs: number; stopMs: number; number: string; source: string }[];
   /** a nodding group counts once */
@@ -43,20 +47,20 @@ export type SlotDto = {
   isOwn: boolean;
 };
 
+/** What was put to the stations, and when. */
+export type OfferFacts = {
+  number: number;
+  kind: 'offer' | 'publish';
+  madeAtMs: number;
+  answerByMs: number | null;
+  note: string;
+  checksum: string;
+};
+
 export type SlotBoard = {
   session: SessionHead;
   /** null before the first offer */
-  offer: {
-    id: string;
-    number: number;
-    kind: 'offer' | 'publish';
-    madeAtMs: number;
-    answerByMs: number | null;
-    note: string;
-    checksum: string;
-    /** whether the draft has moved on since */
-    isBehind: boolean;
-  } | null;
+  offer: (OfferFacts & { id: string; /** whether the draft has moved on since */ isBehind: boolean }) | null;
   span: { startMs: number; endMs: number };
   slots: SlotDto[];
   /** stations of the session without a scan in the offer */
