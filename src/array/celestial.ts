@@ -1,3 +1,4 @@
+import { degToRad } from '../units/angle';
 import { EARTH_ROTATION_RAD_PER_S } from '../units/constants';
 import { add, cross, dot, rotateBack, scale, turnAboutZ } from '../units/vector';
 import type { Vector3 } from '../units/vector';
@@ -43,8 +44,16 @@ export function celestialBaseline(
   return { source: catalogue, vector: carried(ofDate), velocity: carried(velocityOfDate) };
 }
 
-/** Turns a vector by the smallest rotation that carries one unit vector into another. */
-function carry(v: Vector3, from: Vector3, to: Vector3): Vector3 {
+/** Axes of a source on ICRS axes: u east, v north, w toward it. Source: TMS eq. 4.1. */
+export function uvwAxes(source: SkyPosition): readonly [Vector3, Vector3, Vector3] {
+  const toward = catalogueDirection(source);
+  const [ra, dec] = [degToRad(source.raDeg), degToRad(source.decDeg)];
+  const [sinRa, cosRa, sinDec, cosDec] = [Math.sin(ra), Math.cos(ra), Math.sin(dec), Math.cos(dec)];
+  return [[-sinRa, cosRa, 0], [-sinDec * cosRa, -sinDec * sinRa, cosDec], toward];
+}
+
+/** Turns a vector by the smallest rotation that carries one unit vector into another. Source: Rodrigues. */
+export function carry(v: Vector3, from: Vector3, to: Vector3): Vector3 {
   const axis = cross(from, to);
   const once = cross(axis, v);
   return add(v, add(once, scale(cross(axis, once), 1 / (1 + dot(from, to)))));

@@ -34,3 +34,20 @@ export function geometricDelay(
     rate: -dot(seen.velocity, seen.source) / SPEED_OF_LIGHT,
   };
 }
+
+/**
+ * Fringe rate of a baseline before the correlator takes it out.
+ *
+ * @param rate   of the delay, s/s, as geometricDelay gives it
+ * @param skyHz  sky frequency > 0
+ * @returns Hz, with the sign of the rate; at most 3.1·10⁻⁶ ν between two stations on the ground
+ * @throws RangeError if an input is not finite or out of range (programmer error)
+ *
+ * Error   rounding
+ * Source  ν dτ/dt (TMS ch. 4)
+ */
+export function fringeRateHz(rate: number, skyHz: number): number {
+  if (!Number.isFinite(rate)) throw new RangeError(`Not a rate: ${rate}`);
+  if (!(skyHz > 0 && Number.isFinite(skyHz))) throw new RangeError(`Not a frequency: ${skyHz}`);
+  return rate * skyHz;
+}

@@ -1,9 +1,8 @@
-import { degToRad } from '../units/angle';
-import { dot } from '../units/vector';
+import { rotate } from '../units/vector';
 import type { RotationOptions } from '../sky/position';
 import type { Itrf, SkyPosition } from '../sky/types';
 import { baselineVector } from './baseline';
-import { celestialBaseline } from './celestial';
+import { celestialBaseline, uvwAxes } from './celestial';
 
 /** metres */
 export type Uvw = { u: number; v: number; w: number };
@@ -35,13 +34,7 @@ export function baselineUvw(
   at: Date,
   opts: RotationOptions = {},
 ): Uvw {
-  const { vector, source: direction } = celestialBaseline(baselineVector(first, second), source, at, opts);
-  const ra = degToRad(source.raDeg);
-  const dec = degToRad(source.decDeg);
-  const [sinRa, cosRa, sinDec, cosDec] = [Math.sin(ra), Math.cos(ra), Math.sin(dec), Math.cos(dec)];
-  return {
-    u: dot(vector, [-sinRa, cosRa, 0]),
-    v: dot(vector, [-sinDec * cosRa, -sinDec * sinRa, cosDec]),
-    w: dot(vector, direction),
-  };
+  const { vector } = celestialBaseline(baselineVector(first, second), source, at, opts);
+  const [u, v, w] = rotate(uvwAxes(source), vector);
+  return { u, v, w };
 }

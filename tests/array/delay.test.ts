@@ -1,6 +1,8 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { geometricDelay } from '@/src/array/delay';
+import { fringeRateHz, geometricDelay } from '@/src/array/delay';
 import { baselineUvw } from '@/src/array/uvw';
+import { geodeticToItrf } from '@/src/sky/site';
 import { EARTH_ROTATION_RAD_PER_S, SPEED_OF_LIGHT } from '@/src/units/constants';
 import delay from '../reference/delay.json';
 
@@ -61,5 +63,58 @@ describe('geometricDelay', () => {
       expect(there.seconds + back.seconds).toBeCloseTo(0, 15);
       expect(there.rate + back.rate).toBeCloseTo(0, 18);
     }
+  });
+
+  it('closes around a triangle, delay and rate', () => {
+    const place = fc
+      .record({
+        latitudeDeg: fc.double({ min: -90, max: 90, noNaN: true }),
+        longitudeDeg: fc.double({ min: -180, max: 180, noNaN: true }),
+        heightM: fc.double({ min: 0, max: 5000, noNaN: true }),
+      })
+      .map(geodeticToItrf);
+    const anySource = fc.record({
+      raDeg: fc.double({ min: 0, max: 360, noNaN: true }),
+      decDeg: fc.double({ min: -90, max: 90, noNaN: true }),
+    });
+    const instant = fc.integer({ min: Date.UTC(2026, 0), max: Date.UTC(2040, 0) });
+    fc.assert(
+      fc.property(place, place, place, anySource, instant, (a, b, c, source, ms) => {
+        const at = new Date(ms);
+        const sides = [
+          geometricDelay(a, b, source, at),
+          geometricDelay(b, c, source, at),
+          geometricDelay(c, a, source, at),
+        ];
+        const sum = (key: 'seconds' | 'rate') => sides.reduce((total, side) => total + side[key], 0);
+        expect(Math.abs(sum('seconds'))).toBeLessThan(1e-16);
+        expect(Math.abs(sum('rate'))).toBeLessThan(1e-20);
+      }),
+    );
+  });
+
+  it('is nil for two stations at one place, and refuses a place that is none', () => {
+    const one = { x: 6e6, y: 1e6, z: 0 };
+    const [source, at] = [{ raDeg: 187, decDeg: 12 }, new Date('2029-03-20T18:00:00Z')];
+    const { seconds, rate } = geometricDelay(one, one, source, at);
+    expect([Math.abs(seconds), Math.abs(rate)]).toEqual([0, 0]);
+    expect(() => geometricDelay(one, { ...one, z: NaN }, source, at)).toThrow(RangeError);
+    expect(() => geometricDelay(one, one, { raDeg: 0, decDeg: 91 }, at)).toThrow(RangeError);
+    expect(() => geometricDelay(one, one, source, new Date(NaN))).toThrow(RangeError);
+  });
+});
+
+describe('fringeRateHz', () => {
+  it('is the delay’s rate in turns of the sky frequency, at most 3.1·10⁻⁶ of it on the ground', () => {
+    // two stations on opposite sides of the equator, source in the equator at right angles: 2 ω a / c
+    const fastest = (2 * EARTH_ROTATION_RAD_PER_S * 6_378_137) / SPEED_OF_LIGHT;
+    expect(fastest).toBeLessThan(3.11e-6);
+    expect(fringeRateHz(fastest, 43e9)).toBeCloseTo(fastest * 43e9, 6);
+    expect(fringeRateHz(-1e-6, 5e9)).toBe(-5000);
+  });
+
+  it('refuses what is no rate and no frequency', () => {
+    expect(() => fringeRateHz(NaN, 5e9)).toThrow(RangeError);
+    expect(() => fringeRateHz(1e-6, 0)).toThrow(RangeError);
   });
 });
