@@ -1,5 +1,6 @@
 import { firstPointing, slewBetween, startPointing } from '../sky/slew';
 import { firstAxis, secondAxis } from '../sky/axes';
+import { leavesFirstAtMs, leavesSecondAt, tooFastAtMs } from '../sky/cable';
 import { prepareSite, trackAzEl } from '../sky/track';
 import type { AzEl, Interval, Pointing } from '../sky/types';
 import type { PlanContext, PlanSource, PlanStation } from './context';
@@ -247,14 +248,12 @@ function staysOn(
 ): boolean {
   if (previous.sourceId !== source.id) return false;
   if (on.startMs <= previous.stopMs) return on.startMs === previous.stopMs;
-  const frame = prepareSite(station.site);
-  const track = trackNear(source, previous.stopMs);
-  const path = axisPath(station, (atMs) => trackAzEl(track, frame, atMs), previous.stopMs, on.startMs);
-  const { minDeg, maxDeg } = secondAxis(station.mount);
+  const path = axisPath(station, trackNear(source, previous.stopMs), previous.stopMs, on.startMs);
   return (
     Math.abs(from.motorAzimuthDeg + path.endTurnDeg - reached.motorAzimuthDeg) < SAME_PLACE_DEG &&
-    path.leavesSecondAt(minDeg, maxDeg) === null &&
-    path.leavesRangeAtMs(station.mount, from.motorAzimuthDeg) === null
+    leavesSecondAt(path, secondAxis(station.mount)) === null &&
+    leavesFirstAtMs(path, firstAxis(station.mount), from.motorAzimuthDeg) === null &&
+    tooFastAtMs(path, firstAxis(station.mount).rateDegPerS) === null
   );
 }
 

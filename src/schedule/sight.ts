@@ -1,5 +1,5 @@
-import { axisAngles } from '../sky/axes';
-import { scanPath, type ScanPath } from '../sky/cable';
+import { axisFrame } from '../sky/axis-frame';
+import { scanEnd, scanPath, type ScanPath } from '../sky/cable';
 import { horizonElevationDeg, prepareHorizon, type Horizon } from '../sky/horizon';
 import { prepareSite, trackAzEl, trackOf, type Track } from '../sky/track';
 import type { AzEl, Geodetic, Interval } from '../sky/types';
@@ -49,7 +49,7 @@ export function sightOf(
 ): Sight {
   const at = directionAt(station, source, startMs);
   const limits = limitsOf(station, settings);
-  const path = axisPath(station, at, startMs, stopMs);
+  const path = axisPath(station, trackNear(source, startMs), startMs, stopMs);
   let worst: Sight['worst'] | null = null;
   let minElevationDeg = Infinity;
   let outFromMs: number | null = null;
@@ -83,19 +83,19 @@ export function upWithin(
 }
 
 /**
- * The way of a station's axes while it follows a direction.
+ * The way of a station's axes while it follows a source.
  *
- * @param at  azimuth and elevation at an instant
+ * @param track  of the source; holds the span, or ends less than a day from it
  * @throws RangeError if the span is empty (programmer error)
  */
 export function axisPath(
   { mount, site }: PlanStation,
-  at: (atMs: number) => AzEl,
+  track: Track,
   startMs: number,
   stopMs: number,
 ): ScanPath {
-  const angles = (atMs: number) => axisAngles(mount.kind, site.latitudeDeg, at(atMs));
-  return scanPath(angles, { start: new Date(startMs), end: new Date(stopMs) });
+  const axes = axisFrame(mount.kind, frameOf(site));
+  return scanPath(axes, track, scanEnd(track, startMs), scanEnd(track, stopMs));
 }
 
 /**
@@ -120,10 +120,15 @@ const frames = new WeakMap<Geodetic, ReturnType<typeof prepareSite>>();
 const horizons = new WeakMap<PlanStation, { horizon: Horizon | null }>();
 
 function directionAt(station: PlanStation, source: PlanSource, startMs: number): (atMs: number) => AzEl {
-  const frame = frames.get(station.site) ?? prepareSite(station.site);
-  frames.set(station.site, frame);
+  const frame = frameOf(station.site);
   const track = trackNear(source, startMs);
   return (atMs) => trackAzEl(track, frame, atMs);
+}
+
+function frameOf(site: Geodetic) {
+  const frame = frames.get(site) ?? prepareSite(site);
+  frames.set(site, frame);
+  return frame;
 }
 
 type Limits = { lowestDeg: number; highestDeg: number; horizon: Horizon | null };

@@ -105,6 +105,7 @@ describe('an equatorial mount', () => {
     // one degree of hour angle is 3 min 59 s
     expect(found).toEqual({
       impossible: 'would run into the hour angle limit at 18:03:59',
+      kind: 'end-of-range',
       limit: 'first',
       atMs: expect.closeTo(START + 239_300, -3) as number,
     });
