@@ -86,6 +86,50 @@ describe('slewMotion', () => {
     expect(motion).toMatchObject({ motorAzimuthDeg: 580 });
   });
 
+  it('takes as long back as there, and no longer than by way of a third place', () => {
+    const place = fc.record({
+      az: fc.double({ min: -268, max: 267, noNaN: true }),
+      el: fc.double({ min: 5, max: 88, noNaN: true }),
+    });
+    const light = mountNamed('light');
+    const { azimuth, elevation } = light;
+    type Place = { az: number; el: number };
+    // on given turns: of the turns that show a direction the nearer may be another
+    const seconds = (a: Place, b: Place) =>
+      Math.max(axisSeconds(b.az - a.az, azimuth), axisSeconds(b.el - a.el, elevation));
+    fc.assert(
+      fc.property(place, place, place, (a, b, c) => {
+        const motion = slewMotion(light, at(a.az, a.el), { azimuthDeg: b.az, elevationDeg: b.el });
+        if ('impossible' in motion) throw new Error(motion.impossible);
+        expect(motion.seconds).toBeLessThanOrEqual(seconds(a, b) + light.settleSeconds);
+        const back = slewMotion(
+          light,
+          { ...at(motion.motorAzimuthDeg, b.el), motorAzimuthDeg: motion.motorAzimuthDeg },
+          { azimuthDeg: a.az, elevationDeg: a.el },
+        );
+        expect(back).toMatchObject({ seconds: expect.toSatisfy((s: number) => s <= motion.seconds + 1e-9) });
+        expect(seconds(a, c)).toBeLessThanOrEqual(seconds(a, b) + seconds(b, c));
+      }),
+    );
+  });
+
+  it('refuses what is no place and no mount, and reaches zenith and nadir where the mount does', () => {
+    const light = mountNamed('light');
+    const to = { azimuthDeg: 10, elevationDeg: 40 };
+    expect(() => slewMotion(light, at(NaN, 40), to)).toThrow(RangeError);
+    expect(() => slewMotion(light, at(0, 40), { ...to, azimuthDeg: Infinity })).toThrow(RangeError);
+    expect(() => slewMotion(light, at(0, 40), { ...to, elevationDeg: NaN })).toThrow(RangeError);
+    const azimuth = { ...light.azimuth, minDeg: 90, maxDeg: -90 };
+    expect(() => slewMotion({ ...light, azimuth }, at(0, 40), to)).toThrow(RangeError);
+    expect(() => slewMotion({ ...light, settleSeconds: -1 }, at(0, 40), to)).toThrow(RangeError);
+    const elevation = { ...light.elevation, minDeg: -90, maxDeg: 90 };
+    for (const elevationDeg of [-90, 90]) {
+      const seconds = axisSeconds(elevationDeg - 40, elevation);
+      const motion = slewMotion({ ...light, elevation }, at(10, 40), { azimuthDeg: 10, elevationDeg });
+      expect(motion).toEqual({ seconds, motorAzimuthDeg: 10 });
+    }
+  });
+
   it('takes no time, not even to settle, when nothing moves', () => {
     const medium = mountNamed('medium');
     expect(slewMotion(medium, at(30, 40), { azimuthDeg: 30, elevationDeg: 40 })).toEqual({
@@ -112,6 +156,18 @@ describe('axisSeconds', () => {
     );
   });
 
+  it('is no longer than two ways one after the other, however they lead', () => {
+    const some = fc.double({ min: 0.001, max: 10, noNaN: true });
+    const place = fc.double({ min: -270, max: 450, noNaN: true });
+    fc.assert(
+      fc.property(some, some, place, place, place, (rateDegPerS, accelDegPerS2, a, b, c) => {
+        const seconds = (from: number, to: number) => axisSeconds(to - from, { rateDegPerS, accelDegPerS2 });
+        expect(seconds(a, c)).toBeLessThanOrEqual((seconds(a, b) + seconds(b, c)) * (1 + 1e-12));
+        expect(seconds(a, c)).toBe(seconds(c, a));
+      }),
+    );
+  });
+
   it('agrees with a speed that is integrated in small steps', () => {
     const axis = { rateDegPerS: 0.8, accelDegPerS2: 0.3 };
     for (const distance of [0.4, 2, 2.2, 35]) {
@@ -129,6 +185,8 @@ describe('axisSeconds', () => {
   it('refuses a drive that does not move', () => {
     expect(() => axisSeconds(1, { rateDegPerS: 0, accelDegPerS2: 1 })).toThrow(RangeError);
     expect(() => axisSeconds(NaN, { rateDegPerS: 1, accelDegPerS2: 1 })).toThrow(RangeError);
+    expect(() => axisSeconds(1, { rateDegPerS: Infinity, accelDegPerS2: 1 })).toThrow(RangeError);
+    expect(() => axisSeconds(1, { rateDegPerS: 1, accelDegPerS2: NaN })).toThrow(RangeError);
   });
 });
 
@@ -241,6 +299,30 @@ describe('slews along scans', () => {
     function wrapped(start: Date): number {
       return azEl(south, site, start).azimuthDeg; // about 160, the middle of −90…450 is 180
     }
+  });
+
+  it('say when azimuth would have to turn too fast near the zenith', () => {
+    const zenithal = { raDeg: 100, decDeg: 50.1 };
+    const slow = {
+      site,
+      mount: {
+        ...mount,
+        azimuth: { ...mount.azimuth, rateDegPerS: 0.3 },
+        elevation: { ...mount.elevation, maxDeg: 90 },
+      },
+    };
+    const upperMs = highestMinute(zenithal);
+    const scan = { start: new Date(upperMs - 1_800_000), end: new Date(upperMs + 1_800_000) };
+    const answer = firstPointing(slow, { source: zenithal, scan });
+    if (!('impossible' in answer) || answer.atMs === null) throw new Error('not too fast');
+    expect(answer).toMatchObject({ kind: 'too-fast', limit: 'first' });
+    expect(answer.impossible).toMatch(/^would be too slow in azimuth to follow at \d\d:\d\d:\d\d$/);
+    const azimuthAt = (ms: number) => azEl(zenithal, site, new Date(ms)).azimuthDeg;
+    const rateAt = (ms: number) => Math.abs(normalise180(azimuthAt(ms + 1000) - azimuthAt(ms - 1000))) / 2;
+    expect(rateAt(answer.atMs)).toBeCloseTo(0.3, 2);
+    expect(rateAt(answer.atMs - 30_000)).toBeLessThan(0.3);
+    const quick = { ...slow, mount: { ...slow.mount, azimuth: { ...mount.azimuth, rateDegPerS: 6 } } };
+    expect(firstPointing(quick, { source: zenithal, scan })).not.toHaveProperty('impossible');
   });
 
   it('refuse a scan without length', () => {
