@@ -1,8 +1,7 @@
-import { firstPointing, slewBetween, startPointing } from '../sky/slew';
-import { firstAxis, secondAxis } from '../sky/axes';
+import { motionTo, startPointing, type Held } from '../sky/slew';
+import { axisAngles, firstAxis, secondAxis } from '../sky/axes';
 import { leavesFirstAtMs, leavesSecondAt, tooFastAtMs } from '../sky/cable';
-import { prepareSite, trackAzEl } from '../sky/track';
-import type { AzEl, Interval, Pointing } from '../sky/types';
+import type { AzEl } from '../sky/types';
 import type { PlanContext, PlanSource, PlanStation } from './context';
 import {
   compareScans,
@@ -13,7 +12,7 @@ import {
   type ScanStation,
   type StationCode,
 } from './plan';
-import { axisPath, sightOf, trackNear, type Sight } from './sight';
+import { axisPath, directionAt, sightOf, trackNear, type Sight } from './sight';
 
 /** One scan at one station, and the way there from the scan before. */
 export type PathLeg = {
@@ -181,34 +180,33 @@ function wayTo(
   sight: Sight,
   previous: PathLeg | null,
 ): Way {
-  const scan: Interval = { start: new Date(on.startMs), end: new Date(on.stopMs) };
-  const target = { source: source.position, scan, track: trackNear(source, on.startMs) };
   const gapSeconds = previous ? (on.startMs - previous.stopMs) / 1000 : null;
-  if (!previous) {
-    const first = firstPointing(station, target);
-    if ('impossible' in first) return impossible(station, sight, null, gapSeconds, first);
-    return { ...still(first, sight), gapSeconds };
-  }
-  const from: Pointing = { ...previous.stopAzEl, motorAzimuthDeg: previous.motorStopDeg };
-  const slew = slewBetween(station, from, target);
-  if ('impossible' in slew) return impossible(station, sight, previous, gapSeconds, slew);
-  const seconds = staysOn(station, source, previous, from, on, slew.pointing) ? 0 : slew.seconds;
-  const arriveMs = previous.stopMs + seconds * 1000;
-  const arrive = trackAzEl(target.track, prepareSite(station.site), arriveMs);
+  const motion = motionTo(station.mount, sight.path, previous && heldAfter(station, previous));
+  if ('impossible' in motion) return impossible(station, sight, previous, gapSeconds, motion);
+  const way = { ...still(motion.motorDeg, sight), gapSeconds };
+  if (!previous) return way;
+  const seconds = staysOn(station, source, previous, on, motion.motorDeg) ? 0 : motion.seconds;
+  const arrive = directionAt(station, source, on.startMs)(previous.stopMs + seconds * 1000);
   return {
-    ...still(slew.pointing, sight),
+    ...way,
     slewSeconds: seconds,
-    gapSeconds,
     spareSeconds: gapSeconds === null ? null : gapSeconds - seconds,
-    azimuthMoveDeg: slew.pointing.motorAzimuthDeg - from.motorAzimuthDeg,
+    azimuthMoveDeg: motion.motorDeg - previous.motorStopDeg,
     arriveElevationDeg: arrive.elevationDeg,
   };
 }
 
-function still(pointing: Pointing, sight: Sight): Way {
+function heldAfter({ mount, site }: PlanStation, { motorStopDeg, stopAzEl }: PathLeg): Held {
   return {
-    motorStartDeg: pointing.motorAzimuthDeg,
-    motorStopDeg: pointing.motorAzimuthDeg + sight.path.endTurnDeg,
+    motorDeg: motorStopDeg,
+    secondDeg: axisAngles(mount.kind, site.latitudeDeg, stopAzEl).secondDeg,
+  };
+}
+
+function still(motorDeg: number, sight: Sight): Way {
+  return {
+    motorStartDeg: motorDeg,
+    motorStopDeg: motorDeg + sight.path.endTurnDeg,
     slewSeconds: null,
     gapSeconds: null,
     spareSeconds: null,
@@ -230,7 +228,7 @@ function impossible(
   const motorDeg =
     'impossible' in start ? (previous?.motorStopDeg ?? middleOf(station)) : start.motorAzimuthDeg;
   return {
-    ...still({ ...sight.startAzEl, motorAzimuthDeg: motorDeg }, sight),
+    ...still(motorDeg, sight),
     gapSeconds,
     impossible: why.impossible,
     isElevationOnly: why.limit === 'second' && station.mount.kind === 'az-el',
@@ -242,17 +240,16 @@ function staysOn(
   station: PlanStation,
   source: PlanSource,
   previous: PathLeg,
-  from: Pointing,
   on: { startMs: number },
-  reached: Pointing,
+  reachedMotorDeg: number,
 ): boolean {
   if (previous.sourceId !== source.id) return false;
   if (on.startMs <= previous.stopMs) return on.startMs === previous.stopMs;
   const path = axisPath(station, trackNear(source, previous.stopMs), previous.stopMs, on.startMs);
   return (
-    Math.abs(from.motorAzimuthDeg + path.endTurnDeg - reached.motorAzimuthDeg) < SAME_PLACE_DEG &&
+    Math.abs(previous.motorStopDeg + path.endTurnDeg - reachedMotorDeg) < SAME_PLACE_DEG &&
     leavesSecondAt(path, secondAxis(station.mount)) === null &&
-    leavesFirstAtMs(path, firstAxis(station.mount), from.motorAzimuthDeg) === null &&
+    leavesFirstAtMs(path, firstAxis(station.mount), previous.motorStopDeg) === null &&
     tooFastAtMs(path, firstAxis(station.mount).rateDegPerS) === null
   );
 }

@@ -119,7 +119,16 @@ const tracks = new WeakMap<PlanSource, Map<number, Track>>();
 const frames = new WeakMap<Geodetic, ReturnType<typeof prepareSite>>();
 const horizons = new WeakMap<PlanStation, { horizon: Horizon | null }>();
 
-function directionAt(station: PlanStation, source: PlanSource, startMs: number): (atMs: number) => AzEl {
+/**
+ * Where a station sees a source.
+ *
+ * @param startMs  within a day of the instants asked for
+ */
+export function directionAt(
+  station: PlanStation,
+  source: PlanSource,
+  startMs: number,
+): (atMs: number) => AzEl {
   const frame = frameOf(station.site);
   const track = trackNear(source, startMs);
   return (atMs) => trackAzEl(track, frame, atMs);
