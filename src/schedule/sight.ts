@@ -1,4 +1,4 @@
-import { axisFrame } from '../sky/axis-frame';
+import { axisFrame, type AxisFrame } from '../sky/axis-frame';
 import { scanEnd, scanPath, type ScanPath } from '../sky/cable';
 import { horizonElevationDeg, prepareHorizon, type Horizon } from '../sky/horizon';
 import { prepareSite, trackAzEl, trackOf, type Track } from '../sky/track';
@@ -50,18 +50,21 @@ export function sightOf(
   const at = directionAt(station, source, startMs);
   const limits = limitsOf(station, settings);
   const path = axisPath(station, trackNear(source, startMs), startMs, stopMs);
-  let worst: Sight['worst'] | null = null;
-  let minElevationDeg = Infinity;
-  let outFromMs: number | null = null;
-  for (const atMs of instants(startMs, stopMs, limits.horizon ? MASK_STEP_MS : STEP_MS)) {
-    const direction = at(atMs);
-    const room = roomAt(limits, direction);
+  const startAzEl = at(startMs);
+  let worst = roomAt(limits, startAzEl, startMs);
+  let minElevationDeg = startAzEl.elevationDeg;
+  let outFromMs = worst.marginDeg < 0 ? startMs : null;
+  let stopAzEl = startAzEl;
+  const stepMs = limits.horizon ? MASK_STEP_MS : STEP_MS;
+  for (let atMs = startMs; atMs < stopMs;) {
+    atMs = Math.min(atMs + stepMs, stopMs);
+    stopAzEl = at(atMs);
+    const room = roomAt(limits, stopAzEl, atMs);
     if (room.marginDeg < 0) outFromMs ??= atMs;
-    if (!worst || room.marginDeg < worst.marginDeg) worst = { ...room, atMs };
-    minElevationDeg = Math.min(minElevationDeg, direction.elevationDeg);
+    if (room.marginDeg < worst.marginDeg) worst = room;
+    minElevationDeg = Math.min(minElevationDeg, stopAzEl.elevationDeg);
   }
-  if (!worst) throw new RangeError('A view has a length');
-  return { startAzEl: at(startMs), stopAzEl: at(stopMs), minElevationDeg, worst, outFromMs, path };
+  return { startAzEl, stopAzEl, minElevationDeg, worst, outFromMs, path };
 }
 
 /**
@@ -88,13 +91,9 @@ export function upWithin(
  * @param track  of the source; holds the span, or ends less than a day from it
  * @throws RangeError if the span is empty (programmer error)
  */
-export function axisPath(
-  { mount, site }: PlanStation,
-  track: Track,
-  startMs: number,
-  stopMs: number,
-): ScanPath {
-  const axes = axisFrame(mount.kind, frameOf(site));
+export function axisPath(station: PlanStation, track: Track, startMs: number, stopMs: number): ScanPath {
+  const axes = frames.get(station) ?? axisFrame(station.mount.kind, frameOf(station.site));
+  frames.set(station, axes);
   return scanPath(axes, track, scanEnd(track, startMs), scanEnd(track, stopMs));
 }
 
@@ -116,7 +115,8 @@ export function trackNear(source: PlanSource, atMs: number): Track {
 }
 
 const tracks = new WeakMap<PlanSource, Map<number, Track>>();
-const frames = new WeakMap<Geodetic, ReturnType<typeof prepareSite>>();
+const frames = new WeakMap<PlanStation, AxisFrame>();
+const sites = new WeakMap<Geodetic, ReturnType<typeof prepareSite>>();
 const horizons = new WeakMap<PlanStation, { horizon: Horizon | null }>();
 
 /**
@@ -135,8 +135,8 @@ export function directionAt(
 }
 
 function frameOf(site: Geodetic) {
-  const frame = frames.get(site) ?? prepareSite(site);
-  frames.set(site, frame);
+  const frame = sites.get(site) ?? prepareSite(site);
+  sites.set(site, frame);
   return frame;
 }
 
@@ -153,7 +153,7 @@ function limitsOf(station: PlanStation, settings: PlanContext['settings']): Limi
   };
 }
 
-function roomAt(limits: Limits, { azimuthDeg, elevationDeg }: AzEl): Omit<Sight['worst'], 'atMs'> {
+function roomAt(limits: Limits, { azimuthDeg, elevationDeg }: AzEl, atMs: number): Sight['worst'] {
   const maskDeg = limits.horizon ? horizonElevationDeg(limits.horizon, azimuthDeg) : -90;
   const isMask = maskDeg > limits.lowestDeg;
   const floorDeg = isMask ? maskDeg : limits.lowestDeg;
@@ -161,11 +161,6 @@ function roomAt(limits: Limits, { azimuthDeg, elevationDeg }: AzEl): Omit<Sight[
   const above = limits.highestDeg - elevationDeg;
   // close to the highest is no matter until it is passed
   if (above < 0 && above < below)
-    return { marginDeg: above, elevationDeg, limitDeg: limits.highestDeg, side: 'high' };
-  return { marginDeg: below, elevationDeg, limitDeg: floorDeg, side: isMask ? 'mask' : 'low' };
-}
-
-function* instants(startMs: number, stopMs: number, stepMs: number): Generator<number> {
-  for (let ms = startMs; ms < stopMs; ms += stepMs) yield ms;
-  yield stopMs;
+    return { marginDeg: above, elevationDeg, limitDeg: limits.highestDeg, side: 'high', atMs };
+  return { marginDeg: below, elevationDeg, limitDeg: floorDeg, side: isMask ? 'mask' : 'low', atMs };
 }
