@@ -40,7 +40,7 @@ export type PathLeg = {
   /** negative where the scan before is not over yet */
   gapSeconds: number | null;
   spareSeconds: number | null;
-  /** the way the dish turns, + clockwise from above */
+  /** the way the first axis turns; of az–el, + clockwise from above */
   azimuthMoveDeg: number | null;
   /** elevation of the source when the dish arrives */
   arriveElevationDeg: number | null;

@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { db } from '@/db/client';
 import { scanOutcomes } from '@/db/schema/scan-outcomes';
 import { sessions } from '@/db/schema/sessions';
+import { stations } from '@/db/schema/stations';
 import { eq } from 'drizzle-orm';
 import { readDesk } from '@/src/data/desk/read';
 import { offerPlan } from '@/src/data/offer/write';
@@ -61,7 +62,7 @@ describe('the desk of the demo', () => {
     expect(second?.fromStopMs).toBe(run?.scans[0]?.stopMs);
     expect(second?.startElDeg).toBeGreaterThan(5);
     for (const { motorStartDeg, turn, startAzDeg } of run?.scans ?? [])
-      expect(motorStartDeg - 360 * turn).toBeCloseTo(startAzDeg, 6);
+      expect(motorStartDeg - 360 * (turn ?? NaN)).toBeCloseTo(startAzDeg, 6);
   });
 
   it('is for its own operators and for schedulers', async () => {
@@ -203,5 +204,23 @@ describe('how a scan went', () => {
     expect(await sayOutcome(await operatorOf('Af'), closed.id, 'Af', body)).toMatchObject({
       code: 'conflict',
     });
+  });
+});
+
+describe('the desk of an equatorial mount', () => {
+  it('has the hour angle of each scan, in the plan as it was published, and no turn of a cable', async () => {
+    await db()
+      .update(stations)
+      .set({ mountKind: 'ha-dec', axis1MinDeg: -180, axis1MaxDeg: 180, axis2MinDeg: -40, axis2MaxDeg: 90 })
+      .where(eq(stations.code, 'Bm'));
+    // a desk shows one run
+    await db().update(sessions).set({ state: 'cancelled' });
+    const { id } = await running();
+    const read = await readDesk(await operatorOf('Bm'), 'Bm');
+    if (!read.ok || read.desk.run?.sessionId !== id) throw new Error('not the run that was offered');
+    const [first, second] = read.desk.run.scans;
+    expect(first).toMatchObject({ motorAxis: 'hour angle', turn: null, impossible: null });
+    // 80 minutes later, at 15.04° an hour
+    expect((second?.motorStartDeg ?? NaN) - (first?.motorStartDeg ?? NaN)).toBeCloseTo(20.05, 1);
   });
 });

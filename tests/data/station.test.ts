@@ -4,6 +4,7 @@ import { db } from '@/db/client';
 import { sessionStations } from '@/db/schema/session-stations';
 import { stations } from '@/db/schema/stations';
 import type { Role } from '@/src/access/policy';
+import { readStations } from '@/src/data/plan/context';
 import { listStationRows, readStation } from '@/src/data/station/read';
 import { addStation, keepStationBlock, retireStation } from '@/src/data/station/write';
 import type { StationBlocks } from '@/src/data/station/dto';
@@ -253,6 +254,28 @@ describe('a block', () => {
     expect(after.site.latitudeDeg).toBeCloseTo(site.latitudeDeg, 8);
     expect(after.site.longitudeDeg).toBeCloseTo(site.longitudeDeg, 8);
     expect(after.site.heightM).toBeCloseTo(site.heightM, 3);
+  });
+
+  it.each([
+    ['az-el', 'azimuth', 'elevation'],
+    ['ha-dec', 'hourAngle', 'declination'],
+    ['xy-ns', 'x', 'y'],
+    ['xy-ew', 'x', 'y'],
+  ])('of an %s mount is what plans slew by: its %s and %s', async (mountKind, first, second) => {
+    const viewer = await makeViewer('scheduler');
+    const typed = {
+      ...{ mountKind, axis1MinDeg: '-80', axis1MaxDeg: '85', axis1RateDegPerS: '0.4' },
+      ...{ axis1AccelDegPerS2: '0.2', axis2MinDeg: '-5', axis2MaxDeg: '75', axis2RateDegPerS: '0.3' },
+      ...{ axis2AccelDegPerS2: '0.1', settleSeconds: '7' },
+    };
+    expect(await keepStationBlock(viewer, 'Em', await actOn('Em', 'mount', typed))).toEqual({ ok: true });
+    const [station] = await readStations(db(), ['Em']);
+    expect(station?.mount).toEqual({
+      kind: mountKind,
+      [first]: { minDeg: -80, maxDeg: 85, rateDegPerS: 0.4, accelDegPerS2: 0.2 },
+      [second]: { minDeg: -5, maxDeg: 75, rateDegPerS: 0.3, accelDegPerS2: 0.1 },
+      settleSeconds: 7,
+    });
   });
 
   it('that someone else changed meanwhile is not overwritten', async () => {

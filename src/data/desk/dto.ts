@@ -15,9 +15,11 @@ export type DeskScan = {
   startElDeg: number;
   stopAzDeg: number;
   stopElDeg: number;
+  /** of the mount's first axis */
+  motorAxis: string;
   motorStartDeg: number;
-  /** whole turns of the cable from 0° to 360° */
-  turn: number;
+  /** whole turns of the cable from 0° to 360°; null for axes that have no cable to wind */
+  turn: number | null;
   fromAzDeg: number | null;
   fromElDeg: number | null;
   fromStopMs: number | null;

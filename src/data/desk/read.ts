@@ -12,7 +12,9 @@ import type { PlanContext } from '../../schedule/context';
 import { stationPaths, type PathLeg } from '../../schedule/paths';
 import { unpackPlan } from '../../schedule/plan-rows';
 import { scanNumbers } from '../../schedule/scan-numbers';
+import { AXIS_WORDS } from '../../sky/axes';
 import { gmstHours } from '../../sky/position';
+import type { MountKind } from '../../sky/types';
 import { fitOf } from '../clock/read';
 import { answer, forbiddenFor, notFound, type Failure } from '../errors';
 import { newestSnapshot, type Snapshot } from '../offer/read';
@@ -123,16 +125,17 @@ function scansOf(snapshot: Snapshot, station: string, now: number): DeskScan[] {
   };
   const numbers = scanNumbers(plan);
   const paths = stationPaths(plan, context).get(station) ?? [];
+  const kind = context.stations[station]?.mount.kind ?? 'az-el';
   return blocksOf(plan).flatMap((block) => {
     const legs = block.legs.flatMap((scan) => paths.find(({ scanId }) => scanId === scan.id) ?? []);
     const [first] = legs;
     const last = legs.at(-1);
     if (!first || !last) return [];
-    const { stopMs, stopAzDeg, stopElDeg } = rowOf(last);
+    const { stopMs, stopAzDeg, stopElDeg } = rowOf(last, kind);
     const number = numbers.get(first.scanId) ?? '';
     return [
       {
-        ...rowOf(first),
+        ...rowOf(first, kind),
         stopMs,
         stopAzDeg,
         stopElDeg,
@@ -152,7 +155,7 @@ function sourceWords({ legs, groupId }: Block, { sources }: PlanContext): string
   return groupId === null ? nameOf(null) : `${nameOf('target')} with ${nameOf('calibrator')}`;
 }
 
-const rowOf = (leg: PathLeg) => ({
+const rowOf = (leg: PathLeg, kind: MountKind) => ({
   scanId: leg.scanId,
   startMs: leg.startMs,
   stopMs: leg.stopMs,
@@ -160,8 +163,9 @@ const rowOf = (leg: PathLeg) => ({
   startElDeg: leg.startAzEl.elevationDeg,
   stopAzDeg: leg.stopAzEl.azimuthDeg,
   stopElDeg: leg.stopAzEl.elevationDeg,
+  motorAxis: AXIS_WORDS[kind].first,
   motorStartDeg: leg.motorStartDeg,
-  turn: Math.floor(leg.motorStartDeg / 360),
+  turn: kind === 'az-el' ? Math.floor(leg.motorStartDeg / 360) : null,
   fromAzDeg: leg.fromAzEl?.azimuthDeg ?? null,
   fromElDeg: leg.fromAzEl?.elevationDeg ?? null,
   fromStopMs: leg.fromStopMs,

@@ -77,7 +77,8 @@ function Countdown({ scan, isCurrent, now }: { scan: DeskScan; isCurrent: boolea
           <b>{angleText(scan.startElDeg)}</b>
         </Line>
         <Line name="Motor">
-          azimuth <b>{angleText(scan.motorStartDeg)}</b>, turn {scan.turn}
+          {scan.motorAxis} <b>{angleText(scan.motorStartDeg)}</b>
+          {scan.turn === null ? '' : `, turn ${scan.turn}`}
         </Line>
         <Line name="Slew ends">{slewWords(scan)}</Line>
         <Line name="Mode">{scan.mode}</Line>
