@@ -3,7 +3,7 @@ import { db } from '@/db/client';
 import { scanOutcomes } from '@/db/schema/scan-outcomes';
 import { sessions } from '@/db/schema/sessions';
 import { stations } from '@/db/schema/stations';
-import { eq } from 'drizzle-orm';
+import { eq, ne } from 'drizzle-orm';
 import { readDesk } from '@/src/data/desk/read';
 import { offerPlan } from '@/src/data/offer/write';
 import { outcomesOf } from '@/src/data/outcome/read';
@@ -214,7 +214,7 @@ describe('the desk of an equatorial mount', () => {
       .set({ mountKind: 'ha-dec', axis1MinDeg: -180, axis1MaxDeg: 180, axis2MinDeg: -40, axis2MaxDeg: 90 })
       .where(eq(stations.code, 'Bm'));
     // a desk shows one run
-    await db().update(sessions).set({ state: 'cancelled' });
+    await db().update(sessions).set({ state: 'cancelled' }).where(ne(sessions.state, 'cancelled'));
     const { id } = await running();
     const read = await readDesk(await operatorOf('Bm'), 'Bm');
     if (!read.ok || read.desk.run?.sessionId !== id) throw new Error('not the run that was offered');
