@@ -39,7 +39,7 @@ module.exports = {
     only('units', [], 'units imports nothing'),
     only('sky', ['units'], 'sky imports units, and astronomy-engine by its one door', ['astronomy-engine']),
     only('clock', ['units'], 'clock imports units'),
-    only('array', ['units', 'sky'], 'array imports units and sky'),
+    only('array', ['units', 'sky'], 'array imports units and sky, and the Fourier transform', ['fft\\.js']),
     only('schedule', ['units', 'sky', 'array'], 'schedule imports units, sky and array'),
     only('outlook', ['units', 'sky', 'array', 'clock', 'schedule'], 'outlook joins the pure layers'),
     only('access', pure, 'access imports the types of the domain and does no input or output'),

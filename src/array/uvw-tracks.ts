@@ -2,6 +2,7 @@ import type { RotationOptions } from '../sky/position';
 import type { Itrf, SkyPosition } from '../sky/types';
 import { SPEED_OF_LIGHT } from '../units/constants';
 import { basisAt, uvBasisOf } from './uv-basis';
+import type { UvBasis } from './uv-basis';
 
 export type UvTracks = { u: Float64Array; v: Float64Array };
 export type UvwTracks = UvTracks & { w: Float64Array };
@@ -84,26 +85,36 @@ function projected(
   const [stations, times, unitM] = [places.length, timesMs.length, opts.unitM ?? 1];
   if (stations < 2) throw new RangeError(`Not a baseline: ${stations} stations`);
   if (!(Number.isFinite(unitM) && unitM !== 0)) throw new RangeError(`Not a unit: ${unitM}`);
-  const basis = uvBasisOf(source, spanOf(timesMs), opts);
-  const scaled = places.map(({ x, y, z }) => {
-    if (!Number.isFinite(x + y + z)) throw new RangeError(`Not a place: ${x}, ${y}, ${z}`);
-    return [x / unitM, y / unitM, z / unitM] as const;
-  });
+  const turning = axesOver(uvBasisOf(source, spanOf(timesMs), opts), timesMs, axes);
   const values = new Float64Array(axes.length * stations * times);
-  const at = new Float64Array(12);
-  for (let time = 0; time < times; time += 1) {
-    basisAt(basis, timesMs[time] ?? NaN, at);
+  places.forEach(({ x, y, z }, station) => {
+    const [px, py, pz] = [x / unitM, y / unitM, z / unitM];
+    if (!Number.isFinite(px + py + pz)) throw new RangeError(`Not a place: ${x}, ${y}, ${z}`);
     for (let row = 0; row < axes.length; row += 1) {
-      const axis = axes[row] ?? 0;
-      const [ex, ey, ez] = [at[axis] ?? NaN, at[axis + 1] ?? NaN, at[axis + 2] ?? NaN];
-      let into = row * stations * times + time;
-      for (const [x, y, z] of scaled) {
-        values[into] = ex * x + ey * y + ez * z;
-        into += times;
+      const into = (row * stations + station) * times;
+      for (let time = 0, at = 3 * row * times; time < times; time += 1, at += 3) {
+        values[into + time] =
+          (turning[at] ?? NaN) * px + (turning[at + 1] ?? NaN) * py + (turning[at + 2] ?? NaN) * pz;
       }
     }
-  }
+  });
   return { stations, times, values };
+}
+
+/** Chosen axes at all instants: axes × times × (x, y, z). */
+function axesOver(basis: UvBasis, timesMs: ArrayLike<number>, axes: readonly number[]): Float64Array {
+  const turning = new Float64Array(3 * axes.length * timesMs.length);
+  const at = new Float64Array(12);
+  for (let time = 0; time < timesMs.length; time += 1) {
+    basisAt(basis, timesMs[time] ?? NaN, at);
+    for (let row = 0; row < axes.length; row += 1) {
+      const [from, into] = [axes[row] ?? NaN, 3 * (row * timesMs.length + time)];
+      turning[into] = at[from] ?? NaN;
+      turning[into + 1] = at[from + 1] ?? NaN;
+      turning[into + 2] = at[from + 2] ?? NaN;
+    }
+  }
+  return turning;
 }
 
 function spanOf(timesMs: ArrayLike<number>): { startMs: number; endMs: number } {
