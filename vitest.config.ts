@@ -10,5 +10,11 @@ export default defineConfig({
       { find: /^@\//, replacement: `${root}/` },
     ],
   },
-  test: { include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'], setupFiles: ['tests/helpers/setup.ts'] },
+  test: {
+    include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
+    setupFiles: ['tests/helpers/setup.ts'],
+    // a machine may be busy with other work: slow is not wrong
+    testTimeout: 180_000,
+    hookTimeout: 180_000,
+  },
 });
