@@ -1,8 +1,6 @@
 import FFT from 'fft.js';
 import type { UvLines } from './uv-spread';
 
-const [FIRST, BOTH] = [[0], [0, 1]] as const;
-
 /** What a transform needs for one size, made once. */
 export type EvenTransform = {
   fft: FFT;
@@ -50,13 +48,12 @@ export function transformEven(
 ): void {
   for (let line = 0; line < lines.used; line += 2) alongV(plan, lines, line);
   const { half } = plan;
+  plan.row.fill(0);
   const unit = 1 / (peakOf(plan, lines) * (cure[0] ?? NaN) ** 2);
   for (let m = 0; m <= half; m += 2) {
     alongU(plan, lines, m);
-    for (const part of m < half ? BOTH : FIRST) {
-      if (m + part < half) layRow(plan, part, 1, lines.cells, field, m + part, cure, unit);
-      layRow(plan, part, -1, lines.cells, field, m + part, cure, unit);
-    }
+    layRow(plan, 0, lines.cells, field, m, unit * (cure[m] ?? NaN), cure);
+    if (m < half) layRow(plan, 1, lines.cells, field, m + 1, unit * (cure[m + 1] ?? NaN), cure);
   }
 }
 
@@ -90,49 +87,63 @@ function peakOf({ mixed }: EvenTransform, { used }: UvLines): number {
 }
 
 /** Rows m and m + 1 at once: the first is the real part, the second the imaginary one. */
-function alongU(
-  { fft, row, turned, mixed }: EvenTransform,
-  { cells, before, used }: UvLines,
-  m: number,
-): void {
-  const one = 2 * m * used;
+function alongU({ fft, row, turned, mixed }: EvenTransform, lines: UvLines, m: number): void {
+  const { cells, before, used } = lines;
+  const one = 2 * (m * used + before);
   const other = one + 2 * used;
-  row.fill(0);
-  for (let line = 0; line < used; line += 1) {
-    const u = line - before;
-    const a = mixed[one + 2 * line] ?? NaN;
-    const b = mixed[one + 2 * line + 1] ?? NaN;
-    const c = mixed[other + 2 * line] ?? NaN;
-    const d = mixed[other + 2 * line + 1] ?? NaN;
-    const here = 2 * (u >= 0 ? u : cells + u);
-    const there = 2 * (u > 0 ? cells - u : -u);
-    row[here] = (row[here] ?? NaN) + a - d;
-    row[here + 1] = (row[here + 1] ?? NaN) + b + c;
-    row[there] = (row[there] ?? NaN) + a + d;
-    row[there + 1] = (row[there + 1] ?? NaN) + c - b;
+  for (let u = 1; u < before; u += 1) {
+    foldBack(mixed, one, u);
+    foldBack(mixed, other, u);
+  }
+  row[0] = 2 * (mixed[one] ?? NaN);
+  row[1] = 2 * (mixed[other] ?? NaN);
+  for (let u = 1; u < used - before; u += 1) {
+    const a = mixed[one + 2 * u] ?? NaN;
+    const b = mixed[one + 2 * u + 1] ?? NaN;
+    const c = mixed[other + 2 * u] ?? NaN;
+    const d = mixed[other + 2 * u + 1] ?? NaN;
+    row[2 * u] = a - d;
+    row[2 * u + 1] = b + c;
+    row[2 * (cells - u)] = a + d;
+    row[2 * (cells - u) + 1] = c - b;
   }
   fft.transform(turned, row);
 }
 
-/** Row ±m of the field by what was turned for m: the field is even, so row −m is row m backwards. */
+/** What was spread to a line before u = 0 is its conjugate's. */
+function foldBack(mixed: Float64Array, origin: number, u: number): void {
+  const [here, there] = [origin + 2 * u, origin - 2 * u];
+  mixed[here] = (mixed[here] ?? NaN) + (mixed[there] ?? NaN);
+  mixed[here + 1] = (mixed[here + 1] ?? NaN) - (mixed[there + 1] ?? NaN);
+}
+
+/** Row m of the field by what was turned for it; the row after the last, m = half, is laid at −m, backwards. */
 function layRow(
   { half, turned }: EvenTransform,
   part: 0 | 1,
-  sense: 1 | -1,
   cells: number,
   field: Float32Array,
   m: number,
+  down: number,
   cure: Float64Array,
-  unit: number,
 ): void {
+  const sense = m < half ? 1 : -1;
   const middle = (half + sense * m) * 2 * half + half;
-  const down = unit * (cure[m] ?? NaN);
   field[middle] = down * (cure[0] ?? NaN) * (turned[part] ?? NaN);
   for (let l = 1; l < half; l += 1) {
     const factor = down * (cure[l] ?? NaN);
     field[middle + sense * l] = factor * (turned[2 * l + part] ?? NaN);
     field[middle - sense * l] = factor * (turned[2 * (cells - l) + part] ?? NaN);
   }
-  const edge = sense === 1 ? cells - half : half;
-  field[middle - half] = down * (cure[half] ?? NaN) * (turned[2 * edge + part] ?? NaN);
+  const edge = down * (cure[half] ?? NaN);
+  field[middle - half] = edge * (turned[2 * (m < half ? cells - half : half) + part] ?? NaN);
+  if (m > 0 && m < half) layImage(field, half, m, edge * (turned[2 * half + part] ?? NaN));
+}
+
+/** Row −m: the field is even, so it is row m backwards; its first cell, at −half, has no twin in the field. */
+function layImage(field: Float32Array, half: number, m: number, edge: number): void {
+  const side = 2 * half;
+  const [from, to] = [(half + m) * side, (half - m) * side];
+  field[to] = edge;
+  for (let column = 1; column < side; column += 1) field[to + side - column] = field[from + column] ?? NaN;
 }

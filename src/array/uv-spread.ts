@@ -46,7 +46,7 @@ export function spreadUv(uv: UvPoints, perCell: number, into: UvLines): void {
       }
     }
   }
-  into.used = 2 * ((last + width + 1) >> 1);
+  into.used = Math.max(2 * before, 2 * ((last + width + 1) >> 1));
 }
 
 /** The same by the narrow kernel, for many points: no call and no inner loop. Cost: 12 ns a point. */
@@ -90,5 +90,5 @@ export function spreadManyUv({ u, v, weight }: UvPoints, perCell: number, into: 
     values[at + 2] = (values[at + 2] ?? NaN) + share * b;
     values[at + 4] = (values[at + 4] ?? NaN) + share * c;
   }
-  into.used = 2 * ((last + narrowKernel.width + 1) >> 1);
+  into.used = Math.max(2 * before, 2 * ((last + narrowKernel.width + 1) >> 1));
 }
