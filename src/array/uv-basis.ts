@@ -36,7 +36,7 @@ const TURN_RAD_PER_MS = EARTH_ROTATION_RAD_PER_S / MS_PER_SECOND;
  * @param opts    dut1Seconds = UT1 − UTC, default 0
  * @throws RangeError if an input is not finite or out of range (programmer error)
  *
- * Error   ≤ 3e-9 of a baseline's length from baselineUvw (tests/array/uvw-tracks.test.ts). Cost: 30 µs a node
+ * Error   ≤ 1e-9 of a baseline's length from baselineUvw (tests/array/uvw-tracks.test.ts). Cost: 30 µs a node
  * Source  quadratic interpolation: in a day aberration turns the axes by at most 2·10⁻⁶
  */
 export function uvBasisOf(

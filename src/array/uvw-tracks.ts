@@ -25,7 +25,7 @@ export type TrackOptions = RotationOptions & {
  *
  * Shape   baselines (0,1), (0,2) … (0,n−1), (1,2) … (n−2,n−1), second − first, × times[t]
  *         → Float64Array(n(n−1)/2 · t) each, baseline-major
- * Error   ≤ 3e-9 of the length from baselineUvw (tests/array/uvw-tracks.test.ts); the rest is its own
+ * Error   ≤ 1e-9 of the length from baselineUvw (tests/array/uvw-tracks.test.ts); the rest is its own
  * Source  as baselineUvw; each station is projected once, baselines are differences
  */
 export function uvTracks(
@@ -60,7 +60,7 @@ export function uvwTracks(
  * @throws RangeError if an input is not finite, out of range or empty (programmer error)
  *
  * Shape   as uvTracks
- * Error   ≤ 3e-9 of |b|/c and |b|ω/c from geometricDelay (tests/array/uvw-tracks.test.ts); the rest is its own
+ * Error   ≤ 1e-9 of |b|/c and |b|ω/c from geometricDelay (tests/array/uvw-tracks.test.ts); the rest is its own
  */
 export function delayTracks(
   places: readonly Itrf[],
