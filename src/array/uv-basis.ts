@@ -22,14 +22,14 @@ export type UvBasis = {
 };
 
 /** Distance between nodes at most, and at least: closer ones would magnify rounding. */
-const NODE_LIMIT_MS = MS_PER_DAY;
+const NODE_LIMIT_MS = MS_PER_DAY / 2;
 const NODE_LEAST_MS = 10_800_000;
 const VALUES = 10;
 const TURN = 2 * Math.PI;
 const TURN_RAD_PER_MS = EARTH_ROTATION_RAD_PER_S / MS_PER_SECOND;
 
 /**
- * The axes of baselineUvw, exact at nodes at most a day apart and quadratic between.
+ * The axes of baselineUvw, exact at nodes at most half a day apart and quadratic between.
  *
  * @param source  ICRS place
  * @param spanMs  first and last instant, epoch ms UTC, 1900–2100; start ≤ end
@@ -37,7 +37,7 @@ const TURN_RAD_PER_MS = EARTH_ROTATION_RAD_PER_S / MS_PER_SECOND;
  * @throws RangeError if an input is not finite or out of range (programmer error)
  *
  * Error   ≤ 1e-9 of a baseline's length from baselineUvw (tests/array/uvw-tracks.test.ts). Cost: 30 µs a node
- * Source  quadratic interpolation: in a day aberration turns the axes by at most 2·10⁻⁶
+ * Source  quadratic interpolation: in half a day aberration turns the axes by at most 10⁻⁶
  */
 export function uvBasisOf(
   source: SkyPosition,

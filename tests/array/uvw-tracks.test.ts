@@ -9,7 +9,7 @@ import { EARTH_ROTATION_RAD_PER_S, SPEED_OF_LIGHT } from '@/src/units/constants'
 
 // Truth: the exact functions, themselves against ERFA (uvw.test.ts, delay.test.ts).
 const TOLERANCE = {
-  /** quadratic between nodes a day apart: fortnightly terms of nutation; relative to the length of the baseline */
+  /** quadratic between nodes half a day apart: fortnightly terms of nutation; relative to the length of the baseline */
   relative: 1e-9,
   /** rounding of places given from the centre of the Earth, metres */
   roundingM: 1e-8,
