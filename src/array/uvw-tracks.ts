@@ -1,6 +1,7 @@
 import type { RotationOptions } from '../sky/position';
 import type { Itrf, SkyPosition } from '../sky/types';
 import { SPEED_OF_LIGHT } from '../units/constants';
+import { extentOf } from '../units/time';
 import { basisAt, uvBasisOf } from './uv-basis';
 import type { UvBasis } from './uv-basis';
 
@@ -85,7 +86,7 @@ function projected(
   const [stations, times, unitM] = [places.length, timesMs.length, opts.unitM ?? 1];
   if (stations < 2) throw new RangeError(`Not a baseline: ${stations} stations`);
   if (!(Number.isFinite(unitM) && unitM !== 0)) throw new RangeError(`Not a unit: ${unitM}`);
-  const turning = axesOver(uvBasisOf(source, spanOf(timesMs), opts), timesMs, axes);
+  const turning = axesOver(uvBasisOf(source, extentOf(timesMs), opts), timesMs, axes);
   const values = new Float64Array(axes.length * stations * times);
   places.forEach(({ x, y, z }, station) => {
     const [px, py, pz] = [x / unitM, y / unitM, z / unitM];
@@ -115,18 +116,6 @@ function axesOver(basis: UvBasis, timesMs: ArrayLike<number>, axes: readonly num
     }
   }
   return turning;
-}
-
-function spanOf(timesMs: ArrayLike<number>): { startMs: number; endMs: number } {
-  let [startMs, endMs] = [Infinity, -Infinity];
-  for (let time = 0; time < timesMs.length; time += 1) {
-    const atMs = timesMs[time] ?? NaN;
-    if (!Number.isFinite(atMs)) throw new RangeError(`Not an instant: ${atMs}`);
-    if (atMs < startMs) startMs = atMs;
-    if (atMs > endMs) endMs = atMs;
-  }
-  if (startMs > endMs) throw new RangeError('No instants');
-  return { startMs, endMs };
 }
 
 function differences({ stations, times, values }: Rows, row: number): Float64Array {

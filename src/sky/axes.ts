@@ -1,32 +1,69 @@
 import { degToRad, radToDeg } from '../units/angle';
-import type { AzEl, DrivenAxis, Mount, MountKind } from './types';
+import { dot } from '../units/vector';
+import type { Vector3 } from '../units/vector';
+import type { AngleRange, AzEl, DrivenAxis, Mount, MountKind, MountLimits } from './types';
 
 /** Angles of a mount's axes, degrees; the first turns all the way round, the second rides on it. */
 export type AxisAngles = { firstDeg: number; secondDeg: number };
 
-/** The axis that turns about a fixed line. */
-export function firstAxis(mount: Mount): DrivenAxis {
-  switch (mount.kind) {
+/**
+ * The range of the axis that turns about a fixed line: driven, as of a mount, or a limit that may not bind.
+ */
+export function firstAxis(mount: Mount): DrivenAxis;
+export function firstAxis(limits: MountLimits): AngleRange | undefined;
+export function firstAxis(limits: MountLimits): AngleRange | undefined {
+  switch (limits.kind) {
     case 'az-el':
-      return mount.azimuth;
+      return limits.azimuth;
     case 'ha-dec':
-      return mount.hourAngle;
+      return limits.hourAngle;
     case 'xy-ns':
     case 'xy-ew':
-      return mount.x;
+      return limits.x;
   }
 }
 
-/** The axis that rides on the first. */
-export function secondAxis(mount: Mount): DrivenAxis {
-  switch (mount.kind) {
+/** The same of the axis that rides on the first. */
+export function secondAxis(mount: Mount): DrivenAxis;
+export function secondAxis(limits: MountLimits): AngleRange | undefined;
+export function secondAxis(limits: MountLimits): AngleRange | undefined {
+  switch (limits.kind) {
     case 'az-el':
-      return mount.elevation;
+      return limits.elevation;
     case 'ha-dec':
-      return mount.declination;
+      return limits.declination;
     case 'xy-ns':
     case 'xy-ew':
-      return mount.y;
+      return limits.y;
+  }
+}
+
+/** Unit vectors of a mount's axes: the end of the first, where both angles are 0°, where the first is 90° and the second 0°. */
+export type AxisTriad = { along: Vector3; zero: Vector3; toward: Vector3 };
+
+const EAST: Vector3 = [1, 0, 0];
+const NORTH: Vector3 = [0, 1, 0];
+const UP: Vector3 = [0, 0, 1];
+
+/**
+ * The axes of a kind of mount, by components toward east, north and up of the site.
+ *
+ * @param latitudeRad  of the site; of an equatorial mount alone it matters
+ *
+ * Source  definition of the axes (MountLimits); equatorial: the pole stands at the latitude in the north
+ */
+export function axisTriad(kind: MountKind, latitudeRad: number): AxisTriad {
+  switch (kind) {
+    case 'az-el':
+      return { along: UP, zero: NORTH, toward: EAST };
+    case 'ha-dec': {
+      const [sin, cos] = [Math.sin(latitudeRad), Math.cos(latitudeRad)];
+      return { along: [0, cos, sin], zero: [0, -sin, cos], toward: [-1, 0, 0] };
+    }
+    case 'xy-ns':
+      return { along: NORTH, zero: UP, toward: EAST };
+    case 'xy-ew':
+      return { along: EAST, zero: UP, toward: NORTH };
   }
 }
 
@@ -48,7 +85,7 @@ export const AXIS_WORDS: Readonly<Record<MountKind, { first: string; second: str
  * @throws RangeError if an input is not finite (programmer error)
  *
  * Error   rounding
- * Source  definition of the axes (MountLimits); equatorial: rotation by the latitude about east–west (science)
+ * Source  as axisTriad
  */
 export function axisAngles(kind: MountKind, latitudeDeg: number, direction: AzEl): AxisAngles {
   const { azimuthDeg, elevationDeg } = direction;
@@ -56,17 +93,15 @@ export function axisAngles(kind: MountKind, latitudeDeg: number, direction: AzEl
     throw new RangeError(`Not a direction: ${azimuthDeg}, ${elevationDeg}`);
   if (kind === 'az-el') return { firstDeg: azimuthDeg, secondDeg: elevationDeg };
   const [az, el] = [degToRad(azimuthDeg), degToRad(elevationDeg)];
-  const [east, north, up] = [Math.cos(el) * Math.sin(az), Math.cos(el) * Math.cos(az), Math.sin(el)];
-  if (kind === 'ha-dec') {
-    const [sin, cos] = [Math.sin(degToRad(latitudeDeg)), Math.cos(degToRad(latitudeDeg))];
-    return angles(-east, up * cos - north * sin, up * sin + north * cos);
-  }
-  return kind === 'xy-ns' ? angles(east, up, north) : angles(north, up, east);
+  const seen: Vector3 = [Math.cos(el) * Math.sin(az), Math.cos(el) * Math.cos(az), Math.sin(el)];
+  const { along, zero, toward } = axisTriad(kind, degToRad(latitudeDeg));
+  return anglesOf(dot(seen, along), dot(seen, zero), dot(seen, toward));
 }
 
-function angles(across: number, toward: number, along: number): AxisAngles {
+/** Angles of a direction by its parts along the end of the first axis, toward where both stand at 0°, and where the first stands at 90°. */
+export function anglesOf(along: number, zero: number, toward: number): AxisAngles {
   return {
-    firstDeg: radToDeg(Math.atan2(across, toward)),
-    secondDeg: radToDeg(Math.atan2(along, Math.sqrt(across * across + toward * toward))),
+    firstDeg: radToDeg(Math.atan2(toward, zero)),
+    secondDeg: radToDeg(Math.atan2(along, Math.sqrt(zero * zero + toward * toward))),
   };
 }

@@ -1,7 +1,7 @@
 import { DEG_PER_RAD } from '../units/angle';
-import { cross, dot, scale } from '../units/vector';
+import { add, cross, dot, scale } from '../units/vector';
 import type { Vector3 } from '../units/vector';
-import type { AxisAngles } from './axes';
+import { anglesOf, axisTriad, type AxisAngles } from './axes';
 import type { SiteFrame } from './site';
 import type { MountKind } from './types';
 
@@ -24,6 +24,9 @@ export type AxisFrame = {
   way: 1 | -1;
 };
 
+/** Nearer to the Earth's axis than this is on it: rounding. */
+const POLE = 1e-15;
+
 /**
  * The axes of a mount at a site.
  *
@@ -32,10 +35,13 @@ export type AxisFrame = {
  * Source  definition of the axes (MountLimits)
  */
 export function axisFrame(kind: MountKind, site: SiteFrame): AxisFrame {
-  const [along, zero, toward] = axesOf(kind, site);
+  const triad = axisTriad(kind, site.latitudeRad);
+  const fixed = ([east, north, up]: Vector3) =>
+    add(add(scale(site.east, east), scale(site.north, north)), scale(site.up, up));
+  const [along, zero, toward] = [fixed(triad.along), fixed(triad.zero), fixed(triad.toward)];
   const shift = scale([dot(along, site.east), dot(zero, site.east), dot(toward, site.east)], site.eastSpeed);
   const isRightHanded = dot(cross(zero, toward), along) > 0;
-  const isPole = Math.abs(along[0]) + Math.abs(along[1]) === 0;
+  const isPole = Math.abs(along[0]) + Math.abs(along[1]) < POLE;
   return {
     kind,
     along,
@@ -46,19 +52,6 @@ export function axisFrame(kind: MountKind, site: SiteFrame): AxisFrame {
     sinTilt: along[2],
     way: along[2] < 0 === isRightHanded ? 1 : -1,
   };
-}
-
-function axesOf(kind: MountKind, { east, north, up, longitudeRad }: SiteFrame): [Vector3, Vector3, Vector3] {
-  switch (kind) {
-    case 'az-el':
-      return [up, north, east];
-    case 'ha-dec':
-      return [[0, 0, 1], [Math.cos(longitudeRad), Math.sin(longitudeRad), 0], scale(east, -1)];
-    case 'xy-ns':
-      return [north, up, east];
-    case 'xy-ew':
-      return [east, up, north];
-  }
 }
 
 /**
@@ -74,10 +67,9 @@ export function anglesToward(frame: AxisFrame, [x, y, z]: Vector3): AxisAngles {
   const a = x * along[0] + y * along[1] + z * along[2] + shift[0];
   const b = x * zero[0] + y * zero[1] + z * zero[2] + shift[1];
   const c = x * toward[0] + y * toward[1] + z * toward[2] + shift[2];
-  const turned = DEG_PER_RAD * Math.atan2(c, b);
+  const { firstDeg, secondDeg } = anglesOf(a, b, c);
   // a hair west of north is north, not 360°
-  const firstDeg = frame.kind === 'az-el' && turned < 0 ? (turned + 360) % 360 : turned;
-  return { firstDeg, secondDeg: DEG_PER_RAD * Math.atan2(a, Math.sqrt(b * b + c * c)) };
+  return { firstDeg: frame.kind === 'az-el' && firstDeg < 0 ? (firstDeg + 360) % 360 : firstDeg, secondDeg };
 }
 
 /**

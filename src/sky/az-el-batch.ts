@@ -1,4 +1,5 @@
 import { DEG_PER_RAD } from '../units/angle';
+import { extentOf } from '../units/time';
 import type { Interval } from '../units/time';
 import type { RotationOptions } from './position';
 import { siteFrame } from './site';
@@ -52,14 +53,8 @@ export function azElBatch(
   return table;
 }
 
+/** A track has a length, an instant has none. */
 function spanOf(timesMs: ArrayLike<number>): Interval {
-  let [startMs, endMs] = [Infinity, -Infinity];
-  for (let time = 0; time < timesMs.length; time += 1) {
-    const atMs = timesMs[time] ?? NaN;
-    if (!Number.isFinite(atMs)) throw new RangeError(`Not an instant: ${atMs}`);
-    if (atMs < startMs) startMs = atMs;
-    if (atMs > endMs) endMs = atMs;
-  }
-  // a track has a length, an instant has none
+  const { startMs, endMs } = extentOf(timesMs);
   return { start: new Date(startMs), end: new Date(Math.max(endMs, startMs + 1)) };
 }

@@ -5,7 +5,7 @@ import type { Spans } from './interval-set';
 import type { SiteFrame } from './site';
 import { SIDEREAL_RAD_PER_MS, panelAt, trackDirection, trackTurnRad, valueAt } from './track';
 import type { Track } from './track';
-import { NEVER, withinTurn } from './view';
+import { GUESS_RAD, NEVER, TURN, withinTurn } from './view';
 import type { View } from './view';
 
 /** Directions whose cosine to an axis is at least a bound, on axes that turn with the Earth; seen with diurnal aberration. */
@@ -21,13 +21,10 @@ export type Cap = {
   sinFromSite: number;
 };
 
-const TURN = 2 * Math.PI;
 /** Nearer than this to a culmination, as a difference of cosines, the heights themselves are looked at (2″). */
 const GRAZING = 1e-5;
 /** A place or an axis so near the Earth's axis hardly moves. */
 const LEAST_REACH = 1e-3;
-/** Guesses are better than this (11 minutes). */
-const GUESS_RAD = 0.05;
 /** A step after which the next would be below 0.02 ms. */
 const LAST_STEP_RAD = 2e-6;
 const MOST_STEPS = 12;

@@ -1,4 +1,6 @@
-import { degToRad, normalise360, radToDeg } from '../units/angle';
+import { degToRad, normalise360 } from '../units/angle';
+import { add, scale } from '../units/vector';
+import { anglesOf, axisTriad } from './axes';
 import type { AzEl } from './types';
 
 const STEP_DEG = 2;
@@ -17,15 +19,13 @@ const STEP_DEG = 2;
 export function diurnalPath(decDeg: number, latitudeDeg: number): AzEl[] {
   if (!(Math.abs(decDeg) <= 90 && Math.abs(latitudeDeg) <= 90))
     throw new RangeError(`Not a declination and a latitude: ${decDeg}, ${latitudeDeg}`);
-  const [dec, lat] = [degToRad(decDeg), degToRad(latitudeDeg)];
+  const dec = degToRad(decDeg);
+  const { along, zero, toward } = axisTriad('ha-dec', degToRad(latitudeDeg));
   return Array.from({ length: 360 / STEP_DEG + 1 }, (_, step) => {
     const hour = degToRad(step * STEP_DEG - 180);
-    const east = -Math.cos(dec) * Math.sin(hour);
-    const north = Math.sin(dec) * Math.cos(lat) - Math.cos(dec) * Math.sin(lat) * Math.cos(hour);
-    const up = Math.sin(dec) * Math.sin(lat) + Math.cos(dec) * Math.cos(lat) * Math.cos(hour);
-    return {
-      azimuthDeg: normalise360(radToDeg(Math.atan2(east, north))),
-      elevationDeg: radToDeg(Math.asin(Math.max(-1, Math.min(1, up)))),
-    };
+    const across = add(scale(zero, Math.cos(hour)), scale(toward, Math.sin(hour)));
+    const [east, north, up] = add(scale(along, Math.sin(dec)), scale(across, Math.cos(dec)));
+    const { firstDeg, secondDeg } = anglesOf(up, north, east);
+    return { azimuthDeg: normalise360(firstDeg), elevationDeg: secondDeg };
   });
 }

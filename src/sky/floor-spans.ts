@@ -3,7 +3,7 @@ import type { Floor } from './floor';
 import type { Spans } from './interval-set';
 import { SIDEREAL_RAD_PER_MS, panelAt, trackTurnRad, valueAt } from './track';
 import type { Track } from './track';
-import { NEVER, withinTurn } from './view';
+import { GUESS_RAD, NEVER, TURN, withinTurn } from './view';
 import type { View } from './view';
 
 /** Where a source passes the floor. */
@@ -28,11 +28,8 @@ type ArcPoint = {
   perSinDec: number;
 };
 
-const TURN = 2 * Math.PI;
 /** A place so near the Earth's axis hardly moves. */
 const LEAST_COS_DEC = 1e-3;
-/** Guesses are better than this (11 minutes). */
-const GUESS_RAD = 0.05;
 /** A step of 3 s, in which the apparent place moves by 2·10⁻⁵″. */
 const LAST_STEP_RAD = 2e-4;
 const MOST_STEPS = 12;

@@ -1,5 +1,6 @@
 import { degToRad } from '../units/angle';
 import type { Vector3 } from '../units/vector';
+import { axisTriad, firstAxis, secondAxis } from './axes';
 import { capBeyond, capOf } from './cap';
 import type { Cap } from './cap';
 import type { SiteFrame } from './site';
@@ -7,10 +8,6 @@ import type { AngleRange, MountLimits } from './types';
 
 /** Caps all of which must hold, and groups of caps of each of which one must. */
 export type MountCuts = { all: Cap[]; anyOf: Cap[][] };
-
-const EAST: Vector3 = [1, 0, 0];
-const NORTH: Vector3 = [0, 1, 0];
-const UP: Vector3 = [0, 0, 1];
 
 /**
  * The sky that a mount can reach.
@@ -23,30 +20,13 @@ const UP: Vector3 = [0, 0, 1];
 export function mountCuts(site: SiteFrame, limits: MountLimits): MountCuts {
   const keyholeDeg = limits.keyholeDeg ?? 0;
   if (!(keyholeDeg >= 0 && keyholeDeg <= 90)) throw new RangeError(`Keyhole outside 0–90°: ${keyholeDeg}`);
-  switch (limits.kind) {
-    case 'az-el':
-      return joined(
-        cone(site, UP, limits.elevation, { to: 90 - keyholeDeg }),
-        turn(site, EAST, NORTH, limits.azimuth),
-      );
-    case 'ha-dec': {
-      const { west, pole, meridian } = equatorialAxes(site);
-      const open = { from: keyholeDeg - 90, to: 90 - keyholeDeg };
-      return joined(cone(site, pole, limits.declination, open), turn(site, west, meridian, limits.hourAngle));
-    }
-    case 'xy-ns':
-    case 'xy-ew': {
-      const [along, across] = limits.kind === 'xy-ns' ? [NORTH, EAST] : [EAST, NORTH];
-      const open = { from: keyholeDeg - 90, to: 90 - keyholeDeg };
-      return joined(cone(site, along, limits.y, open), turn(site, across, UP, limits.x));
-    }
-  }
-}
-
-/** Unit vectors toward east, north and up of the site. */
-function equatorialAxes({ latitudeRad }: SiteFrame): { west: Vector3; pole: Vector3; meridian: Vector3 } {
-  const [sin, cos] = [Math.sin(latitudeRad), Math.cos(latitudeRad)];
-  return { west: [-1, 0, 0], pole: [0, cos, sin], meridian: [0, -sin, cos] };
+  const { along, zero, toward } = axisTriad(limits.kind, site.latitudeRad);
+  // below the horizon of an az–el mount there is its own limit
+  const from = limits.kind === 'az-el' ? {} : { from: keyholeDeg - 90 };
+  return joined(
+    cone(site, along, secondAxis(limits), { ...from, to: 90 - keyholeDeg }),
+    turn(site, toward, zero, firstAxis(limits)),
+  );
 }
 
 function joined(a: MountCuts, b: MountCuts): MountCuts {

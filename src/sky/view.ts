@@ -23,7 +23,9 @@ export type Whole = { set: Spans; span: Interval };
 const MS_PER_DAY = 86_400_000;
 /** 0.35″ aberration, 0.14″ precession and 0.1″ nutation a day, in radians. */
 const DRIFT_RAD_PER_MS = 3e-6 / MS_PER_DAY;
-const TURN = 2 * Math.PI;
+export const TURN = 2 * Math.PI;
+/** Guesses of edges are better than this (11 minutes). */
+export const GUESS_RAD = 0.05;
 
 /** The set that never holds. */
 export const NEVER: Spans = [];

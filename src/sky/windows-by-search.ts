@@ -1,5 +1,5 @@
 import { normalise180 } from '../units/angle';
-import { axisAngles } from './axes';
+import { axisAngles, firstAxis, secondAxis } from './axes';
 import { spansWhere, stepsOver } from './crossings';
 import { horizonElevationDeg, prepareHorizon } from './horizon';
 import { intervalsOf } from './interval-set';
@@ -47,26 +47,14 @@ export function windowsBySearch(track: Track, station: SkyStation, span: Interva
 /** Degrees to the nearest limit of a mount; negative outside it. */
 function roomOfMount(mount: MountLimits, latitudeDeg: number, seen: AzEl): number {
   const { firstDeg, secondDeg } = axisAngles(mount.kind, latitudeDeg, seen);
-  const [first, second] = rangesOf(mount);
+  const second = secondAxis(mount);
   const keyholeDeg = mount.keyholeDeg ?? 0;
   const endsDeg = mount.kind === 'az-el' ? 90 - secondDeg : 90 - Math.abs(secondDeg);
   return Math.min(
-    roundTurn(firstDeg, first),
+    roundTurn(firstDeg, firstAxis(mount)),
     second ? Math.min(secondDeg - second.minDeg, second.maxDeg - secondDeg) : Infinity,
     keyholeDeg > 0 ? endsDeg - keyholeDeg : Infinity,
   );
-}
-
-function rangesOf(mount: MountLimits): [first: AngleRange | undefined, second: AngleRange | undefined] {
-  switch (mount.kind) {
-    case 'az-el':
-      return [mount.azimuth, mount.elevation];
-    case 'ha-dec':
-      return [mount.hourAngle, mount.declination];
-    case 'xy-ns':
-    case 'xy-ew':
-      return [mount.x, mount.y];
-  }
 }
 
 /** Degrees by which an angle is inside a range, wherever its turns begin. */

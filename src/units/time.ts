@@ -64,3 +64,21 @@ export function dayOfYear(ms: number): number {
 export function intervalSeconds(interval: Interval): number {
   return (interval.end.getTime() - interval.start.getTime()) / MS_PER_SECOND;
 }
+
+/**
+ * The first and the last of some instants.
+ *
+ * @param timesMs  epoch ms, one at least, in any order
+ * @throws RangeError if there is none, or one is not finite (programmer error)
+ */
+export function extentOf(timesMs: ArrayLike<number>): { startMs: number; endMs: number } {
+  let [startMs, endMs] = [Infinity, -Infinity];
+  for (let time = 0; time < timesMs.length; time += 1) {
+    const atMs = timesMs[time] ?? NaN;
+    if (!Number.isFinite(atMs)) throw new RangeError(`Not an instant: ${atMs}`);
+    if (atMs < startMs) startMs = atMs;
+    if (atMs > endMs) endMs = atMs;
+  }
+  if (startMs > endMs) throw new RangeError('No instants');
+  return { startMs, endMs };
+}

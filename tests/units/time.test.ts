@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { dayOfYear, intervalSeconds, utcParts } from '@/src/units/time';
+import { dayOfYear, intervalSeconds, utcParts, extentOf } from '@/src/units/time';
 
 describe('time', () => {
   it('counts days of the year from one, leap years included', () => {
@@ -29,5 +29,17 @@ describe('time', () => {
 
   it('measures an interval in seconds', () => {
     expect(intervalSeconds({ start: new Date(0), end: new Date(90_500) })).toBe(90.5);
+  });
+});
+
+describe('extentOf', () => {
+  it('is the first and the last of instants in any order', () => {
+    expect(extentOf([5, 2, 9])).toEqual({ startMs: 2, endMs: 9 });
+    expect(extentOf(Float64Array.of(7))).toEqual({ startMs: 7, endMs: 7 });
+  });
+
+  it('refuses none, and what is no instant', () => {
+    expect(() => extentOf([])).toThrow(RangeError);
+    expect(() => extentOf([1, NaN])).toThrow(RangeError);
   });
 });
