@@ -1,4 +1,5 @@
 import { normalise360 } from '../units/angle';
+import { numberIn } from './catalogue/field';
 
 export type MaskCorner = { azimuthDeg: number; elevationDeg: number };
 
@@ -25,31 +26,31 @@ export function readHorizonFile(text: string): HorizonFile {
   const wrong: HorizonFile['wrong'] = [];
   let isFirst = true;
   text.split(/\r\n|\r|\n/).forEach((whole, index) => {
-    const line = whole.replace(/#.*$/, '').replaceAll('\u2212', '-').trim();
+    const line = whole.replace(/#.*$/, '').trim();
     if (line === '') return;
     const cells = line.split(/[\s,;]+/).filter((cell) => cell !== '');
-    const isHead = isFirst && cells.every((cell) => Number.isNaN(Number(cell)));
+    const isHead = isFirst && cells.every((cell) => numberIn(cell) === null);
     isFirst = false;
     if (isHead) return;
-    const message = problemOf(cells);
-    if (message !== null) wrong.push({ line: index + 1, text: short(line), message });
-    else corners.push({ azimuthDeg: normalise360(Number(cells[0])), elevationDeg: Number(cells[1]) });
+    const read = cornerIn(cells);
+    if (typeof read === 'string') wrong.push({ line: index + 1, text: short(line), message: read });
+    else corners.push(read);
   });
   corners.sort((a, b) => a.azimuthDeg - b.azimuthDeg);
   return { corners, wrong };
 }
 
-function problemOf(cells: readonly string[]): string | null {
+/** The corner, or what is wrong with the line. */
+function cornerIn(cells: readonly string[]): MaskCorner | string {
+  const [first = '', second = ''] = cells;
   if (cells.length !== 2)
     return `It has ${cells.length} ${cells.length === 1 ? 'column' : 'columns'}, not two: azimuth and elevation.`;
-  const [azimuthDeg, elevationDeg] = cells.map(Number);
-  if (azimuthDeg === undefined || !Number.isFinite(azimuthDeg))
-    return `“${short(cells[0] ?? '')}” is no azimuth.`;
-  if (elevationDeg === undefined || !Number.isFinite(elevationDeg))
-    return `“${short(cells[1] ?? '')}” is no elevation.`;
+  const [azimuthDeg, elevationDeg] = [numberIn(first), numberIn(second)];
+  if (azimuthDeg === null) return `“${short(first)}” is no azimuth.`;
+  if (elevationDeg === null) return `“${short(second)}” is no elevation.`;
   if (azimuthDeg < -180 || azimuthDeg > 360) return 'The azimuth is outside −180° to 360°.';
   if (elevationDeg < 0 || elevationDeg > 90) return 'The elevation is outside 0° to 90°.';
-  return null;
+  return { azimuthDeg: normalise360(azimuthDeg), elevationDeg };
 }
 
 const short = (text: string) => (text.length > LONGEST ? `${text.slice(0, LONGEST)}…` : text);

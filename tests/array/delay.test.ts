@@ -2,9 +2,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { fringeRateHz, geometricDelay } from '@/src/array/delay';
 import { baselineUvw } from '@/src/array/uvw';
-import { geodeticToItrf } from '@/src/sky/site';
 import { EARTH_ROTATION_RAD_PER_S, SPEED_OF_LIGHT } from '@/src/units/constants';
 import delay from '../reference/delay.json';
+import { anyInstantMs, anyPlace, anySource } from './place-maker';
 
 // Truth: ERFA c2t06a with the catalogue direction (reference/delay.json), so annual aberration is the difference.
 const TOLERANCE = {
@@ -66,20 +66,8 @@ describe('geometricDelay', () => {
   });
 
   it('closes around a triangle, delay and rate', () => {
-    const place = fc
-      .record({
-        latitudeDeg: fc.double({ min: -90, max: 90, noNaN: true }),
-        longitudeDeg: fc.double({ min: -180, max: 180, noNaN: true }),
-        heightM: fc.double({ min: 0, max: 5000, noNaN: true }),
-      })
-      .map(geodeticToItrf);
-    const anySource = fc.record({
-      raDeg: fc.double({ min: 0, max: 360, noNaN: true }),
-      decDeg: fc.double({ min: -90, max: 90, noNaN: true }),
-    });
-    const instant = fc.integer({ min: Date.UTC(2026, 0), max: Date.UTC(2040, 0) });
     fc.assert(
-      fc.property(place, place, place, anySource, instant, (a, b, c, source, ms) => {
+      fc.property(anyPlace, anyPlace, anyPlace, anySource, anyInstantMs, (a, b, c, source, ms) => {
         const at = new Date(ms);
         const sides = [
           geometricDelay(a, b, source, at),

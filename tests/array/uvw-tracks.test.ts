@@ -6,6 +6,7 @@ import { delayTracks, uvTracks, uvwTracks } from '@/src/array/uvw-tracks';
 import { baselineUvw } from '@/src/array/uvw';
 import { geodeticToItrf } from '@/src/sky/site';
 import { EARTH_ROTATION_RAD_PER_S, SPEED_OF_LIGHT } from '@/src/units/constants';
+import { anyInstantMs, anyPlace, anySource } from './place-maker';
 
 // Truth: the exact functions, themselves against ERFA (uvw.test.ts, delay.test.ts).
 const TOLERANCE = {
@@ -15,51 +16,46 @@ const TOLERANCE = {
   roundingM: 1e-8,
 };
 
-const place = fc
-  .record({
-    latitudeDeg: fc.double({ min: -90, max: 90, noNaN: true }),
-    longitudeDeg: fc.double({ min: -180, max: 180, noNaN: true }),
-    heightM: fc.double({ min: 0, max: 5000, noNaN: true }),
-  })
-  .map(geodeticToItrf);
-const source = fc.record({
-  raDeg: fc.double({ min: 0, max: 360, noNaN: true }),
-  decDeg: fc.double({ min: -90, max: 90, noNaN: true }),
-});
-const startMs = fc.integer({ min: Date.UTC(2026, 0), max: Date.UTC(2040, 0) });
 const days = fc.double({ min: 0, max: 9, noNaN: true });
 const dut1Seconds = fc.double({ min: -0.9, max: 0.9, noNaN: true });
 
 describe('tracks', () => {
   it('are baselineUvw and geometricDelay at every instant, baseline-major, in any order of time', () => {
-    const places = fc.array(place, { minLength: 2, maxLength: 4 });
+    const places = fc.array(anyPlace, { minLength: 2, maxLength: 4 });
     const offsets = fc.array(days, { minLength: 1, maxLength: 6 });
     fc.assert(
-      fc.property(places, source, startMs, offsets, dut1Seconds, (at, s, fromMs, offsetDays, dut1) => {
-        const opts = { dut1Seconds: dut1 };
-        const timesMs = offsetDays.map((day) => Math.round(fromMs + day * 86_400_000));
-        const tracks = uvwTracks(at, s, timesMs, opts);
-        const delays = delayTracks(at, s, timesMs, opts);
-        let index = 0;
-        at.forEach((first, one) =>
-          at.slice(one + 1).forEach((second) =>
-            timesMs.forEach((ms) => {
-              const exact = baselineUvw(first, second, s, new Date(ms), opts);
-              const delay = geometricDelay(first, second, s, new Date(ms), opts);
-              const allowedM = TOLERANCE.relative * baselineLengthM(first, second) + TOLERANCE.roundingM;
-              for (const axis of ['u', 'v', 'w'] as const) {
-                expect(Math.abs((tracks[axis][index] ?? NaN) - exact[axis])).toBeLessThan(allowedM);
-              }
-              const [seconds, rate] = [delays.seconds[index] ?? NaN, delays.rate[index] ?? NaN];
-              const allowed = allowedM / SPEED_OF_LIGHT;
-              expect(Math.abs(seconds - delay.seconds)).toBeLessThan(allowed);
-              expect(Math.abs(rate - delay.rate)).toBeLessThan(allowed * EARTH_ROTATION_RAD_PER_S);
-              index += 1;
-            }),
-          ),
-        );
-        expect(tracks.u).toHaveLength(index);
-      }),
+      fc.property(
+        places,
+        anySource,
+        anyInstantMs,
+        offsets,
+        dut1Seconds,
+        (at, s, fromMs, offsetDays, dut1) => {
+          const opts = { dut1Seconds: dut1 };
+          const timesMs = offsetDays.map((day) => Math.round(fromMs + day * 86_400_000));
+          const tracks = uvwTracks(at, s, timesMs, opts);
+          const delays = delayTracks(at, s, timesMs, opts);
+          let index = 0;
+          at.forEach((first, one) =>
+            at.slice(one + 1).forEach((second) =>
+              timesMs.forEach((ms) => {
+                const exact = baselineUvw(first, second, s, new Date(ms), opts);
+                const delay = geometricDelay(first, second, s, new Date(ms), opts);
+                const allowedM = TOLERANCE.relative * baselineLengthM(first, second) + TOLERANCE.roundingM;
+                for (const axis of ['u', 'v', 'w'] as const) {
+                  expect(Math.abs((tracks[axis][index] ?? NaN) - exact[axis])).toBeLessThan(allowedM);
+                }
+                const [seconds, rate] = [delays.seconds[index] ?? NaN, delays.rate[index] ?? NaN];
+                const allowed = allowedM / SPEED_OF_LIGHT;
+                expect(Math.abs(seconds - delay.seconds)).toBeLessThan(allowed);
+                expect(Math.abs(rate - delay.rate)).toBeLessThan(allowed * EARTH_ROTATION_RAD_PER_S);
+                index += 1;
+              }),
+            ),
+          );
+          expect(tracks.u).toHaveLength(index);
+        },
+      ),
     );
   });
 

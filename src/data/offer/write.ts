@@ -21,6 +21,7 @@ import { queueMail, sendQueued, unsentOf, type Queued } from '../mail/outbox';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { StoredSnapshot } from './read';
 import { saveOffer, type OfferRow } from './save';
+import { isEnded } from '../../schedule/ended';
 
 const input = z.strictObject({
   /** made by the client: the same offer is made once */
@@ -85,7 +86,7 @@ async function store(tx: Tx, viewer: Viewer, key: string, made: z.output<typeof 
 }
 
 function refuseWhere(session: SessionRow, { answerByMs }: z.output<typeof input>): void {
-  if (session.state === 'closed' || session.state === 'cancelled') {
+  if (isEnded(session.state)) {
     const message = `${session.code} is ${session.state}: nothing more is offered.`;
     throw new Refusal({ ok: false, code: 'conflict', message });
   }

@@ -15,6 +15,7 @@ import { parsed } from '../input';
 import { newestSnapshot } from '../offer/read';
 import { fetchSession } from '../session/scope';
 import { outcomesOf, REASONS, wordOn, type Outcome, type OutcomeDto } from './read';
+import { isEnded } from '../../schedule/ended';
 
 const common = {
   actId: z.string().regex(ID_PATTERN, 'This has no id. Load the page again.'),
@@ -61,7 +62,7 @@ export const sayOutcome = (
       const where = and(eq(scanOutcomes.sessionId, session.id), eq(scanOutcomes.actId, said.actId));
       const known = (await tx.$count(scanOutcomes, where)) > 0;
       if (!known) {
-        if (session.state === 'closed' || session.state === 'cancelled') {
+        if (isEnded(session.state)) {
           const message = `${session.code} is ${session.state}: what was said of its scans stays.`;
           throw new Refusal({ ok: false, code: 'conflict', message });
         }

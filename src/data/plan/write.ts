@@ -18,6 +18,7 @@ import { commandOf, decideStep, findAct, readChanges, readSteps, revsOf, subject
 import { readSubjects, readTouched } from './rows';
 import { saveDifference } from './save';
 import { changeSentence, subjectWords } from './sentences';
+import { isEnded } from '../../schedule/ended';
 
 type Acting = { tx: Tx; session: SessionRow; viewer: Viewer; role: string };
 type Ready = {
@@ -47,7 +48,7 @@ export async function takeIn(tx: Tx, viewer: Viewer, key: string, act: ActInput)
   const acting = { tx, session, viewer, role };
   const known = await findAct(tx, session.id, act.actId);
   if (known) return resent(acting, known);
-  if (session.state === 'closed' || session.state === 'cancelled') {
+  if (isEnded(session.state)) {
     throw conflict({ reason: 'closed', message: `${session.code} is ${session.state}: its plan stays.` });
   }
   return take(acting, act.kind === 'do' ? await readyDo(acting, act) : await readyStep(acting, act));

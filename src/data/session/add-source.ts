@@ -5,10 +5,10 @@ import { transact } from '../../../db/client';
 import { sessionSources } from '../../../db/schema/session-sources';
 import { sessions } from '../../../db/schema/sessions';
 import { sources } from '../../../db/schema/sources';
-import { can, type Viewer } from '../../access/policy';
-import { answer, forbiddenFor, notFound, Refusal, type Failure } from '../errors';
+import type { Viewer } from '../../access/policy';
+import { answer, notFound, Refusal, type Failure } from '../errors';
 import { parsed } from '../input';
-import { fetchSession, subjectOf } from './scope';
+import { fetchEditable } from './editable';
 
 const input = z.strictObject({ sourceId: z.string().max(32) });
 
@@ -21,12 +21,7 @@ export const addSessionSource = (
   answer(async () => {
     const { sourceId } = parsed(input, body);
     return transact(async (tx) => {
-      const session = await fetchSession(tx, viewer, key);
-      if (!can(viewer, 'session.edit', subjectOf(session))) throw forbiddenFor('session.edit');
-      if (session.state === 'closed' || session.state === 'cancelled') {
-        const message = `${session.code} is ${session.state}: open it again before it is changed.`;
-        throw new Refusal({ ok: false, code: 'conflict', message });
-      }
+      const session = await fetchEditable(tx, viewer, key);
       const [source] = await tx.select().from(sources).where(eq(sources.id, sourceId));
       if (!source) throw notFound('That source is not in the catalogue.');
       if (source.retiredAtMs !== null) {

@@ -20,7 +20,9 @@ import { answer, forbiddenFor, invalid, Refusal, type Failure } from '../errors'
 import { parsed } from '../input';
 import { oneOf } from '../plan/rows';
 import { takeIn } from '../plan/write';
+import { fetchEditable } from './editable';
 import { fetchSession, subjectOf, type SessionRow } from './scope';
+import { isEnded } from '../../schedule/ended';
 
 const id = z.string().regex(ID_PATTERN, 'The form has no id. Load the page again.');
 const block = z.record(z.string().max(40), z.string().max(4000));
@@ -147,8 +149,8 @@ export const setSessionState = (
     return transact(async (tx) => {
       const session = await fetchSession(tx, viewer, key);
       if (!can(viewer, 'session.edit', subjectOf(session))) throw forbiddenFor('session.edit');
-      const isEnded = session.state === 'closed' || session.state === 'cancelled';
-      if (isEnded === (state !== 'open')) {
+      const isOver = isEnded(session.state);
+      if (isOver === (state !== 'open')) {
         const message = `${session.code} is ${session.state} already.`;
         throw new Refusal({ ok: false, code: 'conflict', message });
       }
@@ -168,16 +170,6 @@ async function openState(tx: Tx, sessionId: string): Promise<SessionRow['state']
     FROM offers WHERE session_id = ${sessionId}`);
   if (!row || row.offered === 0) return 'draft';
   return row.published > 0 ? 'published' : 'offered';
-}
-
-async function fetchEditable(tx: Tx, viewer: Viewer, key: string): Promise<SessionRow> {
-  const session = await fetchSession(tx, viewer, key);
-  if (!can(viewer, 'session.edit', subjectOf(session))) throw forbiddenFor('session.edit');
-  if (session.state === 'closed' || session.state === 'cancelled') {
-    const message = `${session.code} is ${session.state}: open it again before it is changed.`;
-    throw new Refusal({ ok: false, code: 'conflict', message });
-  }
-  return session;
 }
 
 function valuesOf(typed: SessionTyped): SessionValues {

@@ -15,6 +15,7 @@ import { componentsOf, readModes, readSources, readStations } from '../plan/cont
 import { fluxOf } from '../plan/flux';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { Nearby, NearbySource } from './dto';
+import { isEnded } from '../../schedule/ended';
 
 /** More than this nobody reads. */
 const NEARBY_MOST = 40;
@@ -42,14 +43,14 @@ export const readNearby = (
     if (!target) throw notFound(`That source is not one of ${session.code}’s.`);
     const found = nearby(target.position, await readCalibrators(sourceId), within);
     const kept = found.slice(0, NEARBY_MOST);
-    const isEnded = session.state === 'closed' || session.state === 'cancelled';
+    const isOver = isEnded(session.state);
     return {
       ok: true,
       nearby: {
         withinDeg: within,
         sources: await weighed(session, target.position, kept, new Set(own.map(({ id }) => id))),
         more: found.length - kept.length,
-        canAdd: !isEnded && can(viewer, 'session.edit', subjectOf(session)),
+        canAdd: !isOver && can(viewer, 'session.edit', subjectOf(session)),
       },
     };
   });

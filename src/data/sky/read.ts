@@ -21,6 +21,7 @@ import { fluxOf } from '../plan/flux';
 import { headOf } from '../session/head';
 import { fetchSession, subjectOf, type SessionRow } from '../session/scope';
 import type { SkySheet, SkySource, StartSheet } from './dto';
+import { isEnded } from '../../schedule/ended';
 
 /** Elevations, windows and common windows of a session's sources over its span. */
 export const readSky = (viewer: Viewer, key: string): Promise<{ ok: true; table: SkyTable } | Failure> =>
@@ -93,8 +94,8 @@ async function startsOf(
 }
 
 async function moveOf(viewer: Viewer, session: SessionRow): Promise<StartSheet['move']> {
-  const isEnded = session.state === 'closed' || session.state === 'cancelled';
-  if (isEnded || !can(viewer, 'plan.edit', subjectOf(session))) return null;
+  const isOver = isEnded(session.state);
+  if (isOver || !can(viewer, 'plan.edit', subjectOf(session))) return null;
   // the legs of a nodding group stand as one, as on the timeline
   const placed = await db()
     .select({

@@ -12,6 +12,7 @@ import { answer, forbiddenFor, invalid, notFound, Refusal, type Failure } from '
 import { parsed } from '../input';
 import { fetchSession } from '../session/scope';
 import { answersOf, type StationAnswer } from './answers';
+import { isEnded } from '../../schedule/ended';
 
 const REASON = 'Say why, so that the scheduler can plan around it.';
 const actId = z.string().regex(ID_PATTERN, 'The answer has no id. Load the page again.');
@@ -54,8 +55,7 @@ export const replySlot = (
       const isOwn = viewer.grants.some((held) => held.role === 'operator' && held.stationCode === station);
       const where = and(eq(slotReplies.sessionId, session.id), eq(slotReplies.actId, said.actId));
       if ((await tx.$count(slotReplies, where)) > 0) return { ok: true, answer: slot };
-      if (session.state === 'closed' || session.state === 'cancelled')
-        throw conflict(`${session.code} is ${session.state}: answers are closed.`);
+      if (isEnded(session.state)) throw conflict(`${session.code} is ${session.state}: answers are closed.`);
       if (said.offerId !== slot.offerId)
         throw conflict('The plan was offered anew meanwhile. Look at the new slot and answer that.');
       await tx.insert(slotReplies).values({

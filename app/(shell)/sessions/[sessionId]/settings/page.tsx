@@ -7,6 +7,7 @@ import { SessionForm } from '../../_form/session-form';
 import { SessionFrame } from '../_head/session-frame';
 import { StateBox } from './_settings/state-box';
 import { edit } from './actions';
+import { isEnded } from '@/src/schedule/ended';
 
 export const metadata: Metadata = { title: 'Session' };
 
@@ -21,12 +22,12 @@ export default async function SettingsPage({ params }: { params: Promise<{ sessi
   const { form } = answer;
   if (!form.session) notFound();
   const { session } = form;
-  const isEnded = session.state === 'closed' || session.state === 'cancelled';
+  const isOver = isEnded(session.state);
   return (
     <SessionFrame viewer={viewer} session={session} nowMs={form.nowMs}>
       <div className="flex min-h-0 flex-1 flex-col desk:overflow-y-auto">
         <StateBox session={session} />
-        {isEnded ? (
+        {isOver ? (
           <p className="px-6 py-4.5">
             {session.code} is {session.state}: its plan, the answers and what was said of its scans stay as
             they are. Open it again to change it.

@@ -4,12 +4,14 @@ import { useRef, useState, type ChangeEvent } from 'react';
 import { Dialog } from '@/app/_ui/dialog';
 import type { StationDto } from '@/src/data/station/dto';
 import type { TypedRow } from '@/src/exchange/catalogue/block';
+import { STATION_BLOCKS } from '@/src/exchange/catalogue/station';
 import type { Corner } from '@/src/exchange/catalogue/station-site';
 import { HORIZON_FILE_MOST, readHorizonFile, type HorizonFile } from '@/src/exchange/horizon-file';
 import { limitsOf } from './horizon-view';
 import { MaskDrawing } from './mask-drawing';
 
 const SHOWN = 8;
+const COLUMNS = STATION_BLOCKS.horizon.rows.horizon.columns;
 
 type Props = { station: StationDto; rows: readonly TypedRow[]; onRows: (rows: TypedRow[]) => void };
 
@@ -145,17 +147,14 @@ function Preview({ file, station, onClose, onTake }: PreviewProps) {
   );
 }
 
-/** A row as a corner, where both its cells are numbers that a corner can have. */
+/** A row as a corner, where both its cells can be read. */
 function cornerOf(row: TypedRow): Corner | null {
-  const [azimuthDeg, elevationDeg] = [row.azimuthDeg, row.elevationDeg].map((text = '') =>
-    text.trim() === '' ? NaN : Number(text.replace('\u2212', '-').replace(',', '.')),
-  );
-  if (azimuthDeg === undefined || elevationDeg === undefined) return null;
-  const isOne = azimuthDeg >= 0 && azimuthDeg < 360 && elevationDeg >= 0 && elevationDeg <= 90;
-  return isOne ? { azimuthDeg, elevationDeg } : null;
+  const azimuth = COLUMNS.azimuthDeg.read(row.azimuthDeg ?? '');
+  const elevation = COLUMNS.elevationDeg.read(row.elevationDeg ?? '');
+  return azimuth.ok && elevation.ok ? { azimuthDeg: azimuth.value, elevationDeg: elevation.value } : null;
 }
 
 const rowOf = ({ azimuthDeg, elevationDeg }: Corner): TypedRow => ({
-  azimuthDeg: String(azimuthDeg),
-  elevationDeg: String(elevationDeg),
+  azimuthDeg: COLUMNS.azimuthDeg.write(azimuthDeg),
+  elevationDeg: COLUMNS.elevationDeg.write(elevationDeg),
 });

@@ -7,6 +7,7 @@ import { reach } from '@/app/_ui/reach';
 import { showToast } from '@/app/_ui/toast';
 import type { SessionHead } from '@/src/data/session/dto';
 import { setState } from '../actions';
+import { isEnded } from '@/src/schedule/ended';
 
 type Ask = 'closed' | 'cancelled';
 
@@ -28,7 +29,7 @@ export function StateBox({ session }: { session: SessionHead }) {
   const [asked, setAsked] = useState<Ask | null>(null);
   const [trouble, setTrouble] = useState<string | null>(null);
   const [isSending, setIsSending] = useState(false);
-  const isEnded = session.state === 'closed' || session.state === 'cancelled';
+  const isOver = isEnded(session.state);
   const go = async (state: Ask | 'open') => {
     if (isSending) return;
     setIsSending(true);
@@ -50,7 +51,7 @@ export function StateBox({ session }: { session: SessionHead }) {
         </p>
       )}
       <div className="ml-auto flex gap-2">
-        {isEnded ? (
+        {isOver ? (
           <button type="button" className="btn" aria-disabled={isSending} onClick={() => void go('open')}>
             Open it again
           </button>

@@ -3,6 +3,7 @@
 import { useId, useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { dayText, minuteText, numberText } from '@/app/_ui/format';
 import type { SkySheet } from '@/src/data/sky/dto';
+import { numberIn, numberOut } from '@/src/exchange/catalogue/field';
 import { bestStart, startHours, type StartHours } from '@/src/schedule/best-start';
 import type { StationCode } from '@/src/schedule/plan';
 import { clockText } from '@/src/schedule/words';
@@ -13,6 +14,7 @@ import { StartChart } from './start-chart';
 
 const HOUR_MS = 3_600_000;
 const DEFAULT_HOURS = 12;
+const LEAST_HOURS = 0.2;
 
 type Props = { sheet: SkySheet; codes: readonly StationCode[] };
 
@@ -23,7 +25,7 @@ export function BestStart({ sheet, codes }: Props) {
   const longest = starts.longestSeconds / 3600;
   // a session of a whole day is as good at any start
   const [typed, setTyped] = useState(
-    numberText(sessionHours < 24 ? sessionHours : DEFAULT_HOURS, 2).replace(/\.?0+$/, ''),
+    numberOut(sessionHours < 24 ? Number(sessionHours.toFixed(2)) : DEFAULT_HOURS),
   );
   const [chosenMs, setChosenMs] = useState<number | null>(null);
   const { boxRef, width } = useWidth();
@@ -143,7 +145,7 @@ function Words({ targets, areTargets, typed, onTyped, longest, isWrong }: WordsP
       </p>
       {isWrong ? (
         <p id={`${id}-wrong`} role="alert" className="font-strong text-verm">
-          Type hours from 0.2 to {numberText(longest)}.
+          Type hours from {LEAST_HOURS} to {numberText(longest)}.
         </p>
       ) : (
         <>
@@ -174,8 +176,8 @@ function weigh(
 }
 
 function readHours(typed: string, longest: number): number | null {
-  const hours = Number(typed.trim().replace(',', '.'));
-  return typed.trim() !== '' && hours >= 0.2 && hours <= longest ? hours : null;
+  const hours = numberIn(typed);
+  return hours !== null && hours >= LEAST_HOURS && hours <= longest ? hours : null;
 }
 
 function nearest(starts: readonly StartHours[], ms: number): StartHours | null {

@@ -8,6 +8,7 @@ import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
 import { useSending } from '@/app/_ui/use-sending';
 import type { Failure } from '@/src/data/errors';
+import { numberIn } from '@/src/exchange/catalogue/field';
 import type { Nearby, NearbySource, SkySheet, SkySource } from '@/src/data/sky/dto';
 import { addSource } from '../actions';
 
@@ -160,8 +161,8 @@ function Add({ sheet, chosen, onAdded }: { sheet: SkySheet; chosen: NearbySource
 }
 
 function readDegrees(typed: string): number | null {
-  const degrees = Number(typed.trim().replace(',', '.'));
-  return typed.trim() !== '' && degrees > 0 && degrees <= 180 ? degrees : null;
+  const degrees = numberIn(typed);
+  return degrees !== null && degrees > 0 && degrees <= 180 ? degrees : null;
 }
 
 async function readNearby(address: string): Promise<Nearby> {

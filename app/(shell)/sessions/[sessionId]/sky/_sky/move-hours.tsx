@@ -1,11 +1,12 @@
 'use client';
 
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { Dialog } from '@/app/_ui/dialog';
 import { dayText, spanText } from '@/app/_ui/format';
 import { newId } from '@/app/_ui/new-id';
 import { showToast } from '@/app/_ui/toast';
 import { Trouble } from '@/app/_ui/trouble';
+import { useActId } from '@/app/_ui/use-act-id';
 import { useSending } from '@/app/_ui/use-sending';
 import type { SkySheet, StartSheet } from '@/src/data/sky/dto';
 import { SPAN_SUBJECT } from '@/src/schedule/commands';
@@ -19,18 +20,17 @@ type Props = { session: SkySheet['session']; move: NonNullable<StartSheet['move'
 export function MoveHours({ session, move, to }: Props) {
   const [isAsked, setIsAsked] = useState(false);
   const { trouble, isSending, send } = useSending();
-  const actId = useRef<string | null>(null);
+  const act = useActId();
   const isThere = to.startMs === session.startMs && to.lengthSeconds === session.lengthSeconds;
   const isSame = to.lengthSeconds === session.lengthSeconds;
   const label = `Start at ${clockText(to.startMs)}`;
 
   const go = async () => {
-    actId.current ??= newId();
     const command = { verb: 'change-span', edits: [{ kind: 'change-span', span: to }] };
-    const body = { kind: 'do', actId: actId.current, command, seen: { [SPAN_SUBJECT]: move.spanRev } };
+    const body = { kind: 'do', actId: act.idOf(to), command, seen: { [SPAN_SUBJECT]: move.spanRev } };
     const answer = await send(() => moveHours(session.id, body));
-    if (answer) actId.current = null;
     if (!answer?.ok) return;
+    act.forget();
     setIsAsked(false);
     showToast({
       message: `${session.code} starts on day ${dayText(to.startMs)} at ${clockText(to.startMs)}, for ${spanText(to.lengthSeconds)}.`,
