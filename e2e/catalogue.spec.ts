@@ -201,6 +201,7 @@ test('a mask is taken from a file after a look, dragged, and left as it was; pat
   const page = await pageAs('admin');
   await page.goto('/stations/Dp');
   await page.getByLabel('Path of', { exact: true }).selectOption({ label: 'J0827+5217' });
+  await page.getByRole('button', { name: 'Draw' }).click();
   await expect(page.getByRole('button', { name: 'Take the path of J0827+5217 away' })).toBeVisible();
 
   await page.getByRole('button', { name: 'Edit: Horizon mask' }).click();

@@ -223,7 +223,10 @@ export const PAGES: readonly ShownPage[] = [
     heading: /^Drum Point$/,
     act: async (page) => {
       const choice = page.getByLabel('Path of', { exact: true });
-      for (const label of ['J0530+1331', 'J0827+5217', 'J1058+0133']) await choice.selectOption({ label });
+      for (const label of ['J0530+1331', 'J0827+5217', 'J1058+0133']) {
+        await choice.selectOption({ label });
+        await press('Draw')(page);
+      }
     },
   },
   {

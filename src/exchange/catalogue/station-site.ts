@@ -54,6 +54,9 @@ const ITRF = ['itrfX', 'itrfY', 'itrfZ'] as const;
 const LEAST_RADIUS_M = 6_300_000;
 const MOST_RADIUS_M = 6_420_000;
 
+/** On the screen a minus is a minus. */
+const shown = (text: string) => text.replaceAll('-', '\u2212');
+
 export const position: Block<PositionValues> = {
   title: 'Identity and position',
   keep: 'Keep position',
@@ -93,10 +96,12 @@ export const position: Block<PositionValues> = {
   note: (value) => {
     const place = placeOf(value);
     if (value.positionKind === 'itrf') {
-      return `Latitude ${place.latitudeDeg.toFixed(6)}°, longitude ${place.longitudeDeg.toFixed(6)}°, height ${place.heightM.toFixed(2)} m follow.`;
+      return shown(
+        `Latitude ${place.latitudeDeg.toFixed(6)}°, longitude ${place.longitudeDeg.toFixed(6)}°, height ${place.heightM.toFixed(2)} m follow.`,
+      );
     }
     const { x, y, z } = geodeticToItrf(place);
-    return `ITRF X ${x.toFixed(2)}, Y ${y.toFixed(2)}, Z ${z.toFixed(2)} m follow.`;
+    return shown(`ITRF X ${x.toFixed(2)}, Y ${y.toFixed(2)}, Z ${z.toFixed(2)} m follow.`);
   },
 };
 

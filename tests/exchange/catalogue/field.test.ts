@@ -143,7 +143,9 @@ describe('a position', () => {
       positionEpoch: null,
     };
     expect(placeOf(geodetic)).toEqual({ latitudeDeg: 45.612, longitudeDeg: -109.874, heightM: 1420 });
-    expect(STATION_BLOCKS.position.note?.(geodetic)).toMatch(/^ITRF X -\d+\.\d\d, Y -\d+\.\d\d, Z \d+/);
+    expect(STATION_BLOCKS.position.note?.(geodetic)).toMatch(
+      /^ITRF X \u2212\d+\.\d\d, Y \u2212\d+\.\d\d, Z \d+/,
+    );
     expect(() => placeOf({ ...geodetic, heightM: null })).toThrow(RangeError);
   });
 });

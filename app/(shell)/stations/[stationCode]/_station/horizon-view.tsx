@@ -68,19 +68,30 @@ type ChoiceProps = {
 
 function PathChoice({ sources, chosen, onChoose }: ChoiceProps) {
   const id = useId();
+  // chosen first and drawn by the button: arrow keys run through the list without drawing each
+  const [picked, setPicked] = useState('');
   const ids = chosen.map((one) => one.id);
   const left = sources.filter((one) => !ids.includes(one.id));
   if (sources.length === 0) return null;
   return (
-    <div className="mt-2 flex flex-wrap items-center gap-1.5">
+    <form
+      className="mt-2 flex flex-wrap items-center gap-1.5"
+      aria-label="Paths over the mask"
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (picked === '') return;
+        onChoose([...ids, picked]);
+        setPicked('');
+      }}
+    >
       <label className="help" htmlFor={id}>
         Path of
       </label>
       <select
         id={id}
         className="field w-[150px]"
-        value=""
-        onChange={({ target }) => target.value !== '' && onChoose([...ids, target.value])}
+        value={picked}
+        onChange={({ target }) => setPicked(target.value)}
       >
         <option value="">Choose a source</option>
         {left.map(({ id: value, name }) => (
@@ -89,6 +100,9 @@ function PathChoice({ sources, chosen, onChoose }: ChoiceProps) {
           </option>
         ))}
       </select>
+      <button type="submit" className="btn" aria-disabled={picked === ''}>
+        Draw
+      </button>
       {chosen.map(({ id: value, name }) => (
         <button
           key={value}
@@ -100,7 +114,7 @@ function PathChoice({ sources, chosen, onChoose }: ChoiceProps) {
           {name} <span aria-hidden="true">×</span>
         </button>
       ))}
-    </div>
+    </form>
   );
 }
 

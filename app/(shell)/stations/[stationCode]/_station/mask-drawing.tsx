@@ -9,7 +9,14 @@ import { Compass, Limits, placeIn, RIM, Rings, SIZE, spotIn, type Polar } from '
 /** The centre of a drawing without tracks stands for this elevation, or for more where the mask is higher. */
 const CENTRE_DEG = 45;
 const STEP_DEG = 2;
-const NAME_STEPS = [0, -24, 24, -36, 36] as const;
+/** Where names stand: steps of hour angle from the meridian, and above or below the line. */
+const NAMES = [
+  { step: 0, dy: -4 },
+  { step: -22, dy: -4 },
+  { step: 22, dy: 13 },
+  { step: -30, dy: 13 },
+  { step: 30, dy: -4 },
+] as const;
 
 export type SkyPath = { id: string; name: string; decDeg: number };
 
@@ -147,8 +154,9 @@ function Path({ polar, path, at, latitudeDeg, floorAt, highestDeg }: PathProps) 
     );
     (isSeen ? seen : hidden).push(`M${from}L${to}`);
   });
-  // names stand at different hour angles, so that they do not cover each other
-  const aside = points[90 + (NAME_STEPS[at % NAME_STEPS.length] ?? 0)];
+  // so that they do not cover each other
+  const { step, dy } = NAMES[at % NAMES.length] ?? NAMES[0];
+  const aside = points[90 + step];
   const named = aside && aside.elevationDeg > 5 ? aside : best;
   const [x, y] = placeIn(polar, named.azimuthDeg, named.elevationDeg);
   return (
@@ -156,8 +164,8 @@ function Path({ polar, path, at, latitudeDeg, floorAt, highestDeg }: PathProps) 
       <path d={hidden.join('')} fill="none" stroke="var(--ink3)" strokeWidth={1} strokeDasharray="2 2" />
       <path d={seen.join('')} fill="none" stroke="var(--teal)" strokeWidth={1.75} />
       <text
-        x={Math.max(30, Math.min(SIZE - 30, x))}
-        y={y - 4}
+        x={Math.max(56, Math.min(SIZE - 56, x))}
+        y={y + dy}
         fontSize={10}
         fontWeight={600}
         textAnchor="middle"

@@ -52,7 +52,7 @@ export function BestStart({ sheet, codes }: Props) {
   const said = chosen ? sayStart(chosen, scale, codes.length, hours ?? 0) : '';
 
   return (
-    <section className={`${ROW} relative border-ink border-t-sheet bg-sheet py-1`} aria-label="Best start">
+    <section className={`${ROW} relative border-t-head border-ink bg-sheet py-1`} aria-label="Best start">
       <Words
         targets={starts.windows.length}
         areTargets={starts.areTargets}

@@ -29,7 +29,7 @@ export function Elevation({ sheet, source, codes, scale, atMs }: Props) {
     null,
   );
   return (
-    <section className={`${ROW} border-b border-rule bg-sheet py-1`} aria-label="Elevation">
+    <section className={`${ROW} bg-sheet py-1`} aria-label="Elevation">
       <div className="min-w-0 desk:pl-[16px] desk:pr-[30px]">
         <h2 className="text-lead">Elevation</h2>
         <p className="text-small font-head text-teal">{source.name}</p>
